@@ -1,0 +1,56 @@
+export const ITEM_CATEGORIES = [
+  'boxes', 'holiday', 'sports-and-travel', 'nursery', 'bedroom', 'living-room', 'dining-and-kitchen',
+  'appliances', 'office', 'tools', 'yard', 'building-equipment', 'other',
+] as const
+export type ItemCategory = typeof ITEM_CATEGORIES[number]
+
+/** catalogue: from the table of typical weights; estimate: size times contents, or a person's own range; weighed: on a scale. */
+export const WEIGHT_SOURCES = ['catalogue', 'estimate', 'weighed'] as const
+export type WeightSource = typeof WEIGHT_SOURCES[number]
+
+export const ITEM_OWNERS = ['landlord', 'tenant'] as const
+export type ItemOwner = typeof ITEM_OWNERS[number]
+
+export const CONFIDENCES = ['high', 'medium', 'low'] as const
+export type Confidence = typeof CONFIDENCES[number]
+
+/** Weight of one piece. A weighed item has all three equal. */
+export interface ItemWeightRange { weightSource: WeightSource, lowLb: number, typicalLb: number, highLb: number }
+
+/** Where a pile stands in its field: x along the joists from one bearing wall, y across them. Null until placed. */
+export interface ItemPlacement { fieldId: string, xFt: number, yFt: number }
+
+export interface AtticItem extends ItemWeightRange {
+  id: string
+  atticId: string
+  /** Key of the catalogue row; null for a custom item. */
+  catalogueKey: string | null
+  label: string
+  category: ItemCategory
+  count: number
+  /** Footprint of the whole pile: length along the joists, width across them. */
+  lengthFt: number
+  widthFt: number
+  heightFt: number | null
+  placement: ItemPlacement | null
+  owner: ItemOwner
+  addedOn: string
+  removedOn: string | null
+  note: string | null
+}
+
+/** One row of the catalogue of typical weights. */
+export interface CatalogueItem {
+  key: string
+  label: string
+  category: ItemCategory
+  lowLb: number
+  typicalLb: number
+  highLb: number
+  volumeFt3: number | null
+  source: string
+  confidence: Confidence
+  note: string | null
+  /** 'each', or 'square-foot' where the weight is per area covered. */
+  per: 'each' | 'square-foot' | 'linear-foot'
+}
