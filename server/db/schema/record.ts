@@ -1,0 +1,43 @@
+import type { Day, Defaulted, Instant, Json } from '../schema'
+
+export interface RecordTables {
+  recordChain: RecordChainTable
+  recordEntry: RecordEntryTable
+  recordCheckpoint: RecordCheckpointTable
+}
+
+export interface RecordChainTable {
+  chainId: string
+  organisationId: string
+  unitId: string | null
+  entries: Defaulted<number>
+  headHash: string
+}
+
+export interface RecordEntryTable {
+  id: string
+  organisationId: string
+  unitId: string | null
+  chainId: string
+  seq: number
+  recordedAt: Instant
+  actorId: string | null
+  actorName: string
+  action: string
+  subjectKind: string
+  subjectId: string
+  before: Json<object> | null
+  after: Json<object> | null
+  previousHash: string
+  hash: string
+}
+
+export interface RecordCheckpointTable {
+  id: string
+  organisationId: string
+  madeOn: Day
+  chains: number
+  entries: number
+  hash: string
+  createdAt: Instant
+}
