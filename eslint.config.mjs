@@ -6,6 +6,7 @@ export default withNuxt(
       '@typescript-eslint/no-explicit-any': 'error',
       'max-lines': ['error', { max: 300, skipBlankLines: false, skipComments: false }],
       'vue/multi-word-component-names': 'off',
+      '@stylistic/max-statements-per-line': ['error', { max: 2 }],
     },
   },
   {

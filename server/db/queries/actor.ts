@@ -1,0 +1,52 @@
+import { sql } from 'kysely'
+import type { Db } from '../connect'
+import type { Role } from '../../../shared/types/people'
+import { dayIn } from '../../utils/clock'
+
+/** Who asks, in which organisation, with which role; unitIds are the units that are theirs (tenant, engineer, trades). */
+export interface Actor {
+  userId: string
+  name: string
+  email: string
+  organisationId: string
+  role: Role
+  unitIds: string[]
+  timeZone: string
+}
+
+export interface SessionIdentity { userId: string, epoch: number, organisationId?: string }
+
+/**
+ * The asker as a member of an organisation; undefined when the session has ended elsewhere or they are no member.
+ * Without an organisation the first membership is taken.
+ */
+export async function findActor(db: Db, identity: SessionIdentity, organisationId = identity.organisationId): Promise<Actor | undefined> {
+  const row = await db.selectFrom('appUser as u')
+    .innerJoin('membership as m', 'm.userId', 'u.id')
+    .innerJoin('organisation as o', 'o.id', 'm.organisationId')
+    .select(['u.id as userId', 'u.name', 'u.email', 'm.organisationId', 'm.role', 'o.timeZone'])
+    .where('u.id', '=', identity.userId).where('u.sessionEpoch', '=', identity.epoch).where('m.endedAt', 'is', null)
+    .$if(organisationId !== undefined, query => query.where('m.organisationId', '=', organisationId!))
+    .orderBy('m.createdAt').limit(1).executeTakeFirst()
+  if (!row) return undefined
+  const whole = row.role === 'owner' || row.role === 'manager'
+  return { ...row, unitIds: whole ? [] : await findUnitIds(db, row.organisationId, row.userId, row.role, dayIn(row.timeZone)) }
+}
+
+async function findUnitIds(db: Db, organisationId: string, userId: string, role: Role, today: string): Promise<string[]> {
+  if (role === 'trades') return []
+  const rows = role === 'tenant'
+    ? await db.selectFrom('tenancyPerson as p').innerJoin('tenancy as t', 't.id', 'p.tenancyId')
+        .select('t.unitId').distinct()
+        .where('p.userId', '=', userId).where('p.organisationId', '=', organisationId)
+        .where('t.startsOn', '<=', sql<string>`${today}::date + 14`)
+        .where(eb => eb.or([eb('t.endsOn', 'is', null), eb('t.endsOn', '>=', today)])).execute()
+    : await db.selectFrom('unitAccess').select('unitId')
+        .where('userId', '=', userId).where('organisationId', '=', organisationId)
+        .where(eb => eb.or([eb('untilOn', 'is', null), eb('untilOn', '>=', today)])).execute()
+  return rows.map(row => row.unitId)
+}
+
+/** For lists: 'all' for people who see the whole portfolio, otherwise their units. */
+export const visibleUnits = (actor: Actor): 'all' | string[] =>
+  actor.role === 'owner' || actor.role === 'manager' ? 'all' : actor.unitIds

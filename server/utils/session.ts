@@ -1,0 +1,17 @@
+import type { H3Event } from 'h3'
+import type { SessionIdentity } from '../db/queries/actor'
+
+declare module '#auth-utils' {
+  interface User { id: string, epoch: number }
+  interface UserSession { organisationId?: string }
+}
+
+/** Who the sealed cookie says this is. The epoch is held against the database by findActor. */
+export async function sessionIdentity(event: H3Event): Promise<SessionIdentity | undefined> {
+  const { user, organisationId } = await getUserSession(event)
+  return user ? { userId: user.id, epoch: user.epoch, organisationId } : undefined
+}
+
+export async function openSession(event: H3Event, user: { id: string, sessionEpoch: number }, organisationId?: string) {
+  await replaceUserSession(event, { user: { id: user.id, epoch: user.sessionEpoch }, organisationId })
+}
