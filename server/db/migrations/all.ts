@@ -5,6 +5,7 @@ import * as attics from './0003Attics'
 import * as ceilings from './0004Ceilings'
 import * as upkeep from './0005Upkeep'
 import * as record from './0006Record'
+import * as mailAttempts from './0007MailAttempts'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -14,4 +15,5 @@ export const migrations: Record<string, Migration> = {
   '0004Ceilings': ceilings,
   '0005Upkeep': upkeep,
   '0006Record': record,
+  '0007MailAttempts': mailAttempts,
 }

@@ -93,6 +93,7 @@ export interface MessageTable {
   dedupeKey: string
   state: Defaulted<'queued' | 'sent' | 'failed'>
   attempts: Defaulted<number>
+  nextAttemptAt: Instant
   lastError: string | null
   createdAt: Instant
   sentAt: Instant | null
