@@ -1,12 +1,7 @@
 export default defineNuxtConfig({
-  compatibilityDate: '2026-11-01',
-  srcDir: '.',
-  serverDir: 'server',
-  dir: { app: '.', shared: 'shared', public: 'public', modules: 'modules' },
-  ignore: ['.data/**', '.test/**', '.output/**', 'tests/**', 'fakes/**', 'scripts/**', 'coverage/**'],
   modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils'],
   components: [{ path: '~/components', pathPrefix: false }],
-  css: ['~/assets/css/main.css', '~/assets/css/print.css'],
+  devtools: { enabled: false },
   app: {
     head: {
       htmlAttrs: { lang: 'en' },
@@ -19,16 +14,24 @@ export default defineNuxtConfig({
       link: [{ rel: 'icon', type: 'image/svg+xml', href: '/favicon.svg' }],
     },
   },
+  css: ['~/assets/css/main.css', '~/assets/css/print.css'],
   runtimeConfig: {
     session: { name: 'lathkey-session', password: '', maxAge: 60 * 60 * 24 * 30 },
   },
-  typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
-  devtools: { enabled: false },
-  telemetry: false,
-  tailwindcss: { viewer: false, cssPath: '~/assets/css/main.css', exposeConfig: false },
-  eslint: { config: { stylistic: { semi: false, quotes: 'single', commaDangle: 'always-multiline' } } },
+  dir: { app: '.', shared: 'shared', public: 'public', modules: 'modules' },
+  srcDir: '.',
+  serverDir: 'server',
+  // Tests build into folders of their own, so that a running program keeps its files.
+  buildDir: process.env.LATHKEY_BUILD_DIR || '.nuxt',
+  ignore: ['.data/**', '.test/**', '.output/**', 'tests/**', 'fakes/**', 'scripts/**', 'coverage/**'],
+  compatibilityDate: '2026-11-01',
   nitro: {
     preset: 'node-server',
+    output: { dir: process.env.LATHKEY_OUTPUT_DIR || '.output' },
     compressPublicAssets: { gzip: true, brotli: true },
   },
+  typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
+  telemetry: false,
+  eslint: { config: { stylistic: { semi: false, quotes: 'single', commaDangle: 'always-multiline' } } },
+  tailwindcss: { viewer: false, cssPath: '~/assets/css/main.css', exposeConfig: false },
 })

@@ -1,0 +1,42 @@
+import { accessSync, constants } from 'node:fs'
+import { delimiter, join } from 'node:path'
+import { Refusal } from './refusal.mjs'
+
+/** @param {string} name @returns {string | undefined} */
+export function findProgram(name, path = process.env.PATH ?? '') {
+  return path.split(delimiter).filter(Boolean).map(folder => join(folder, name)).find(isExecutable)
+}
+
+/** @param {string} path */
+export function isExecutable(path) {
+  try {
+    accessSync(path, constants.X_OK)
+    return true
+  }
+  catch {
+    return false
+  }
+}
+
+export const mayInstall = () => process.getuid?.() === 0 && findProgram('apt-get') !== undefined
+
+/**
+ * @param {object} options
+ * @param {string[]} options.packages
+ * @param {ReturnType<typeof import('./keeper.mjs').createKeeper>} options.keeper
+ * @param {(line: string) => void} options.say
+ */
+export async function installDebianPackages({ packages, keeper, say }) {
+  const apt = parameters => keeper.run('apt-get', parameters, {
+    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' }, cwd: '/', stdio: ['ignore', 'ignore', 'inherit'], graceMs: 30_000,
+  })
+  say(`Installing ${packages.join(', ')} from Debian's packages …`)
+  const steps = [
+    ['-qq', 'update'],
+    ['-qq', 'install', '-y', '--no-install-recommends', '-o', 'Dpkg::Options::=--force-confold', ...packages],
+  ]
+  for (const parameters of steps) {
+    const code = await apt(parameters)
+    if (code !== 0) throw new Refusal(`apt-get ${parameters[1]} failed (code ${code}). Its message is above. Install ${packages.join(' and ')} by hand, then run the command again.`)
+  }
+}
