@@ -48,9 +48,11 @@ export interface CatalogueItem {
   typicalLb: number
   highLb: number
   volumeFt3: number | null
+  /** 'mover-rule': typical weight over 7 lb/ft³, as the source's own figures are made. */
+  volumeFrom: 'size' | 'mover-rule'
   source: string
   confidence: Confidence
   note: string | null
-  /** 'each', or 'square-foot' where the weight is per area covered. */
+  /** What one piece is. */
   per: 'each' | 'square-foot' | 'linear-foot'
 }

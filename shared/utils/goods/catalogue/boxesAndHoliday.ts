@@ -1,0 +1,28 @@
+import { CARTON, DOD, MEMORY, row } from './catalogueRow'
+
+export const BOXES_AND_HOLIDAY = [
+  row('carton-of-books', 'Carton of books', 'boxes', [31, 45, 58], 1.5, DOD, 'medium'),
+  row('small-carton-1-5-ft3-mixed-goods', 'Small carton 1.5 ft³, mixed goods', 'boxes', [15, 25, 45], 1.5, CARTON, 'medium', { note: '15 lb of light goods to 45 lb of books or tools' }),
+  row('medium-carton-3-0-ft3-mixed-goods', 'Medium carton 3.0 ft³, mixed goods', 'boxes', [15, 30, 50], 3.0, CARTON, 'medium'),
+  row('large-carton-4-5-ft3-light-goods', 'Large carton 4.5 ft³, light goods', 'boxes', [15, 32, 55], 4.5, CARTON, 'medium'),
+  row('extra-large-carton-6-0-ft3-bedding', 'Extra-large carton 6.0 ft³, bedding', 'boxes', [15, 30, 60], 6.0, CARTON, 'medium', { note: 'bedding is lighter than the 7 lb rule' }),
+  row('dish-carton-6-2-ft3-dishes', 'Dish carton 6.2 ft³, dishes', 'boxes', [40, 60, 85], 6.2, CARTON, 'low'),
+  row('wardrobe-carton-of-clothes', 'Wardrobe carton of clothes', 'boxes', [31, 45, 63], null, DOD, 'medium'),
+  row('copier-paper-case-of-10-reams', 'Copier paper, case of 10 reams', 'boxes', [49, 50, 52], 0.85, 'computed: 20 lb basis weight is 500 sheets of 17 × 22 in, so a letter ream is 5 lb', 'high'),
+  row('file-box-1-25-ft3-full-of-paper', 'File box 1.25 ft³, full of paper', 'boxes', [25, 33, 45], 1.25, MEMORY, 'medium', { note: 'dense: paper 25-35 lb/ft³ as packed' }),
+  row('magazines-per-foot-of-shelf', 'Magazines, per foot of shelf', 'boxes', [22, 30, 40], 0.75, MEMORY, 'low', { note: 'coated paper is heavier than books', per: 'linear-foot' }),
+  row('vinyl-records-per-foot-of-shelf-about-75', 'Vinyl records, per foot of shelf (about 75)', 'boxes', [30, 38, 45], 1.0, MEMORY, 'medium', { note: 'about 0.5 lb each with sleeve', per: 'linear-foot' }),
+  row('photo-albums-or-scrapbooks-1-5-ft3-box', 'Photo albums or scrapbooks, 1.5 ft³ box', 'boxes', [25, 35, 50], 1.5, MEMORY, 'low'),
+  row('plastic-tote-27-gal-mixed-household', 'Plastic tote 27 gal, mixed household', 'boxes', [20, 40, 80], 3.6, '27 gal = 3.6 ft³ (231 in³ a gallon); weight from memory', 'low', { note: 'contents vary most here: ask' }),
+  row('plastic-tote-18-gal-clothes', 'Plastic tote 18 gal, clothes', 'boxes', [15, 25, 40], 2.4, '18 gal = 2.4 ft³ (231 in³ a gallon); weight from memory', 'low'),
+  row('plastic-tote-27-gal-holiday-decorations', 'Plastic tote 27 gal, holiday decorations', 'holiday', [15, 25, 40], 3.6, MEMORY, 'low'),
+  row('plastic-tote-27-gal-full-of-books', 'Plastic tote 27 gal, full of books', 'boxes', [90, 110, 140], 3.6, 'computed: 3.6 ft³ × 30 lb/ft³ of packed books', 'medium', { note: 'exceeds a one-person lift' }),
+  row('vacuum-bag-bedding', 'Vacuum-bag bedding', 'boxes', [8, 15, 25], 2.0, MEMORY, 'low'),
+  row('artificial-tree-6-5-ft-unlit', 'Artificial tree 6.5 ft unlit', 'holiday', [9, 11, 25], 6.0, 'trade page for 11.2 lb; range from memory', 'medium'),
+  row('artificial-tree-7-5-ft-pre-lit', 'Artificial tree 7.5 ft pre-lit', 'holiday', [25, 42, 65], 9.0, MEMORY, 'low'),
+  row('artificial-tree-9-ft-pre-lit', 'Artificial tree 9 ft pre-lit', 'holiday', [50, 70, 110], 14.0, MEMORY, 'low'),
+  row('ornament-box', 'Ornament box', 'holiday', [5, 12, 20], 2.0, MEMORY, 'low'),
+  row('outdoor-light-strings-tote', 'Outdoor light strings, tote', 'holiday', [10, 20, 35], 2.4, MEMORY, 'low'),
+  row('inflatable-yard-figure', 'Inflatable yard figure', 'holiday', [5, 10, 18], 1.5, MEMORY, 'low'),
+  row('ceramic-figures-box', 'Ceramic figures, box', 'holiday', [15, 30, 50], 2.0, MEMORY, 'low'),
+] as const

@@ -1,0 +1,44 @@
+import { dayFromNumber } from '../days'
+import { ACTIVITY_LEAST_DAYS, ACTIVITY_LEAST_READINGS } from './activity'
+import { leastSquares } from './leastSquares'
+import { seasonColumns } from './seasonFit'
+import { DAYS_PER_YEAR, yearsOf, type SeriesPoint } from './series'
+
+/** Ours: a reading is worth planning between a week and a quarter after the last one. */
+const SOONEST_DAYS = 7
+const LATEST_DAYS = 91
+/** Ours: an earlier day is taken when it gives this share of what the best day would give. */
+const GOOD_ENOUGH_SHARE = 0.9
+
+/**
+ * Variance of the slope with a season, after readings at these times. The season's size is taken as known to about half its
+ * allowance (two extra rows), so that there is an answer before a full year exists.
+ */
+function slopeVariance(years: readonly number[], sigma: number, seasonAllowance: number): number {
+  const prior = sigma / Math.max(seasonAllowance / 2, sigma)
+  const columns = seasonColumns(years).map((column, i) => [...column, i === 2 ? prior : 0, i === 3 ? prior : 0])
+  return leastSquares(columns, columns[0]!)?.unitVariances[1] ?? Infinity
+}
+
+/** Day the next reading tells most about the rate: the earliest nearly as good as the best within a quarter. */
+export function nextBestReadingOn(points: readonly SeriesPoint[], sigma: number, seasonAllowance: number): string | null {
+  const last = points.at(-1)
+  if (!last) return null
+  const first = points[0]!
+  const missing = ACTIVITY_LEAST_READINGS - points.length
+  if (missing > 0) {
+    const daysLeft = Math.max(0, first.day + ACTIVITY_LEAST_DAYS - last.day)
+    return dayFromNumber(last.day + Math.max(SOONEST_DAYS, Math.ceil(daysLeft / missing)))
+  }
+  const years = yearsOf(points)
+  const lastYear = years.at(-1)!
+  const now = slopeVariance(years, sigma, seasonAllowance)
+  const gains: { days: number, gain: number }[] = []
+  for (let days = SOONEST_DAYS; days <= LATEST_DAYS; days += 7) {
+    const after = slopeVariance([...years, lastYear + days / DAYS_PER_YEAR], sigma, seasonAllowance)
+    gains.push({ days, gain: now === Infinity ? 1 / after : now - after })
+  }
+  const best = Math.max(...gains.map(option => option.gain))
+  const chosen = gains.find(option => option.gain >= GOOD_ENOUGH_SHARE * best)!
+  return dayFromNumber(last.day + chosen.days)
+}

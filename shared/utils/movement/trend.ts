@@ -1,0 +1,133 @@
+import { addDays, dayFromNumber } from '../days'
+import type { Activity } from '../../types/mark'
+import { ACTIVITY_LEAST_DAYS, ACTIVITY_LEAST_READINGS, activityOf, DEFAULT_SEASON_ALLOWANCE_MM, DORMANT_WITHIN_PER_YEAR } from './activity'
+import { detectableRate, type DetectableRate } from './detectableRate'
+import { mannKendall, varianceOfS, type MannKendall } from './mannKendall'
+import { nextBestReadingOn } from './nextBestReading'
+import { Z_975 } from './normal'
+import { seasonFit, type SeasonFit } from './seasonFit'
+import { DAYS_PER_YEAR, seriesOf, seriesSigma, spanDaysOf, timeSumOfSquares, yearsOf, type SeriesPoint, type TrendReading } from './series'
+import { LEAST_JUMP_MM, suddenRises, type SuddenRise } from './sudden'
+import { medianOf, theilSen } from './theilSen'
+
+/** In the unit of the readings; the defaults are for crack widths and sags in mm. */
+export interface TrendOptions { seasonAllowance?: number, dormantWithinPerYear?: number, leastJump?: number }
+
+interface TrendBasis {
+  readingCount: number
+  spanDays: number
+  sigma: number | null
+  mannKendall: MannKendall | null
+  /** Set when the newest reading jumped. */
+  sudden: SuddenRise | null
+  suddenRises: SuddenRise[]
+  detectable: DetectableRate | null
+  nextBestOn: string | null
+}
+
+export interface TooFewReadings extends TrendBasis {
+  kind: 'too few readings'
+  activity: Extract<Activity, 'too-few-readings'>
+  /** How many readings a verdict asks for, and how many are missing. */
+  needed: number
+  missing: number
+  /** The first day the readings can span long enough; null without any reading. */
+  enoughOn: string | null
+}
+
+export interface MeasuredTrend extends TrendBasis {
+  kind: 'measured'
+  activity: Exclude<Activity, 'too-few-readings'>
+  sigma: number
+  mannKendall: MannKendall
+  slopePerYear: number
+  interval: [number, number]
+  /** Value of the trend line on the first day. */
+  levelAtStart: number
+  startOn: string
+  endOn: string
+  rise: number
+  /** Null below 12 months or 8 readings: not yet separable from the season. */
+  season: SeasonFit | null
+  /** The first day on which the trend was already active with the readings up to then. */
+  activeSince: string | null
+}
+
+export type MarkTrend = TooFewReadings | MeasuredTrend
+
+type Settings = Required<TrendOptions>
+
+function basisOf(points: SeriesPoint[], settings: Settings): TrendBasis {
+  const sigma = points.length === 0 ? null : seriesSigma(points)
+  const rises = suddenRises(points, settings.leastJump)
+  const lastOn = points.length === 0 ? null : dayFromNumber(points.at(-1)!.day)
+  return {
+    readingCount: points.length,
+    spanDays: spanDaysOf(points),
+    sigma,
+    mannKendall: mannKendall(points.map(point => point.value)),
+    sudden: rises.find(rise => rise.takenOn === lastOn) ?? null,
+    suddenRises: rises,
+    detectable: sigma === null ? null : detectableRate(points, sigma, settings.seasonAllowance),
+    nextBestOn: sigma === null ? null : nextBestReadingOn(points, sigma, settings.seasonAllowance),
+  }
+}
+
+function enough(points: SeriesPoint[]): boolean {
+  return points.length >= ACTIVITY_LEAST_READINGS && spanDaysOf(points) >= ACTIVITY_LEAST_DAYS
+}
+
+function judge(points: SeriesPoint[], settings: Settings) {
+  const years = yearsOf(points)
+  const values = points.map(point => point.value)
+  const sigma = seriesSigma(points)
+  const test = mannKendall(values)!
+  const slope = theilSen(years, values, varianceOfS(values), Z_975 * sigma / Math.sqrt(timeSumOfSquares(years)))!
+  const spanDays = spanDaysOf(points)
+  const rise = slope.slopePerYear * spanDays / DAYS_PER_YEAR
+  const season = seasonFit(points)
+  const activity = activityOf({ spanDays, sigma, slope, mannKendall: test, season, rise, ...settings })
+  const levelAtStart = medianOf(values.map((value, i) => value - slope.slopePerYear * years[i]!))
+  return { activity, sigma, mannKendall: test, ...slope, levelAtStart, rise, season }
+}
+
+/** Walks back from the newest reading while each earlier look was active too. */
+function activeSinceOf(points: SeriesPoint[], settings: Settings): string {
+  let count = points.length
+  while (enough(points.slice(0, count - 1)) && judge(points.slice(0, count - 1), settings).activity === 'active') count--
+  return dayFromNumber(points[count - 1]!.day)
+}
+
+/**
+ * Trend of one segment of a mark's readings (a repair starts a new segment), in the readings' unit a year of 365.25 days.
+ * Sources: Gilbert 1987 and EPA QA/G-9S for slope and test; the activity rule is ours. Throws RangeError on unsound readings.
+ */
+export function markTrend(readings: readonly TrendReading[], options: TrendOptions = {}): MarkTrend {
+  const settings: Settings = {
+    seasonAllowance: options.seasonAllowance ?? DEFAULT_SEASON_ALLOWANCE_MM,
+    dormantWithinPerYear: options.dormantWithinPerYear ?? DORMANT_WITHIN_PER_YEAR,
+    leastJump: options.leastJump ?? LEAST_JUMP_MM,
+  }
+  const points = seriesOf(readings)
+  const basis = basisOf(points, settings)
+  const first = points[0]
+  if (!first || !enough(points)) {
+    return {
+      ...basis,
+      kind: 'too few readings',
+      activity: 'too-few-readings',
+      needed: ACTIVITY_LEAST_READINGS,
+      missing: Math.max(0, ACTIVITY_LEAST_READINGS - points.length),
+      enoughOn: first ? addDays(dayFromNumber(first.day), ACTIVITY_LEAST_DAYS) : null,
+    }
+  }
+  const judged = judge(points, settings)
+  return {
+    ...basis,
+    ...judged,
+    kind: 'measured',
+    startOn: dayFromNumber(first.day),
+    endOn: dayFromNumber(points.at(-1)!.day),
+    activeSince: judged.activity === 'active' ? activeSinceOf(points, settings) : null,
+  }
+}
