@@ -1,4 +1,4 @@
-import type { AtticClass, Condition, DocumentKind, Framing, Grade, InsulationMaterial, Size, Species, StampedGrade } from './attic.ts'
+import type { AtticClass, Condition, DocumentKind, Framing, Grade, InsulationMaterial, Size, Species, StampedGrade } from './attic'
 
 /** What decided the rating. */
 export const RATING_BASES = ['hold', 'document', 'framing', 'class', 'joists', 'unverified'] as const

@@ -1,5 +1,5 @@
-import type { AtticClass, AtticSurvey, CodeBasis } from '../../types/attic.ts'
-import type { ClassReason } from '../../types/atticRating.ts'
+import type { AtticClass, AtticSurvey, CodeBasis } from '../../types/attic'
+import type { ClassReason } from '../../types/atticRating'
 
 /** IRC 2018/2021 Table R301.5, live load, psf. Local amendments may ask for more, such as 40 in a habitable attic. */
 export const IRC_R301_5: CodeBasis = {

@@ -1,9 +1,9 @@
-import type { AtticSurvey } from '../../types/attic.ts'
-import type { JoistAssumption } from '../../types/atticRating.ts'
+import type { AtticSurvey } from '../../types/attic'
+import type { JoistAssumption } from '../../types/atticRating'
 import {
   BOARD_INSULATION_LIMITS, CEILING_PSF, DEAD_PSF_WITHOUT_STORAGE, DEAD_PSF_WITH_STORAGE, DECK_PSF,
   INSULATION_DEPTH_ASSUMED_IN, INSULATION_PSF_PER_IN, LUMBER_LB_PER_FT3,
-} from './deadLoadValues.ts'
+} from './deadLoadValues'
 
 export type AtticBuildUp = Pick<AtticSurvey, 'ceilingFinish' | 'insulation' | 'deck'>
 

@@ -1,4 +1,4 @@
-import type { CeilingFinish, InsulationMaterial } from '../../types/attic.ts'
+import type { CeilingFinish, InsulationMaterial } from '../../types/attic'
 
 const ASCE = 'ASCE 7 Table C3.1-1'
 const ASCE_MEMORY = 'ASCE 7 Table C3.1-1, from memory'

@@ -1,14 +1,14 @@
-import type { AtticSurvey, JoistField, Species, StampedGrade } from '../../types/attic.ts'
-import type { CapacityLimit, JoistAssumption, JoistCapacity, JoistCapacityAnswer, JoistMeasure } from '../../types/atticRating.ts'
-import { GREATEST_SLENDERNESS, beamStability, effectiveLengthIn, needsTopEdgeHeld } from './beamStability.ts'
-import { deadLoad } from './deadLoad.ts'
-import type { LumberValues } from './lumber.ts'
-import { NO_STAMP, lumberValues, sectionProperties, sizeClassOf } from './lumber.ts'
-import { DRESSED_SIZES } from './lumberValues.ts'
+import type { AtticSurvey, JoistField, Species, StampedGrade } from '../../types/attic'
+import type { CapacityLimit, JoistAssumption, JoistCapacity, JoistCapacityAnswer, JoistMeasure } from '../../types/atticRating'
+import { GREATEST_SLENDERNESS, beamStability, effectiveLengthIn, needsTopEdgeHeld } from './beamStability'
+import { deadLoad } from './deadLoad'
+import type { LumberValues } from './lumber'
+import { NO_STAMP, lumberValues, sectionProperties, sizeClassOf } from './lumber'
+import { DRESSED_SIZES } from './lumberValues'
 import {
   BEARING_LENGTH_IN, CD_PERMANENT, CD_TEN_YEARS, CM_DRY, CT_ORDINARY, DEFLECTION_DIVISOR_FLEXIBLE, DEFLECTION_DIVISOR_PLASTER,
   REPETITIVE, repetitiveFactor,
-} from './ndsFactors.ts'
+} from './ndsFactors'
 
 export type CapacitySurvey = Pick<AtticSurvey, 'framing' | 'ceilingFinish' | 'insulation' | 'deck'>
 

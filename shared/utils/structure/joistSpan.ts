@@ -1,8 +1,8 @@
-import type { Size, Species, StampedGrade } from '../../types/attic.ts'
-import { lumberValues, sectionProperties } from './lumber.ts'
-import { DRESSED_SIZES } from './lumberValues.ts'
-import { REPETITIVE } from './ndsFactors.ts'
-import { StructureRefused, requireNotNegative, requirePositive } from './structureRefused.ts'
+import type { Size, Species, StampedGrade } from '../../types/attic'
+import { lumberValues, sectionProperties } from './lumber'
+import { DRESSED_SIZES } from './lumberValues'
+import { REPETITIVE } from './ndsFactors'
+import { StructureRefused, requireNotNegative, requirePositive } from './structureRefused'
 
 export interface JoistSpanInput {
   species: Species

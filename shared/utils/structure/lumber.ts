@@ -1,6 +1,6 @@
-import type { Size, Species, StampedGrade } from '../../types/attic.ts'
-import { CF_OVER_2X12, LUMBER, SIZE_CLASSES, SOUTHERN_PINE_BEFORE_JUNE_2013 } from './lumberValues.ts'
-import { StructureRefused } from './structureRefused.ts'
+import type { Size, Species, StampedGrade } from '../../types/attic'
+import { CF_OVER_2X12, LUMBER, SIZE_CLASSES, SOUTHERN_PINE_BEFORE_JUNE_2013 } from './lumberValues'
+import { StructureRefused } from './structureRefused'
 
 export type SizeClass = Size | 'over 2x12'
 

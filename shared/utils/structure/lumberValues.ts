@@ -1,4 +1,4 @@
-import type { Size, Species, StampedGrade } from '../../types/attic.ts'
+import type { Size, Species, StampedGrade } from '../../types/attic'
 
 const NDS_4A = 'NDS 2018 Supplement Table 4A'
 const NDS_4B = 'NDS 2018 Supplement Table 4B, in force from 2013-06-01'

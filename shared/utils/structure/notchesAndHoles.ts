@@ -1,6 +1,6 @@
-import type { AtticSurvey, Hole, JoistField, Notch } from '../../types/attic.ts'
-import type { HoldReason, HoleProblem, NotchProblem } from '../../types/atticRating.ts'
-import { sectionOf } from './joistCapacity.ts'
+import type { AtticSurvey, Hole, JoistField, Notch } from '../../types/attic'
+import type { HoldReason, HoleProblem, NotchProblem } from '../../types/atticRating'
+import { sectionOf } from './joistCapacity'
 
 /** IRC 2018 R502.8.1 and R802.7.1.1: notches and holes in sawn joists, as shares of the joist's depth. */
 export const CUT_LIMITS = {

@@ -1,11 +1,11 @@
-import type { AtticDocument, AtticSurvey, CodeBasis } from '../../types/attic.ts'
-import type { AtticRating, JoistCapacity, JoistCapacityAnswer, RatingCaution, RatingReason } from '../../types/atticRating.ts'
-import { IRC_R301_5, codeClass } from './codeClass.ts'
-import type { CodeClass } from './codeClass.ts'
-import { boardInsulationLimitPsf, insulationPsf } from './deadLoad.ts'
-import { joistCapacity, sectionOf } from './joistCapacity.ts'
-import { holdReasons } from './notchesAndHoles.ts'
-import { documentedRating, holdState } from './ratingDocuments.ts'
+import type { AtticDocument, AtticSurvey, CodeBasis } from '../../types/attic'
+import type { AtticRating, JoistCapacity, JoistCapacityAnswer, RatingCaution, RatingReason } from '../../types/atticRating'
+import { IRC_R301_5, codeClass } from './codeClass'
+import type { CodeClass } from './codeClass'
+import { boardInsulationLimitPsf, insulationPsf } from './deadLoad'
+import { joistCapacity, sectionOf } from './joistCapacity'
+import { holdReasons } from './notchesAndHoles'
+import { documentedRating, holdState } from './ratingDocuments'
 
 /** Most that is taken where nobody has measured the joists; ours, on the safe side: older houses were often framed for less. */
 export const UNVERIFIED_PSF = 10

@@ -1,5 +1,5 @@
-import type { AtticDocument, DocumentKind, Framing } from '../../types/attic.ts'
-import type { HoldReason, RatingCaution } from '../../types/atticRating.ts'
+import type { AtticDocument, DocumentKind, Framing } from '../../types/attic'
+import type { HoldReason, RatingCaution } from '../../types/atticRating'
 
 /** Papers that may state a rating, by framing. Trusses and unknown framing: only their drawings or an engineer. */
 const RATING_KINDS: Record<Framing, DocumentKind[]> = {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { beamStability, effectiveLengthIn } from '../../../shared/utils/structure/beamStability.ts'
-import { sectionProperties } from '../../../shared/utils/structure/lumber.ts'
+import { beamStability, effectiveLengthIn } from '../../../shared/utils/structure/beamStability'
+import { sectionProperties } from '../../../shared/utils/structure/lumber'
 
 // Published: American Wood Council, Structural Wood Design Examples, example E1.2a: 3.5 x 15.25 in, le 375 in,
 // Emin' 690,000 psi, Fb* 1,500 psi. Its printed le is 1.37 x 240 + 3 x 15.25 = 374.55 in (NDS 2018 Table 3.3.3, 20 ft

@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest'
-import { IRC_R301_5, codeClass } from '../../../shared/utils/structure/codeClass.ts'
-import { deflectionDivisor } from '../../../shared/utils/structure/joistCapacity.ts'
-import { KCR_DRY, KCR_GREEN_OR_DAMP, REPETITIVE } from '../../../shared/utils/structure/ndsFactors.ts'
-import { holeLimits, notchLimits } from '../../../shared/utils/structure/notchesAndHoles.ts'
-import { survey } from '../../unit/structure/surveys.ts'
+import { IRC_R301_5, codeClass } from '../../../shared/utils/structure/codeClass'
+import { deflectionDivisor } from '../../../shared/utils/structure/joistCapacity'
+import { KCR_DRY, KCR_GREEN_OR_DAMP, REPETITIVE } from '../../../shared/utils/structure/ndsFactors'
+import { holeLimits, notchLimits } from '../../../shared/utils/structure/notchesAndHoles'
+import { survey } from '../../unit/structure/surveys'
 
 // Published: IRC 2018 R502.8.1 and R802.7.1.1: notch d/6 deep and d/3 long, d/4 deep at the ends, hole d/3, 2 in from edges and holes.
 describe('notch and hole limits of IRC R502.8 and R802.7', () => {

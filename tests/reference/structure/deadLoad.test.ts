@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { CEILING_PSF, DEAD_PSF_WITHOUT_STORAGE, DEAD_PSF_WITH_STORAGE, DECK_PSF, INSULATION_PSF_PER_IN } from '../../../shared/utils/structure/deadLoadValues.ts'
-import { joistsPsf } from '../../../shared/utils/structure/deadLoad.ts'
-import { publishedTable } from './publishedTable.ts'
+import { CEILING_PSF, DEAD_PSF_WITHOUT_STORAGE, DEAD_PSF_WITH_STORAGE, DECK_PSF, INSULATION_PSF_PER_IN } from '../../../shared/utils/structure/deadLoadValues'
+import { joistsPsf } from '../../../shared/utils/structure/deadLoad'
+import { publishedTable } from './publishedTable'
 
 const rows = publishedTable('dead-loads.csv')
 const psf = (component: string): number => Number(rows.find(row => row.component === component)?.psf ?? Number.NaN)

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { GRADES, SIZES, SPECIES } from '../../../shared/types/attic.ts'
-import type { Size, Species, StampedGrade } from '../../../shared/types/attic.ts'
-import { maxJoistSpanIn } from '../../../shared/utils/structure/joistSpan.ts'
-import { publishedTable } from './publishedTable.ts'
+import { GRADES, SIZES, SPECIES } from '../../../shared/types/attic'
+import type { Size, Species, StampedGrade } from '../../../shared/types/attic'
+import { maxJoistSpanIn } from '../../../shared/utils/structure/joistSpan'
+import { publishedTable } from './publishedTable'
 
 // Published: International Residential Code 2018, Table R802.5.1(2), ceiling joists with limited storage, 19.2 in spacing.
 const rows = publishedTable('irc-r802.5.1-2-spans.csv')

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { SIZES } from '../../../shared/types/attic.ts'
-import { lumberValues, sectionProperties } from '../../../shared/utils/structure/lumber.ts'
-import { DRESSED_SIZES, LUMBER, SOUTHERN_PINE_BEFORE_JUNE_2013 } from '../../../shared/utils/structure/lumberValues.ts'
-import { publishedTable } from './publishedTable.ts'
+import { SIZES } from '../../../shared/types/attic'
+import { lumberValues, sectionProperties } from '../../../shared/utils/structure/lumber'
+import { DRESSED_SIZES, LUMBER, SOUTHERN_PINE_BEFORE_JUNE_2013 } from '../../../shared/utils/structure/lumberValues'
+import { publishedTable } from './publishedTable'
 
 // Published: NDS 2018 Supplement Table 1B, section properties of standard dressed sawn lumber (A in2, Sxx in3, Ixx in4).
 const TABLE_1B = [

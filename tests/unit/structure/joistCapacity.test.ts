@@ -1,11 +1,11 @@
 import { describe, expect, it } from 'vitest'
 import fc from 'fast-check'
-import { SIZES, SPECIES } from '../../../shared/types/attic.ts'
-import type { AtticSurvey, JoistField } from '../../../shared/types/attic.ts'
-import type { JoistCapacity } from '../../../shared/types/atticRating.ts'
-import { joistCapacity } from '../../../shared/utils/structure/joistCapacity.ts'
-import { maxJoistSpanIn } from '../../../shared/utils/structure/joistSpan.ts'
-import { joistField, survey } from './surveys.ts'
+import { SIZES, SPECIES } from '../../../shared/types/attic'
+import type { AtticSurvey, JoistField } from '../../../shared/types/attic'
+import type { JoistCapacity } from '../../../shared/types/atticRating'
+import { joistCapacity } from '../../../shared/utils/structure/joistCapacity'
+import { maxJoistSpanIn } from '../../../shared/utils/structure/joistSpan'
+import { joistField, survey } from './surveys'
 
 function capacity(field: Partial<JoistField> = {}, attic: Partial<AtticSurvey> = {}, overTenYears = false): JoistCapacity {
   const answer = joistCapacity(joistField(field), survey(attic), { withStorage: true, overTenYears })

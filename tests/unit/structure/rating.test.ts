@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import fc from 'fast-check'
-import { ACCESSES, CONDITIONS } from '../../../shared/types/attic.ts'
-import type { AtticDocument, AtticSurvey, Hole, Notch } from '../../../shared/types/attic.ts'
-import { rateAttic } from '../../../shared/utils/structure/rating.ts'
-import { joistField, paper, survey } from './surveys.ts'
+import { ACCESSES, CONDITIONS } from '../../../shared/types/attic'
+import type { AtticDocument, AtticSurvey, Hole, Notch } from '../../../shared/types/attic'
+import { rateAttic } from '../../../shared/utils/structure/rating'
+import { joistField, paper, survey } from './surveys'
 
 const rate = (change: Partial<AtticSurvey> = {}, documents: AtticDocument[] = []): ReturnType<typeof rateAttic> => rateAttic(survey(change), documents)
 const codesOf = (list: { code: string }[]): string[] => list.map(entry => entry.code)

@@ -1,4 +1,4 @@
-import type { AtticDocument, AtticSurvey, JoistField } from '../../../shared/types/attic.ts'
+import type { AtticDocument, AtticSurvey, JoistField } from '../../../shared/types/attic'
 
 /** An invented field: southern pine No. 2 2x8 at 16 in, 12 ft. */
 export function joistField(change: Partial<JoistField> = {}): JoistField {
