@@ -1,5 +1,5 @@
 import { sql } from 'kysely'
-import type { Trx } from '../connect'
+import type { Db, Trx } from '../connect'
 import { appendRecord, type RecordActor } from './appendRecord'
 import { clash, notFound } from '../../utils/problems'
 
@@ -36,3 +36,7 @@ export async function editRow<T extends { version: number }>(trx: Trx, actor: Re
 }
 
 const snake = (name: string) => name.replace(/[A-Z]/g, letter => `_${letter.toLowerCase()}`)
+
+/** The same in a transaction of its own, for edits that nothing else hangs on. */
+export const editRowAlone = <T extends { version: number }>(db: Db, actor: RecordActor, edit: Edit): Promise<T> =>
+  db.transaction().execute(trx => editRow<T>(trx, actor, edit))

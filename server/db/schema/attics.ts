@@ -1,3 +1,5 @@
+import type { AtticSurvey, DocumentKind } from '../../../shared/types/attic'
+import type { ItemCategory } from '../../../shared/types/item'
 import type { Day, Defaulted, Instant, Json } from '../schema'
 
 export interface AtticTables {
@@ -27,7 +29,7 @@ export interface AtticSurveyTable {
   unitId: string
   atticId: string
   surveyedOn: Day
-  answers: Json<object>
+  answers: Json<AtticSurvey>
   ratedPsf: number
   onHold: boolean
   basis: string
@@ -40,12 +42,13 @@ export interface AtticDocumentTable {
   organisationId: string
   unitId: string
   atticId: string
-  kind: 'engineer letter' | 'permit drawing' | 'truss drawing' | 'inspection record'
+  kind: DocumentKind
   ratedPsf: number | null
   liftsHold: Defaulted<boolean>
-  issuedOn: Day
-  issuedBy: string
-  covers: string
+  writtenOn: Day
+  writtenBy: string
+  coversWholeAttic: boolean
+  area: Defaulted<string>
   fileName: string
   mediaType: string
   byteLength: number
@@ -56,7 +59,7 @@ export interface AtticDocumentTable {
   withdrawnAt: Instant | null
 }
 
-/** Weights are of the whole line (all pieces together), in pounds; the place is from the field's first joist end. */
+/** Weights are of one piece, in pounds; the footprint is of the whole pile, its place from the field's first joist end. */
 export interface AtticItemTable {
   id: string
   organisationId: string
@@ -65,6 +68,7 @@ export interface AtticItemTable {
   fieldNumber: Defaulted<number>
   catalogueKey: string | null
   name: string
+  category: Defaulted<ItemCategory>
   quantity: Defaulted<number>
   lowLb: number
   typicalLb: number
@@ -75,6 +79,7 @@ export interface AtticItemTable {
   yFt: number
   lengthFt: number
   widthFt: number
+  heightFt: number | null
   placedOn: Day
   removedOn: Day | null
   notes: Defaulted<string>

@@ -1,0 +1,57 @@
+import { sql } from 'kysely'
+import type { Db } from '../connect'
+import type { AtticDocument } from '../../../shared/types/attic'
+
+/** The survey that holds now: the last one entered. */
+export const findLatestSurvey = (db: Db, atticId: string) =>
+  db.selectFrom('atticSurvey').selectAll().where('atticId', '=', atticId)
+    .orderBy('createdAt', 'desc').orderBy('id', 'desc').limit(1).executeTakeFirst()
+
+export const findSurveys = (db: Db, atticId: string) =>
+  db.selectFrom('atticSurvey as s').innerJoin('appUser as u', 'u.id', 's.surveyedBy')
+    .select(['s.id', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', 's.answers', 's.createdAt', 'u.name as surveyedByName'])
+    .where('s.atticId', '=', atticId).orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(50).execute()
+
+export const findItemsIn = (db: Db, atticId: string) =>
+  db.selectFrom('atticItem').selectAll().where('atticId', '=', atticId).where('removedOn', 'is', null)
+    .orderBy('createdAt').orderBy('id').execute()
+
+export const findDocuments = (db: Db, atticId: string) =>
+  db.selectFrom('atticDocument').selectAll().where('atticId', '=', atticId).where('withdrawnAt', 'is', null).orderBy('createdAt').execute()
+
+type DocumentRow = Awaited<ReturnType<typeof findDocuments>>[number]
+
+export const asAtticDocument = (row: DocumentRow): AtticDocument => ({
+  kind: row.kind, writtenOn: row.writtenOn, writtenBy: row.writtenBy, attached: true, ratedPsf: row.ratedPsf,
+  liftsHold: row.liftsHold, coversWholeAttic: row.coversWholeAttic, area: row.area,
+})
+
+export const findLoadEvents = (db: Db, atticId: string) =>
+  db.selectFrom('loadEvent as e').innerJoin('atticItem as i', 'i.id', 'e.itemId').innerJoin('appUser as u', 'u.id', 'e.recordedBy')
+    .select(['e.id', 'e.kind', 'e.happenedOn', 'e.deltaLb', 'e.totalAfterLb', 'e.detail', 'e.recordedAt', 'e.itemId', 'i.name as itemName', 'u.name as recordedByName'])
+    .where('e.atticId', '=', atticId).orderBy('e.happenedOn', 'desc').orderBy('e.recordedAt', 'desc').limit(500).execute()
+
+export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
+  const row = await db.selectFrom('atticItem').select(sql<string | null>`sum(quantity * typical_lb)`.as('lb'))
+    .where('atticId', '=', atticId).where('removedOn', 'is', null).executeTakeFirstOrThrow()
+  return Number(row.lb ?? 0)
+}
+
+export interface AtticListFilter { search?: string, after?: { name: string, id: string }, limit: number }
+
+/** Attics of the organisation by name, with their home and the latest survey; keyset-paged on (name, id). */
+export function listAttics(db: Db, organisationId: string, { search, after, limit }: AtticListFilter) {
+  return db.selectFrom('attic as a')
+    .innerJoin('unit as u', 'u.id', 'a.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
+    .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s').select(['s.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis'])
+      .whereRef('s.atticId', '=', 'a.id').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1).as('latest'), join => join.onTrue())
+    .leftJoinLateral(eb => eb.selectFrom('atticItem as i').select(i => [sql<number>`coalesce(sum(i.quantity * i.typical_lb), 0)`.as('storedLb'), i.fn.countAll<number>().as('itemCount')])
+      .whereRef('i.atticId', '=', 'a.id').where('i.removedOn', 'is', null).as('stored'), join => join.onTrue())
+    .select(['a.id', 'a.name', 'a.unitId', 'u.name as unitName', 'p.name as propertyName', 'a.inventoryConfirmedOn',
+      'latest.surveyedOn', 'latest.ratedPsf', 'latest.onHold', 'latest.basis', 'stored.storedLb', 'stored.itemCount'])
+    .where('a.organisationId', '=', organisationId).where('a.archivedAt', 'is', null)
+    .$if(Boolean(search), query => query.where(eb => eb.or(['a.name', 'u.name', 'p.name'].map(column => eb(sql.ref(column.replace(/([A-Z])/g, '_$1')), 'ilike', `%${search!.replace(/[\\%_]/g, '\\$&')}%`)))))
+    .$if(after !== undefined, query => query.where(sql<boolean>`(a.name, a.id) > (${after!.name}, ${after!.id}::uuid)`))
+    .orderBy('a.name').orderBy('a.id').limit(limit + 1).execute()
+}
+

@@ -1,0 +1,26 @@
+import { z } from 'zod'
+import { DOCUMENT_KINDS } from '../types/attic'
+import { cursor, day, longText, pageLimit, shortText, version } from './fields'
+
+export const AtticEdit = z.strictObject({ name: shortText('What do you call this attic?'), notes: longText(), version })
+
+/** The words that go with an uploaded paper; the file itself travels beside them. */
+export const AtticDocumentInput = z.strictObject({
+  kind: z.enum(DOCUMENT_KINDS, { error: 'What kind of paper is it?' }),
+  writtenOn: day('Which date is on it?'),
+  writtenBy: shortText('Who wrote it?', 200),
+  ratedPsf: z.number().min(0, 'Not less than 0 psf.').max(500, 'That is more than 500 psf. Is it in pounds per square foot?').nullable(),
+  liftsHold: z.boolean(),
+  coversWholeAttic: z.boolean(),
+  area: longText(500),
+}).refine(value => value.coversWholeAttic || value.area.length > 0, { path: ['area'], message: 'Which part does it cover?' })
+
+export type AtticDocumentValue = z.output<typeof AtticDocumentInput>
+
+export const VersionOnly = z.strictObject({ version })
+
+export const AtticListQuery = z.object({
+  search: z.string().trim().max(100).optional(),
+  after: cursor(z.object({ name: z.string(), id: z.uuid() })).optional(),
+  limit: pageLimit,
+})

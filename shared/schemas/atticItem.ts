@@ -1,0 +1,49 @@
+import { z } from 'zod'
+import { ITEM_CATEGORIES, ITEM_OWNERS, WEIGHT_SOURCES } from '../types/item'
+import { day, longText, measure, shortText, version } from './fields'
+
+const weightLb = (what: string) => z.number({ error: `Please give ${what} in pounds.` }).min(0, 'Not less than 0 lb.').max(20_000, 'That is more than 20,000 lb.')
+const placeFt = (what: string, max: number) => z.number({ error: `Please give ${what} in feet.` }).min(0, 'Not outside the wall.').max(max, `That is more than ${max} ft.`)
+
+const item = {
+  name: shortText('What is it?', 160),
+  catalogueKey: z.string().max(120).nullable(),
+  category: z.enum(ITEM_CATEGORIES),
+  quantity: z.int('A whole number, please.').min(1, 'At least one.').max(1000, 'At most 1,000 pieces in a line.'),
+  /** Of one piece. */
+  lowLb: weightLb('the least it may weigh'),
+  typicalLb: weightLb('what it weighs').refine(value => value > 0, 'More than 0 lb.'),
+  highLb: weightLb('the most it may weigh'),
+  weightSource: z.enum(WEIGHT_SOURCES),
+  belongsTo: z.enum(ITEM_OWNERS),
+  fieldNumber: z.int().min(1).max(20),
+  xFt: placeFt('the distance from the wall', 100),
+  yFt: placeFt('the place across the joists', 200),
+  lengthFt: measure('the length along the joists in feet', 40),
+  widthFt: measure('the width across the joists in feet', 40),
+  heightFt: measure('the height in feet', 20).nullable(),
+  notes: longText(2000),
+}
+
+const inOrder = (value: { lowLb: number, typicalLb: number, highLb: number }) => value.lowLb <= value.typicalLb && value.typicalLb <= value.highLb
+
+export const AtticItemInput = z.strictObject({ ...item, placedOn: day('When was it put there?') })
+  .refine(inOrder, { path: ['typicalLb'], message: 'Least, usual and most must be in that order.' })
+
+export const AtticItemEdit = z.strictObject({ ...item, happenedOn: day('When did this change?'), version })
+  .refine(inOrder, { path: ['typicalLb'], message: 'Least, usual and most must be in that order.' })
+
+/** Several moves saved at once from the load plan. */
+export const AtticItemMoves = z.strictObject({
+  happenedOn: day('When were they moved?'),
+  moves: z.array(z.strictObject({
+    itemId: z.uuid(), version, fieldNumber: item.fieldNumber, xFt: item.xFt, yFt: item.yFt, lengthFt: item.lengthFt, widthFt: item.widthFt,
+  })).min(1, 'Nothing was moved.').max(500),
+})
+
+export const AtticItemRemoval = z.strictObject({ removedOn: day('When was it taken out?'), version })
+export const InventoryConfirmation = z.strictObject({ confirmedOn: day('When did you look?') })
+
+export type AtticItemValue = z.output<typeof AtticItemInput>
+export type AtticItemEditValue = z.output<typeof AtticItemEdit>
+export type AtticItemMovesValue = z.output<typeof AtticItemMoves>

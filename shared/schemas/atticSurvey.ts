@@ -1,0 +1,76 @@
+import { z } from 'zod'
+import {
+  ACCESSES, CEILING_FINISHES, CONDITIONS, DECKS, FRAMINGS, GRADES, INSULATION_MATERIALS, NOTCH_EDGES, NOTCH_PLACES, SIZES, SPECIES,
+  type AtticSurvey,
+} from '../types/attic'
+import { day, measure, measureOrUnknown, shortText } from './fields'
+
+/** Longer than any joist this program judges; the span tables of the code end at 26 ft. */
+const LONGEST_SPAN_FT = 40
+
+const Notch = z.strictObject({
+  depthIn: measureOrUnknown('the depth of the notch in inches', 24),
+  lengthIn: measureOrUnknown('the length of the notch in inches', 240),
+  place: z.enum(NOTCH_PLACES),
+  edge: z.enum(NOTCH_EDGES),
+})
+
+const Hole = z.strictObject({
+  diameterIn: measureOrUnknown('the width of the hole in inches', 24),
+  edgeDistanceIn: z.number().min(0, 'Not less than 0.').max(24, 'That is more than 24 in.').nullable(),
+  nearestOtherIn: z.number().min(0, 'Not less than 0.').max(480, 'That is more than 480 in.').nullable(),
+})
+
+const Strongback = z.strictObject({
+  atFt: measure('the distance from the wall in feet', LONGEST_SPAN_FT),
+  size: z.enum(SIZES).nullable(),
+  breadthIn: measureOrUnknown('the thickness in inches', 12),
+  depthIn: measureOrUnknown('the depth in inches', 24),
+  sound: z.boolean().nullable(),
+  // Set by an engineer's opinion on file, never from the survey form.
+  engineerAccepts: z.literal(false),
+})
+
+export const JoistFieldInput = z.strictObject({
+  name: shortText('Please name this group of joists.', 80),
+  species: z.enum([...SPECIES, 'unknown']),
+  grade: z.enum([...GRADES, 'unknown']),
+  size: z.enum(SIZES).nullable(),
+  breadthIn: measureOrUnknown('the thickness in inches', 12),
+  depthIn: measureOrUnknown('the depth in inches', 24),
+  spacingIn: z.number().min(6, 'Joists stand at least 6 in apart.').max(60, 'That is more than 60 in. Measure from middle to middle, in inches.').nullable(),
+  spanFt: measureOrUnknown('the span in feet', LONGEST_SPAN_FT),
+  joistCount: z.int('A whole number, please.').min(1, 'At least one joist.').max(100, 'At most 100 joists in a group.').nullable(),
+  bearingLengthIn: measureOrUnknown('the bearing in inches', 24),
+  topEdgeBraced: z.boolean().nullable(),
+  installedBeforeJune2013: z.boolean().nullable(),
+  preJune2013StampProven: z.boolean(),
+  notches: z.array(Notch).max(40, 'At most 40 notches.'),
+  holes: z.array(Hole).max(40, 'At most 40 holes.'),
+  strongbacks: z.array(Strongback).max(10, 'At most 10 strongbacks.'),
+}).superRefine((field, context) => {
+  const { spanFt } = field
+  field.strongbacks.forEach((strongback, index) => {
+    if (spanFt !== null && strongback.atFt >= spanFt) context.addIssue({ code: 'custom', path: ['strongbacks', index, 'atFt'], message: 'The strongback must lie between the two walls.' })
+  })
+})
+
+/** A whole survey. Joists are taken only where there are joists: trusses never carry a joist field. */
+export const AtticSurveyInput = z.strictObject({
+  surveyedOn: day('When was the attic looked at?'),
+  framing: z.enum(FRAMINGS, { error: 'Which kind of roof framing is it? "Not sure" is an answer.' }),
+  access: z.enum(ACCESSES),
+  openingWidthIn: measureOrUnknown('the width of the opening in inches', 240),
+  openingLengthIn: measureOrUnknown('the length of the opening in inches', 240),
+  clearHeightIn: measureOrUnknown('the clear height in inches', 480),
+  habitable: z.boolean().nullable(),
+  ceilingFinish: z.enum(CEILING_FINISHES),
+  insulation: z.strictObject({ material: z.enum(INSULATION_MATERIALS), depthIn: z.number().min(0, 'Not less than 0.').max(60, 'That is more than 60 in.').nullable() }),
+  deck: z.enum(DECKS),
+  conditions: z.array(z.enum(CONDITIONS)).max(CONDITIONS.length).nullable(),
+  joistFields: z.array(JoistFieldInput).max(20, 'At most 20 groups of joists.'),
+}).superRefine((survey, context) => {
+  if (survey.framing !== 'rafters-and-joists' && survey.joistFields.length > 0) {
+    context.addIssue({ code: 'custom', path: ['joistFields'], message: 'Joists are entered only for rafters with ceiling joists. Trusses are never calculated.' })
+  }
+}) satisfies z.ZodType<AtticSurvey>
