@@ -1,3 +1,6 @@
+/** Domain files name their siblings with the ending, so that any TypeScript runner loads them. */
+const compilerOptions = { noUncheckedIndexedAccess: true, allowImportingTsExtensions: true }
+
 export default defineNuxtConfig({
   modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils'],
   components: [{ path: '~/components', pathPrefix: false }],
@@ -28,9 +31,15 @@ export default defineNuxtConfig({
   nitro: {
     preset: 'node-server',
     output: { dir: process.env.LATHKEY_OUTPUT_DIR || '.output' },
+    typescript: { tsConfig: { compilerOptions } },
     compressPublicAssets: { gzip: true, brotli: true },
   },
-  typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
+  typescript: {
+    strict: true,
+    tsConfig: { compilerOptions },
+    sharedTsConfig: { compilerOptions },
+    nodeTsConfig: { compilerOptions },
+  },
   telemetry: false,
   eslint: { config: { stylistic: { semi: false, quotes: 'single', commaDangle: 'always-multiline' } } },
   tailwindcss: { viewer: false, cssPath: '~/assets/css/main.css', exposeConfig: false },

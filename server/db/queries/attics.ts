@@ -54,4 +54,3 @@ export function listAttics(db: Db, organisationId: string, { search, after, limi
     .$if(after !== undefined, query => query.where(sql<boolean>`(a.name, a.id) > (${after!.name}, ${after!.id}::uuid)`))
     .orderBy('a.name').orderBy('a.id').limit(limit + 1).execute()
 }
-
