@@ -1,0 +1,48 @@
+import type { ItemCategory, ItemOwner, WeightSource } from '../../types/item'
+import type { Contents } from '../goods/goodsDensities'
+import type { InventoryTotal } from '../goods/inventoryTotal'
+import type { Refusal, RefusalReason } from '../goods/refusals'
+import { formatShare, formatWeight, type UnitSystem } from '../units'
+
+export const ITEM_CATEGORY_WORDS: Record<ItemCategory, string> = {
+  'boxes': 'Boxes and totes', 'holiday': 'Holiday things', 'sports-and-travel': 'Sports and travel', 'nursery': 'Nursery', 'bedroom': 'Bedroom',
+  'living-room': 'Living room', 'dining-and-kitchen': 'Dining and kitchen', 'appliances': 'Appliances', 'office': 'Office', 'tools': 'Tools and materials',
+  'yard': 'Yard', 'building-equipment': 'Building equipment', 'other': 'Something else',
+}
+
+export const CONTENTS_WORDS: Record<Contents, string> = {
+  'mixed-household': 'Mixed household things', 'bedding': 'Bedding', 'clothes': 'Clothes', 'dishes': 'Dishes', 'toys': 'Toys', 'books': 'Books',
+  'paper': 'Paper and files', 'tools': 'Tools and hardware', 'tile': 'Tile', 'liquids': 'Liquids',
+}
+
+export const WEIGHT_SOURCE_WORDS: Record<WeightSource, string> = {
+  catalogue: 'Typical weight from the catalogue', estimate: 'Estimate', weighed: 'Weighed',
+}
+
+export const ITEM_OWNER_WORDS: Record<ItemOwner, string> = { landlord: 'Landlord', tenant: 'Tenant' }
+
+const REFUSAL_WORDS: Record<RefusalReason, string> = {
+  'holds-water': 'Water is heavy, and a leak makes everything heavier.',
+  'too-heavy-for-any-attic': 'This is too heavy for an attic.',
+  'can-burn': 'Things that can burn do not belong in an attic.',
+  'building-material': 'Building material is dense: a small pile is more than a ceiling is framed for.',
+  'part-of-the-building': 'This is equipment of the building. An engineer or the permit decides where it may stand.',
+  'dense-by-name': 'This may be heavier than it looks. What is inside, and how full is it?',
+  'over-one-person-lift': 'This is more than one person should lift (51 lb, 23 kg, in ideal conditions: NIOSH).',
+  'dense': 'This is as dense as packed books. Is the size right?',
+  'presses-more-than-rated': 'It presses more on the spot it stands on than the attic is rated for.',
+}
+
+export function refusalSentence(refusal: Refusal): string {
+  return refusal.level === 'refuse' ? `Not for the attic. ${REFUSAL_WORDS[refusal.reason]}` : REFUSAL_WORDS[refusal.reason]
+}
+
+/** '420 lb, likely between 360 lb and 510 lb'. */
+export function bandSentence(total: InventoryTotal, system: UnitSystem = 'us'): string {
+  return `${formatWeight(total.typicalLb, system)}, likely between ${formatWeight(total.lowLb, system)} and ${formatWeight(total.highLb, system)}`
+}
+
+export function chanceSentence(chance: number): string {
+  if (chance < 0.005) return 'The chance of being over the rating is below 1 %.'
+  return `The chance of being over the rating is about ${formatShare(chance)}.`
+}
