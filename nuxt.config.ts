@@ -19,8 +19,13 @@ export default defineNuxtConfig({
   },
   css: ['~/assets/css/main.css', '~/assets/css/print.css'],
   runtimeConfig: {
-    session: { name: 'lathkey-session', password: '', maxAge: 60 * 60 * 24 * 30 },
+    session: {
+      name: 'lathkey-session', password: '', maxAge: 60 * 60 * 24 * 30,
+      // Browsers take Secure on loopback too; plain http elsewhere needs NUXT_SESSION_COOKIE_SECURE=false.
+      cookie: { sameSite: 'lax', httpOnly: true, secure: true, path: '/' },
+    },
   },
+  auth: { loadStrategy: 'none' },
   dir: { app: '.', shared: 'shared', public: 'public', modules: 'modules' },
   srcDir: '.',
   serverDir: 'server',

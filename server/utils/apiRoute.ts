@@ -1,11 +1,11 @@
 import type { EventHandler, H3Event } from 'h3'
 import type { z } from 'zod'
 import type { Db } from '../db/connect'
-import { findActor, type Actor } from '../db/queries/actor'
+import { findActor, isSessionLive, type Actor, type SessionIdentity } from '../db/queries/actor'
 import { things, type Thing, type ThingName } from '../db/queries/things'
 import { isId } from './newId'
 import { abilitiesOf, reachOf, withinReach, type Ability } from './policy'
-import { notAllowed, notFound, notSignedIn, problem, problemFromDatabase } from './problems'
+import { noMembership, notAllowed, notFound, notSignedIn, problem, problemFromDatabase } from './problems'
 import { readInput } from './readInput'
 import { sessionIdentity } from './session'
 import { useDb } from './useDb'
@@ -53,7 +53,8 @@ export async function admit<K extends ThingName>(event: H3Event, db: Db, options
   const [name, param] = (Object.entries(options.on ?? {})[0] ?? []) as [K, string] | []
   const thing = name && param ? await findThing(db, name, getRouterParam(event, param)) : undefined
   const actor = await findActor(db, identity, thing?.organisationId)
-  if (!actor) throw thing && await findActor(db, identity) ? notFound() : notSignedIn()
+  if (!actor) throw await refusalOf(db, identity, name)
+  if (name && !thing) throw notFound()
   if (thing) {
     const reach = withinReach(actor, options.can, thing)
     if (reach === 'not theirs') throw notFound()
@@ -63,14 +64,18 @@ export async function admit<K extends ThingName>(event: H3Event, db: Db, options
   return { actor, found: (name ? { [name]: thing } : {}) as { [P in K]: Thing<P> } }
 }
 
-async function findThing<K extends ThingName>(db: Db, name: K, id: string | undefined) {
-  const thing = isId(id) ? await things[name](db, id) : undefined
-  // A stranger without a session must not learn whether it exists, so the 401 has been answered before.
-  if (!thing) throw notFound()
-  return thing as Thing<K> & { organisationId: string, unitId: string | null }
+/** A session that has ended learns nothing; a live one learns that the thing is not there for it, or that no membership is left. */
+async function refusalOf(db: Db, identity: SessionIdentity, about: string | undefined) {
+  if (!await isSessionLive(db, identity)) return notSignedIn()
+  return about ? notFound() : noMembership()
 }
 
-async function readJson(event: H3Event): Promise<unknown> {
+async function findThing<K extends ThingName>(db: Db, name: K, id: string | undefined) {
+  return (isId(id) ? await things[name](db, id) : undefined) as Thing<K> & { organisationId: string, unitId: string | null } | undefined
+}
+
+/** The body as JSON; 415 and 422 when it is something else. */
+export async function readJson(event: H3Event): Promise<unknown> {
   const type = getHeader(event, 'content-type') ?? ''
   if (!type.startsWith('application/json')) throw problem(415, 'not-json', 'This address takes JSON.')
   const text = await readRawBody(event)

@@ -7,6 +7,7 @@ const staff = { owner: 'all', manager: 'all' } as const
 
 /** One table, ability × role. What is not written here is not allowed. */
 export const policy = {
+  'use account': { ...staff, tenant: 'all', trades: 'all', engineer: 'all' },
   'manage organisation': { owner: 'all' },
   'see settings': staff,
   'manage people': staff,

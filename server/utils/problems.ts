@@ -9,6 +9,8 @@ export function problem(status: number, code: string, message: string, more: Omi
 }
 
 export const notSignedIn = () => problem(401, 'not-signed-in', 'Please sign in first.')
+/** Signed in, but every membership has been ended. */
+export const noMembership = () => problem(403, 'no-membership', 'You are signed in, but you are not part of an organisation any more.')
 export const notAllowed = () => problem(403, 'not-allowed', 'Your role here does not include this.')
 /** Absent and not-yours look the same. */
 export const notFound = () => problem(404, 'not-found', 'There is nothing here, or it is not yours to see.')

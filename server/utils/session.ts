@@ -8,6 +8,8 @@ declare module '#auth-utils' {
 
 /** Who the sealed cookie says this is. The epoch is held against the database by findActor. */
 export async function sessionIdentity(event: H3Event): Promise<SessionIdentity | undefined> {
+  // Reading a session that is not there would make one and set a cookie.
+  if (!getCookie(event, useRuntimeConfig(event).session.name ?? 'nuxt-session')) return undefined
   const { user, organisationId } = await getUserSession(event)
   return user ? { userId: user.id, epoch: user.epoch, organisationId } : undefined
 }

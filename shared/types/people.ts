@@ -11,4 +11,6 @@ export interface Me {
   abilities: string[]
   /** The units this person may see; null for people who see the whole portfolio. */
   unitIds: string[] | null
+  /** Whether this organisation's daily digest goes to this person. */
+  digest: boolean
 }

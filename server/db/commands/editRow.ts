@@ -3,7 +3,7 @@ import type { Db, Trx } from '../connect'
 import { appendRecord, type RecordActor } from './appendRecord'
 import { clash, notFound } from '../../utils/problems'
 
-type EditableTable = 'property' | 'unit' | 'room' | 'tenancy' | 'attic' | 'atticItem' | 'mark' | 'job' | 'organisation' | 'appUser'
+type EditableTable = 'property' | 'unit' | 'room' | 'tenancy' | 'attic' | 'atticItem' | 'mark' | 'job' | 'organisation'
 
 interface Edit {
   table: EditableTable

@@ -18,19 +18,27 @@ export interface SessionIdentity { userId: string, epoch: number, organisationId
 
 /**
  * The asker as a member of an organisation; undefined when the session has ended elsewhere or they are no member.
- * Without an organisation the first membership is taken.
+ * Without an organisation the one of the session is preferred, then the oldest membership.
  */
-export async function findActor(db: Db, identity: SessionIdentity, organisationId = identity.organisationId): Promise<Actor | undefined> {
+export async function findActor(db: Db, identity: SessionIdentity, organisationId?: string): Promise<Actor | undefined> {
   const row = await db.selectFrom('appUser as u')
     .innerJoin('membership as m', 'm.userId', 'u.id')
     .innerJoin('organisation as o', 'o.id', 'm.organisationId')
     .select(['u.id as userId', 'u.name', 'u.email', 'm.organisationId', 'm.role', 'o.timeZone'])
     .where('u.id', '=', identity.userId).where('u.sessionEpoch', '=', identity.epoch).where('m.endedAt', 'is', null)
     .$if(organisationId !== undefined, query => query.where('m.organisationId', '=', organisationId!))
+    .orderBy(sql`m.organisation_id is not distinct from ${identity.organisationId ?? null}::uuid`, 'desc')
     .orderBy('m.createdAt').limit(1).executeTakeFirst()
   if (!row) return undefined
   const whole = row.role === 'owner' || row.role === 'manager'
   return { ...row, unitIds: whole ? [] : await findUnitIds(db, row.organisationId, row.userId, row.role, dayIn(row.timeZone)) }
+}
+
+/** Has this session not been ended by a change of password? Says nothing about memberships. */
+export async function isSessionLive(db: Db, identity: SessionIdentity): Promise<boolean> {
+  const row = await db.selectFrom('appUser').select('id')
+    .where('id', '=', identity.userId).where('sessionEpoch', '=', identity.epoch).executeTakeFirst()
+  return row !== undefined
 }
 
 async function findUnitIds(db: Db, organisationId: string, userId: string, role: Role, today: string): Promise<string[]> {

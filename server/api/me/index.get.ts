@@ -1,0 +1,7 @@
+import { readMe } from '../../db/queries/accounts'
+import { apiRoute } from '../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'use account',
+  handle: ({ db, actor }) => readMe(db, actor),
+})
