@@ -1,5 +1,6 @@
 #!/usr/bin/env node
-import { resolve } from 'node:path'
+import { mkdirSync } from 'node:fs'
+import { join, resolve } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ensureChromium } from './lib/chromium.mjs'
 import { addCounts, noTests, oneCheck, summarize } from './lib/counts.mjs'
@@ -8,7 +9,7 @@ import { createKeeper, stopOnSignals } from './lib/keeper.mjs'
 import { checkNodeVersion } from './lib/nodeVersion.mjs'
 import { Refusal } from './lib/refusal.mjs'
 import { makeTestFolder } from './lib/testFolder.mjs'
-import { bringUpTestServices } from './lib/testServices.mjs'
+import { bringUpTestCluster, buildForTests } from './lib/testServices.mjs'
 import { checkSize, checkTypes, lint, prepareTypes, runProject } from './lib/testSteps.mjs'
 
 const root = resolve(fileURLToPath(import.meta.url), '../..')
@@ -37,7 +38,10 @@ async function runTests() {
   checkNodeVersion(root)
   const chosen = chosenParts()
   await installDependencies({ root, keeper, say })
-  const context = { root, reports: makeTestFolder(root, keeper), keeper, services: {} }
+  const folder = makeTestFolder(root, keeper)
+  mkdirSync(join(folder, 'tmp'))
+  // Whatever a test leaves in the temporary folder goes with this run.
+  const context = { root, folder, keeper, services: { TMPDIR: join(folder, 'tmp') } }
   await step('prepare', context, prepareTypes)
   if (chosen.has('checks')) {
     await step('lint', context, lint)
@@ -48,8 +52,9 @@ async function runTests() {
 }
 
 async function runOnBuiltServer(chosen, context) {
-  await step('build', context, async () => {
-    context.services = await bringUpTestServices({ root, keeper, say })
+  await step('database and build', context, async () => {
+    const [cluster, entry] = await Promise.all([bringUpTestCluster({ folder: context.folder, keeper, say }), buildForTests({ root, keeper, say })])
+    Object.assign(context.services, cluster, { TEST_SERVER_ENTRY: entry })
     return noTests
   })
   if (chosen.has('checks')) await step('size', context, checkSize)

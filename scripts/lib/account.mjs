@@ -1,5 +1,5 @@
 import { spawnSync } from 'node:child_process'
-import { chownSync, mkdirSync, mkdtempSync, readFileSync, statSync } from 'node:fs'
+import { chownSync, existsSync, mkdirSync, mkdtempSync, readFileSync, rmdirSync, statSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { Refusal } from './refusal.mjs'
@@ -43,8 +43,18 @@ export function prepareDatabaseFolder(wanted, account, earlierFallback) {
   mkdirSync(wanted, { recursive: true, mode: 0o700 })
   if (account) chownSync(wanted, account.uid, account.gid)
   if (canUse(wanted, account)) return { folder: wanted, isFallback: false }
-  const folder = mkdtempSync(join(tmpdir(), 'lathkey-postgres-'))
-  if (account) chownSync(folder, account.uid, account.gid)
-  if (!canUse(folder, account)) throw new Refusal(`The account PostgreSQL runs as can use neither ${wanted} nor ${folder}. Set DATA_DIR to a folder it can reach.`)
-  return { folder, isFallback: true }
+  if (present) throw new Refusal(`The account PostgreSQL runs as can no longer enter ${wanted}. Open the folders above it to that account again (chmod o+x).`)
+  rmdirSync(wanted)
+  return { folder: makeFallback(wanted, account), isFallback: true }
+}
+
+/** /var/tmp first: unlike /tmp it is kept over a restart of the machine. */
+function makeFallback(wanted, account) {
+  for (const parent of ['/var/tmp', tmpdir()].filter(path => existsSync(path))) {
+    const folder = mkdtempSync(join(parent, 'lathkey-postgres-'))
+    if (account) chownSync(folder, account.uid, account.gid)
+    if (canUse(folder, account)) return folder
+    rmdirSync(folder)
+  }
+  throw new Refusal(`The account PostgreSQL runs as cannot use ${wanted}, nor a temporary folder. Set DATA_DIR to a folder it can reach.`)
 }

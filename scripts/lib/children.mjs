@@ -26,6 +26,7 @@ export function startChild(command, parameters, options = {}) {
   const line = setpriv
     ? [setpriv, '--pdeathsig', stopSignal.slice(3), '--', command, ...parameters]
     : [command, ...parameters]
+  /** @type {import('node:child_process').ChildProcess} */
   const child = spawn(line[0], line.slice(1), { ...spawnOptions, detached: true })
   /** @type {Promise<{ code: number | null, signal: NodeJS.Signals | null, error?: Error }>} */
   const exited = new Promise((resolve) => {

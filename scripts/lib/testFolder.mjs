@@ -1,4 +1,4 @@
-import { mkdirSync, readdirSync, rmSync } from 'node:fs'
+import { chmodSync, mkdirSync, mkdtempSync, readdirSync, rmSync } from 'node:fs'
 import { join } from 'node:path'
 import { isAlive } from './children.mjs'
 
@@ -11,11 +11,12 @@ export function makeTestFolder(root, keeper) {
   const parent = join(root, '.test')
   mkdirSync(parent, { recursive: true })
   for (const name of readdirSync(parent)) {
-    const pid = Number(/^run-(\d+)$/.exec(name)?.[1])
+    const pid = Number(/^run-(\d+)-/.exec(name)?.[1])
     if (pid && !isAlive(pid)) rmSync(join(parent, name), { recursive: true, force: true })
   }
-  const folder = join(parent, `run-${process.pid}`)
-  mkdirSync(folder, { recursive: true })
+  const folder = mkdtempSync(join(parent, `run-${process.pid}-`))
+  // mkdtemp closes its folder to others; PostgreSQL may run as another account.
+  chmodSync(folder, 0o711)
   keeper.add(() => rmSync(folder, { recursive: true, force: true, maxRetries: 3 }))
   return folder
 }

@@ -6,7 +6,7 @@ import { testBuildFolders } from './testFolder.mjs'
 /**
  * @typedef {object} StepContext
  * @property {string} root
- * @property {string} reports folder for vitest's reports
+ * @property {string} folder of this run
  * @property {ReturnType<typeof import('./keeper.mjs').createKeeper>} keeper
  * @property {Record<string, string>} services the environment of the test services
  */
@@ -28,7 +28,7 @@ export async function prepareTypes(context) {
 export const lint = async context => oneCheck(await runNode(context, 'node_modules/eslint/bin/eslint.js', ['.', '--max-warnings', '0']) === 0)
 
 /** @param {StepContext} context */
-export const checkTypes = async context => oneCheck(await runNode(context, 'node_modules/vue-tsc/bin/vue-tsc.js', ['--noEmit', '-b']) === 0)
+export const checkTypes = async context => oneCheck(await runNode(context, 'node_modules/vue-tsc/bin/vue-tsc.js', ['-b', '--noEmit']) === 0)
 
 /** The built output's first-load size, where that check exists. @param {StepContext} context */
 export async function checkSize(context) {
@@ -44,7 +44,7 @@ export async function checkSize(context) {
  */
 export function runProject(project) {
   return async (context) => {
-    const report = join(context.reports, `${project}.json`)
+    const report = join(context.folder, `${project}.json`)
     const code = await runNode(context, 'node_modules/vitest/vitest.mjs', [
       'run', '--project', project, '--reporter=default', '--reporter=json', `--outputFile.json=${report}`,
     ])
