@@ -1,0 +1,36 @@
+import { sql } from 'kysely'
+import type { Db } from '../connect'
+import type { Actor } from './actor'
+import type { UnitPage } from '../../../shared/types/home'
+import { dayIn } from '../../utils/clock'
+import { abilitiesOf, reachOf } from '../../utils/policy'
+import { atticsOf, findingsOf, jobsOf, marksOf, roomsOf, statusOf, tenanciesOf } from './unitParts'
+
+/** Everything the unit's page shows, in one statement; what the asker's role may not see is left out. */
+export async function findUnitPage(db: Db, actor: Actor, unitId: string): Promise<UnitPage> {
+  const id = sql.val(unitId)
+  const edits = Boolean(reachOf(actor.role, 'edit homes'))
+  const seesFindings = Boolean(reachOf(actor.role, 'see finding'))
+  const seesJobs = Boolean(reachOf(actor.role, 'see job'))
+  const row = await db.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId').leftJoin('recordChain as c', 'c.chainId', 'u.id')
+    .select(['u.id', 'u.propertyId', 'u.name', 'u.notes', 'u.accessNotes', 'u.archivedAt', 'u.version',
+      'p.name as propertyName', 'p.addressLines', 'p.yearBuilt', 'p.notes as propertyNotes', 'p.archivedAt as propertyArchivedAt', 'p.version as propertyVersion',
+      'c.entries', roomsOf(db, id).as('rooms'), roomsOf(db, id, 'archived').as('archivedRooms'), atticsOf(db, id).as('attics'), marksOf(db, id).as('marks'),
+      tenanciesOf(db, id, edits ? null : actor.userId).as('tenancies')])
+    .$if(seesFindings, query => query.select([findingsOf(db, id).as('findings'), statusOf(db, id).as('status')]))
+    .$if(seesJobs, query => query.select(jobsOf(db, id).as('jobs')))
+    .where('u.id', '=', unitId).executeTakeFirstOrThrow()
+  return {
+    unit: {
+      id: row.id, propertyId: row.propertyId, name: row.name, archivedAt: row.archivedAt, version: row.version,
+      notes: edits ? row.notes : '', accessNotes: edits ? row.accessNotes : null,
+    },
+    property: {
+      id: row.propertyId, name: row.propertyName, addressLines: row.addressLines, yearBuilt: row.yearBuilt, notes: edits ? row.propertyNotes : '',
+      archivedAt: row.propertyArchivedAt, version: row.propertyVersion,
+    },
+    rooms: row.rooms ?? [], archivedRooms: row.archivedRooms ?? [], attics: row.attics ?? [], tenancies: row.tenancies ?? [],
+    marks: row.marks ?? [], findings: row.findings ?? [], jobs: row.jobs ?? [], status: row.status ?? null,
+    recordEntries: row.entries ?? 0, today: dayIn(actor.timeZone), abilities: abilitiesOf(actor.role),
+  }
+}
