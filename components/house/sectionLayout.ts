@@ -4,9 +4,9 @@ import { joinNearest, spread } from './sectionSpread'
 import type { Box, LoadTone, MarkTone, SectionBlock, SectionContent, SectionDrawing, SectionFrame, SectionLabel, SectionLoad, SectionMark, SectionStroke } from './sectionTypes'
 import { fitText, textWidth } from './textWidth'
 
-const loadRank: Record<LoadTone, number> = { within: 0, near: 1, over: 2 }
+const loadRank: Record<LoadTone, number> = { within: 0, unknown: 1, near: 2, over: 3 }
 const markRank: Record<MarkTone, number> = { unknown: 0, dormant: 1, watch: 2, active: 3 }
-const defaultRatingShare: Record<LoadTone, number> = { within: 0.4, near: 0.9, over: 1.2 }
+const defaultRatingShare: Record<LoadTone, number> = { within: 0.4, unknown: 0.4, near: 0.9, over: 1.2 }
 
 const clampShare = (share: number) => (Number.isFinite(share) ? Math.min(1, Math.max(0, share)) : 0.5)
 

@@ -1,6 +1,6 @@
 import type { StateTone } from '../ui/stateTone'
 
-export type LoadTone = Extract<StateTone, 'within' | 'near' | 'over'>
+export type LoadTone = Extract<StateTone, 'within' | 'near' | 'over' | 'unknown'>
 export type MarkTone = Extract<StateTone, 'dormant' | 'watch' | 'active' | 'unknown'>
 export type MarkGlyphKind = 'crack' | 'nail-pops' | 'sag' | 'stain'
 

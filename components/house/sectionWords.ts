@@ -5,14 +5,17 @@ export const stateWords: Record<StateTone, string> = {
   within: 'within', near: 'near', over: 'over', dormant: 'dormant', watch: 'watch', active: 'active', unknown: 'too few readings',
 }
 
+/** A load nobody has judged is not short of readings: its attic has no survey. */
+export const loadWords: Record<StateTone, string> = { ...stateWords, unknown: 'not rated' }
+
 function list(parts: string[]): string {
   return parts.length < 2 ? parts.join('') : `${parts.slice(0, -1).join(', ')} and ${parts.at(-1)}`
 }
 
-function counted(tones: StateTone[], order: StateTone[]): string {
+function counted(tones: StateTone[], order: StateTone[], words = stateWords): string {
   return list(order.flatMap((tone) => {
     const count = tones.filter(t => t === tone).length
-    return count === 0 ? [] : [`${count} ${stateWords[tone]}`]
+    return count === 0 ? [] : [`${count} ${words[tone]}`]
   }))
 }
 
@@ -20,7 +23,7 @@ function counted(tones: StateTone[], order: StateTone[]): string {
 export function sectionSentence({ rooms, loads, marks }: SectionContent): string {
   const above = loads.length === 0
     ? 'nothing on record is stored above the ceiling'
-    : `${loads.length} ${loads.length === 1 ? 'load is' : 'loads are'} stored above the ceiling, ${counted(loads.map(l => l.state), ['over', 'near', 'within'])}`
+    : `${loads.length} ${loads.length === 1 ? 'load is' : 'loads are'} stored above the ceiling, ${counted(loads.map(l => l.state), ['over', 'near', 'within', 'unknown'], loadWords)}`
   const below = marks.length === 0
     ? 'no mark is being followed'
     : `${marks.length} ${marks.length === 1 ? 'mark is' : 'marks are'} being followed, ${counted(marks.map(m => m.activity), ['active', 'watch', 'dormant', 'unknown'])}`

@@ -73,6 +73,9 @@ export interface AtticOfUnit {
   ratedPsf: number | null
   onHold: boolean | null
   basis: string | null
+  /** As last judged; null before the first time. */
+  loadState: UnitLoadState | null
+  utilisation: number | null
   storedLb: number
   fields: FieldMeasures[]
   items: StoredItem[]

@@ -1,6 +1,7 @@
 import type { Db, Trx } from '../connect'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
+import type { ChainState } from '../../../shared/types/record'
 import { FIRST_HASH, hashEntry, type RecordSubject } from '../../utils/recordHash'
 
 /** Who did it; the system itself when no person asked. */
@@ -45,8 +46,16 @@ export async function appendRecord(trx: Trx, actor: RecordActor, change: RecordC
 /** As it will come back from jsonb: no undefined, dates as text. */
 const plain = (value: object | null | undefined): object | null => value ? JSON.parse(JSON.stringify(value)) as object : null
 
-/** The first entry whose hash or link does not hold, or 'unbroken' with the count. */
-export async function verifyChain(db: Db, chainId: string): Promise<{ kind: 'unbroken', entries: number } | { kind: 'broken', seq: number, why: string }> {
+/**
+ * The first entry whose hash or link does not hold, or 'unbroken' with the count. Read from one snapshot: an entry
+ * appended meanwhile must not look like a break.
+ */
+export function verifyChain(db: Db, chainId: string): Promise<ChainState> {
+  if (db.isTransaction) return walkChain(db, chainId)
+  return db.transaction().setIsolationLevel('repeatable read').setAccessMode('read only').execute(trx => walkChain(trx, chainId))
+}
+
+async function walkChain(db: Db, chainId: string): Promise<ChainState> {
   const chain = await db.selectFrom('recordChain').selectAll().where('chainId', '=', chainId).executeTakeFirst()
   let previous = FIRST_HASH
   let seq = 0

@@ -2,7 +2,7 @@ import { sql, type Expression } from 'kysely'
 import { jsonBuildObject } from 'kysely/helpers/postgres'
 import type { Db } from '../connect'
 import type { CeilingFinish } from '../../../shared/types/attic'
-import type { FieldMeasures } from '../../../shared/types/home'
+import type { FieldMeasures, UnitLoadState } from '../../../shared/types/home'
 import { isoInstant, jsonList } from './jsonList'
 
 /** Subqueries for parts of one unit; `unitId` is a value or a column of the statement around them. */
@@ -22,18 +22,18 @@ export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('a
       from jsonb_array_elements(s.answers->'joistFields') with ordinality as field(f, n))`.as('fields')])
     .whereRef('s.atticId', '=', 'a.id').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1).as('latest'), join => join.onTrue())
   .leftJoinLateral(eb => eb.selectFrom('atticItem as i')
-    .select(({ ref, fn }) => [
-      fn.coalesce(fn.sum<number>('i.typicalLb'), sql<number>`0`).as('storedLb'),
+    .select(({ ref }) => [
+      sql<number>`coalesce(sum(i.quantity * i.typical_lb), 0)`.as('storedLb'),
       jsonList(jsonBuildObject({
         id: ref('i.id'), name: ref('i.name'), quantity: ref('i.quantity'), lowLb: ref('i.lowLb'), typicalLb: ref('i.typicalLb'), highLb: ref('i.highLb'),
         weightSource: ref('i.weightSource'), fieldNumber: ref('i.fieldNumber'), xFt: ref('i.xFt'), yFt: ref('i.yFt'), lengthFt: ref('i.lengthFt'), widthFt: ref('i.widthFt'),
-      }), sql`i.typical_lb desc, i.id`).as('items'),
+      }), sql`i.quantity * i.typical_lb desc, i.id`).as('items'),
     ])
     .whereRef('i.atticId', '=', 'a.id').where('i.removedOn', 'is', null).as('stored'), join => join.onTrue())
   .select(({ ref }) => jsonList(jsonBuildObject({
     id: ref('a.id'), name: ref('a.name'), notes: ref('a.notes'), inventoryConfirmedOn: ref('a.inventoryConfirmedOn'),
     surveyedOn: ref('latest.surveyedOn'), ratedPsf: ref('latest.ratedPsf'), onHold: ref('latest.onHold'), basis: ref('latest.basis'),
-    storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
+    loadState: sql<UnitLoadState | null>`null`, utilisation: sql<number | null>`null`, storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
   }), sql`a.name, a.id`).as('list'))
   .where('a.unitId', '=', unitId).where('a.archivedAt', 'is', null)
 
