@@ -65,7 +65,7 @@ export const jobsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('job
 export const tenanciesOf = (db: Db, unitId: Expression<string>, onlyOf: string | null) => db.selectFrom('tenancy as t')
   .select(({ ref, selectFrom }) => jsonList(jsonBuildObject({
     id: ref('t.id'), tenantName: ref('t.tenantName'), startsOn: ref('t.startsOn'), endsOn: ref('t.endsOn'),
-    notes: onlyOf === null ? ref('t.notes') : sql.val(''), version: ref('t.version'),
+    notes: onlyOf === null ? ref('t.notes') : sql<string>`''::text`, version: ref('t.version'),
     people: sql<string[]>`coalesce(${selectFrom('tenancyPerson as tp').innerJoin('appUser as au', 'au.id', 'tp.userId')
       .select(sql`json_agg(au.name order by au.name)`.as('names')).whereRef('tp.tenancyId', '=', 't.id')}, '[]'::json)`,
   }), sql`t.starts_on desc, t.id`).as('list'))
