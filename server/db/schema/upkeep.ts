@@ -8,6 +8,7 @@ export interface UpkeepTables {
   message: MessageTable
   reviewRun: ReviewRunTable
   unitStatus: UnitStatusTable
+  atticStatus: AtticStatusTable
 }
 
 type Severity = 'notice' | 'attention' | 'urgent'
@@ -126,4 +127,16 @@ export interface UnitStatusTable {
   activeMarks: Defaulted<number>
   lateReadings: Defaulted<number>
   changedAt: Instant
+}
+
+/** How an attic was last judged. `utilisation` is null where nothing may be stored, or where no survey tells. */
+export interface AtticStatusTable {
+  atticId: string
+  organisationId: string
+  unitId: string
+  loadState: 'within' | 'near' | 'over' | 'hold' | 'unsurveyed'
+  utilisation: number | null
+  storedLb: number
+  ratedPsf: number | null
+  judgedAt: Instant
 }
