@@ -7,7 +7,7 @@ export type Severity = typeof SEVERITIES[number]
 export const FINDING_RULES = [
   'attic-load', 'attic-may-exceed', 'joist-over', 'heavy-item-in-middle', 'contents-under-hold',
   'contents-without-survey', 'contents-without-storage', 'refused-item', 'inventory-stale',
-  'new-mark-under-load', 'mark-active', 'mark-sudden', 'width-class-up', 'nail-pops-growing', 'nail-pops-in-line',
+  'new-mark', 'new-mark-under-load', 'mark-active', 'mark-sudden', 'width-class-up', 'nail-pops-growing', 'nail-pops-in-line',
   'sag-over-limit', 'sag-growing', 'stain-wet', 'danger-sign', 'reading-overdue',
   'inspection-overdue', 'job-overdue', 'no-working-contact',
 ] as const
@@ -36,6 +36,7 @@ export interface FindingEvidence {
   'contents-without-storage': { totalLb: number, itemCount: number, basis: string }
   'refused-item': { itemId: string, label: string, reason: string, itemCount: number }
   'inventory-stale': { confirmedOn: string | null, dueOn: string }
+  'new-mark': { firstSeenOn: string }
   'new-mark-under-load': { totalLb: number, utilisation: number | null, firstSeenOn: string }
   'mark-active': { slopePerYear: number, interval: [number, number], readingCount: number, spanDays: number, since: string, unit: 'mm' | 'pops' }
   'mark-sudden': { value: number, previous: number, rise: number, threshold: number, takenOn: string, unit: 'mm' | 'pops' }

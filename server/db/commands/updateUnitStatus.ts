@@ -24,8 +24,9 @@ export async function updateUnitStatus(trx: Trx, unitId: string) {
     left join lateral (select coalesce(s.load_state, 'unsurveyed') load_state
       from attic a left join attic_status s on s.attic_id = a.id where a.unit_id = ${unit.id} and a.archived_at is null
       order by array_position(array['over', 'hold', 'near', 'unsurveyed', 'within'], coalesce(s.load_state, 'unsurveyed')) limit 1) worst on true
-    cross join (select count(*) n, count(*) filter (where activity = 'active') active, count(*) filter (where next_reading_on < ${today}::date) late
-      from mark where unit_id = ${unit.id} and state = 'open') marks
+    cross join (select count(*) filter (where state = 'open') n, count(*) filter (where state = 'open' and activity = 'active') active,
+        count(*) filter (where next_reading_on < ${today}::date) late
+      from mark where unit_id = ${unit.id} and state <> 'closed') marks
     on conflict (unit_id) do update set property_id = excluded.property_id, worst_severity = excluded.worst_severity,
       open_findings = excluded.open_findings, top_finding_id = excluded.top_finding_id, attic_count = excluded.attic_count,
       load_state = excluded.load_state, utilisation = excluded.utilisation, stored_lb = excluded.stored_lb,

@@ -6,7 +6,7 @@ import * as ceilings from './0004Ceilings'
 import * as upkeep from './0005Upkeep'
 import * as record from './0006Record'
 import * as mailAttempts from './0007MailAttempts'
-import * as atticStatus from './0008AtticStatus'
+import * as judging from './0008Judging'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -17,5 +17,5 @@ export const migrations: Record<string, Migration> = {
   '0005Upkeep': upkeep,
   '0006Record': record,
   '0007MailAttempts': mailAttempts,
-  '0008AtticStatus': atticStatus,
+  '0008Judging': judging,
 }

@@ -1,3 +1,4 @@
+import type { AdviceCode, FindingRule, FindingSubjectKind, Severity } from '../../../shared/types/finding'
 import type { Day, Defaulted, Instant, Json } from '../schema'
 
 export interface UpkeepTables {
@@ -11,16 +12,15 @@ export interface UpkeepTables {
   atticStatus: AtticStatusTable
 }
 
-type Severity = 'notice' | 'attention' | 'urgent'
-
 export interface FindingTable {
   id: string
   organisationId: string
   unitId: string
-  rule: string
-  subjectKind: 'attic' | 'mark' | 'item' | 'job' | 'unit' | 'observation'
+  rule: FindingRule
+  subjectKind: FindingSubjectKind
   subjectId: string
   severity: Severity
+  adviceCode: AdviceCode
   evidence: Json<object>
   openedAt: Instant
   changedAt: Instant

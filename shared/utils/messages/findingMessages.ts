@@ -17,6 +17,7 @@ export const FINDING_TITLES: Record<FindingRule, string> = {
   'contents-without-storage': 'Things stored where nothing may be stored',
   'refused-item': 'Something that does not belong in an attic',
   'inventory-stale': 'List of stored things not confirmed for a year',
+  'new-mark': 'New mark reported',
   'new-mark-under-load': 'New mark under a loaded attic',
   'mark-active': 'Mark is active',
   'mark-sudden': 'Sudden change of a mark',
@@ -70,6 +71,7 @@ const ATTIC_SENTENCES: Pick<{ [R in FindingRule]: Sentence<R> },
 }
 
 const MARK_SENTENCES: Omit<{ [R in FindingRule]: Sentence<R> }, keyof typeof ATTIC_SENTENCES> = {
+  'new-mark': e => `First seen on ${formatDay(e.firstSeenOn)}. One reading alone cannot show a direction.`,
   'new-mark-under-load': (e, s) => `First seen on ${formatDay(e.firstSeenOn)}, with ${formatWeight(e.totalLb, s)} stored above${e.utilisation === null ? '' : ` (${formatShare(e.utilisation)} of the rating)`}.`,
   'mark-active': (e, s) => `${growthWords(e, e.unit, s)} Sure of the direction since ${formatDay(e.since)}.`,
   'mark-sudden': (e, s) => `${amountWords(e.value, e.unit, s)} on ${formatDay(e.takenOn)}, up by ${amountWords(e.rise, e.unit, s)} from ${amountWords(e.previous, e.unit, s)}. More than ${amountWords(e.threshold, e.unit, s)} counts as sudden.`,

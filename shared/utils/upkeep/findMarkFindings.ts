@@ -124,8 +124,13 @@ function stainFindings({ subject, stain, inOrder }: Judged): Finding[] {
   }]
 }
 
-function loadFindings({ mark, subject, loadAbove, today }: Judged): Finding[] {
-  if (!loadAbove || loadAbove.totalLb < LEAST_LOAD_ABOVE_LB || daysBetween(mark.firstSeenOn, today) > NEW_MARK_DAYS) return []
+/** A new mark stands until a reading of a later day exists; under a load it stands for its whole first quarter. */
+function newMarkFindings({ mark, subject, loadAbove, today, inOrder }: Judged): Finding[] {
+  if (daysBetween(mark.firstSeenOn, today) > NEW_MARK_DAYS) return []
+  if (!loadAbove || loadAbove.totalLb < LEAST_LOAD_ABOVE_LB) {
+    if (inOrder[0]?.takenOn !== inOrder.at(-1)?.takenOn) return []
+    return [{ rule: 'new-mark', subject, severity: 'notice', evidence: { firstSeenOn: mark.firstSeenOn }, adviceCode: 'watch-and-check-above' }]
+  }
   const over = (loadAbove.utilisation ?? 0) > 1
   return [{
     rule: 'new-mark-under-load', subject, severity: over ? 'urgent' : 'attention',
@@ -147,6 +152,6 @@ export function findMarkFindings(judgement: MarkJudgement): Finding[] {
   }
   return [
     ...dangerFindings(judged), ...suddenFindings(judged), ...activeFindings(judged), ...widthFindings(judged), ...popFindings(judged),
-    ...sagFindings(judged), ...stainFindings(judged), ...loadFindings(judged), ...readingFindings(judged),
+    ...sagFindings(judged), ...stainFindings(judged), ...newMarkFindings(judged), ...readingFindings(judged),
   ]
 }

@@ -1,6 +1,9 @@
 import { sql, type Kysely } from 'kysely'
 
-/** How each attic was last judged, kept by the command that judges it; unit_status adds these up. */
+/**
+ * How each attic was last judged, kept by the command that judges it; unit_status adds these up.
+ * A finding keeps its advice; of the reviews asked for by hand one runs at a time in an organisation.
+ */
 export async function up(db: Kysely<unknown>) {
   await sql`create table attic_status (
     attic_id uuid primary key,
@@ -15,4 +18,6 @@ export async function up(db: Kysely<unknown>) {
     foreign key (organisation_id, unit_id) references unit (organisation_id, id)
   )`.execute(db)
   await sql`create index attic_status_of_unit on attic_status (unit_id)`.execute(db)
+  await sql`alter table finding add column advice_code text not null`.execute(db)
+  await sql`create unique index review_run_one_asked_for on review_run (organisation_id) where asked_by is not null and finished_at is null`.execute(db)
 }
