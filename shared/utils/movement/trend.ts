@@ -91,11 +91,28 @@ function judge(points: SeriesPoint[], settings: Settings) {
   return { activity, sigma, mannKendall: test, ...slope, levelAtStart, rise, season }
 }
 
+function activityAt(points: SeriesPoint[], settings: Settings): Activity {
+  return enough(points) ? judge(points, settings).activity : 'too-few-readings'
+}
+
 /** Walks back from the newest reading while each earlier look was active too. */
 function activeSinceOf(points: SeriesPoint[], settings: Settings): string {
   let count = points.length
-  while (enough(points.slice(0, count - 1)) && judge(points.slice(0, count - 1), settings).activity === 'active') count--
+  while (activityAt(points.slice(0, count - 1), settings) === 'active') count--
   return dayFromNumber(points[count - 1]!.day)
+}
+
+function settingsOf(options: TrendOptions): Settings {
+  return {
+    seasonAllowance: options.seasonAllowance ?? DEFAULT_SEASON_ALLOWANCE_MM,
+    dormantWithinPerYear: options.dormantWithinPerYear ?? DORMANT_WITHIN_PER_YEAR,
+    leastJump: options.leastJump ?? LEAST_JUMP_MM,
+  }
+}
+
+/** The activity alone, as `markTrend` gives it, at a small part of the work. */
+export function markActivity(readings: readonly TrendReading[], options: TrendOptions = {}): Activity {
+  return activityAt(seriesOf(readings), settingsOf(options))
 }
 
 /**
@@ -103,11 +120,7 @@ function activeSinceOf(points: SeriesPoint[], settings: Settings): string {
  * Sources: Gilbert 1987 and EPA QA/G-9S for slope and test; the activity rule is ours. Throws RangeError on unsound readings.
  */
 export function markTrend(readings: readonly TrendReading[], options: TrendOptions = {}): MarkTrend {
-  const settings: Settings = {
-    seasonAllowance: options.seasonAllowance ?? DEFAULT_SEASON_ALLOWANCE_MM,
-    dormantWithinPerYear: options.dormantWithinPerYear ?? DORMANT_WITHIN_PER_YEAR,
-    leastJump: options.leastJump ?? LEAST_JUMP_MM,
-  }
+  const settings = settingsOf(options)
   const points = seriesOf(readings)
   const basis = basisOf(points, settings)
   const first = points[0]

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { markTrend } from '../../../shared/utils/movement/trend'
+import { markActivity, markTrend } from '../../../shared/utils/movement/trend'
 import { inventedReadings, normalOf, readingsOn, seeded, type InventedMark } from './seeded'
 
 /** The activity rule is ours, so its errors are measured here: series with a look at every monthly reading, σ 0.25 mm. */
@@ -10,7 +10,7 @@ const FIRST_LOOK = 6
 function everActive(mark: InventedMark, uniform: () => number): boolean {
   const readings = inventedReadings(mark, uniform)
   for (let look = FIRST_LOOK; look <= readings.length; look++) {
-    if (markTrend(readings.slice(0, look)).activity === 'active') return true
+    if (markActivity(readings.slice(0, look)) === 'active') return true
   }
   return false
 }

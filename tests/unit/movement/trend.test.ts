@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { addDays } from '../../../shared/utils/days'
-import { markTrend, type MeasuredTrend } from '../../../shared/utils/movement/trend'
+import { markActivity, markTrend, type MeasuredTrend } from '../../../shared/utils/movement/trend'
 import type { TrendReading } from '../../../shared/utils/movement/series'
 import { monthly, readingsOn } from './seeded'
 
@@ -93,8 +93,9 @@ describe('Slope and activity', () => {
 })
 
 describe('Properties', () => {
-  const series = fc.array(fc.record({ day: fc.integer({ min: 0, max: 1500 }), value: fc.double({ min: 0, max: 30, noNaN: true }) }), { minLength: 6, maxLength: 25 })
-    .map(points => points.map(({ day, value }) => ({ takenOn: addDays('2024-01-01', day), value, sigma: 0.3 })))
+  /** Widths a sum and a halving keep exact, so that ties stay ties. */
+  const series = fc.array(fc.record({ day: fc.integer({ min: 0, max: 1500 }), sixtyFourths: fc.integer({ min: 0, max: 30 * 64 }) }), { minLength: 6, maxLength: 25 })
+    .map(points => points.map(({ day, sixtyFourths }) => ({ takenOn: addDays('2024-01-01', day), value: sixtyFourths / 64, sigma: 0.3 })))
 
   it('the order readings are given in does not matter', () => {
     fc.assert(fc.property(series, (readings) => {
@@ -135,6 +136,14 @@ describe('Properties', () => {
       expect(trend.mannKendall.p).toBeGreaterThanOrEqual(0)
       expect(trend.mannKendall.p).toBeLessThanOrEqual(1)
     }), { numRuns: 60 })
+  })
+})
+
+describe('The activity alone', () => {
+  it('is the one the full trend gives', () => {
+    for (const readings of [[], monthly(3, () => 1), monthly(13, years => 6 * years), monthly(14, () => 2, 0.1), monthly(7, years => 3 * years)]) {
+      expect(markActivity(readings)).toBe(markTrend(readings).activity)
+    }
   })
 })
 
