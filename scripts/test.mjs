@@ -1,5 +1,5 @@
 #!/usr/bin/env node
-import { mkdirSync } from 'node:fs'
+import { existsSync, mkdirSync } from 'node:fs'
 import { join, resolve } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ensureChromium } from './lib/chromium.mjs'
@@ -39,9 +39,10 @@ async function runTests() {
   const chosen = chosenParts()
   await installDependencies({ root, keeper, say })
   const folder = makeTestFolder(root, keeper)
-  mkdirSync(join(folder, 'tmp'))
-  // Whatever a test leaves in the temporary folder goes with this run.
-  const context = { root, folder, keeper, services: { TMPDIR: join(folder, 'tmp') } }
+  // Whatever a step leaves in the temporary folder goes with this run.
+  process.env.TMPDIR = join(folder, 'tmp')
+  mkdirSync(process.env.TMPDIR)
+  const context = { root, folder, keeper, services: {} }
   await step('prepare', context, prepareTypes)
   if (chosen.has('checks')) {
     await step('lint', context, lint)
@@ -57,7 +58,7 @@ async function runOnBuiltServer(chosen, context) {
     Object.assign(context.services, cluster, { TEST_SERVER_ENTRY: entry })
     return noTests
   })
-  if (chosen.has('checks')) await step('size', context, checkSize)
+  if (chosen.has('checks') && existsSync(join(root, 'scripts/size.mjs'))) await step('size', context, checkSize)
   if (chosen.has('api')) await step('api', context, runProject('api'))
   if (!chosen.has('browser')) return
   await ensureChromium({ keeper, say })

@@ -50,7 +50,7 @@ export function prepareDatabaseFolder(wanted, account, earlierFallback) {
 
 /** /var/tmp first: unlike /tmp it is kept over a restart of the machine. */
 function makeFallback(wanted, account) {
-  for (const parent of ['/var/tmp', tmpdir()].filter(path => existsSync(path))) {
+  for (const parent of ['/var/tmp', '/tmp', tmpdir()].filter(path => existsSync(path))) {
     const folder = mkdtempSync(join(parent, 'lathkey-postgres-'))
     if (account) chownSync(folder, account.uid, account.gid)
     if (canUse(folder, account)) return folder

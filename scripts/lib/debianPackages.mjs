@@ -28,7 +28,8 @@ export const mayInstall = () => process.getuid?.() === 0 && findProgram('apt-get
  */
 export async function installDebianPackages({ packages, keeper, say }) {
   const apt = parameters => keeper.run('apt-get', parameters, {
-    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' }, cwd: '/', stdio: ['ignore', 'ignore', 'inherit'], graceMs: 30_000,
+    // Our temporary folder may be closed to the account apt downloads as.
+    env: { ...process.env, TMPDIR: undefined, DEBIAN_FRONTEND: 'noninteractive' }, cwd: '/', stdio: ['ignore', 'ignore', 'inherit'], graceMs: 30_000,
   })
   say(`Installing ${packages.join(', ')} from Debian's packages …`)
   const steps = [

@@ -30,9 +30,8 @@ export const lint = async context => oneCheck(await runNode(context, 'node_modul
 /** @param {StepContext} context */
 export const checkTypes = async context => oneCheck(await runNode(context, 'node_modules/vue-tsc/bin/vue-tsc.js', ['-b', '--noEmit']) === 0)
 
-/** The built output's first-load size, where that check exists. @param {StepContext} context */
+/** The built output's first-load size. @param {StepContext} context */
 export async function checkSize(context) {
-  if (!existsSync(join(context.root, 'scripts/size.mjs'))) return noTests
   const { outputDir } = testBuildFolders(context.root)
   return oneCheck(await runNode(context, 'scripts/size.mjs', [outputDir], { LATHKEY_OUTPUT_DIR: outputDir }) === 0)
 }
