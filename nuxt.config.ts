@@ -25,7 +25,6 @@ export default defineNuxtConfig({
       cookie: { sameSite: 'lax', httpOnly: true, secure: true, path: '/' },
     },
   },
-  auth: { loadStrategy: 'none' },
   dir: { app: '.', shared: 'shared', public: 'public', modules: 'modules' },
   srcDir: '.',
   serverDir: 'server',
@@ -46,6 +45,7 @@ export default defineNuxtConfig({
     nodeTsConfig: { compilerOptions },
   },
   telemetry: false,
+  auth: { loadStrategy: 'none' },
   eslint: { config: { stylistic: { semi: false, quotes: 'single', commaDangle: 'always-multiline' } } },
   tailwindcss: { viewer: false, cssPath: '~/assets/css/main.css', exposeConfig: false },
 })
