@@ -63,9 +63,10 @@ async function judgementOf(trx: Trx, mark: JudgedMark, rows: Readings, reports: 
   const trend = trendOf(mark, readings, survey?.answers.framing ?? null, first?.answers.wallType ?? null)
   const lastEventOn = await findLastLoadChange(trx, mark.atticId)
   const sagSpanMm = reports.findLast(report => report.answers.sagSpanMm)?.answers.sagSpanMm
+  const reportedOn = dayIn(mark.timeZone, new Date(mark.createdAt))
   const sides = [mark.lengthFt, mark.widthFt].filter(side => side !== null)
   return {
-    mark: { id: mark.id, kind: mark.kind, shape: mark.shape as MarkShape | null, firstSeenOn: mark.firstSeenOn },
+    mark: { id: mark.id, kind: mark.kind, shape: mark.shape as MarkShape | null, firstSeenOn: mark.firstSeenOn, reportedOn },
     today, readings, trend,
     dangerSigns: reports.filter(report => !report.correctedAt).flatMap(report => report.dangerSigns.map(sign => ({ sign, seenOn: dayIn(mark.timeZone, new Date(report.receivedAt)) }))),
     dangerClearedOn: null,
@@ -73,7 +74,7 @@ async function judgementOf(trx: Trx, mark: JudgedMark, rows: Readings, reports: 
     loadAbove: mark.aboveLb === null ? null : { totalLb: mark.aboveLb, utilisation: mark.aboveUtilisation },
     ceilingSpanMm: sagSpanMm ?? (sides.length > 0 ? Math.min(...sides) * MM_PER_FT : null),
     plaster: /plaster/i.test(mark.ceilingFinish),
-    nextReading: nextReading({ reportedOn: dayIn(mark.timeZone, new Date(mark.createdAt)), activity: trend.activity, lastEventOn, closed: false }, rows, today),
+    nextReading: nextReading({ reportedOn, activity: trend.activity, lastEventOn, closed: false }, rows, today),
   }
 }
 

@@ -16,7 +16,8 @@ export interface JudgedReading {
 }
 
 export interface MarkJudgement {
-  mark: { id: string, kind: MarkKind, shape: MarkShape | null, firstSeenOn: string }
+  /** A mark counts as new from the day it was reported, however long ago it was first seen. */
+  mark: { id: string, kind: MarkKind, shape: MarkShape | null, firstSeenOn: string, reportedOn: string }
   today: string
   /** The newest segment only. */
   readings: readonly JudgedReading[]
@@ -126,7 +127,7 @@ function stainFindings({ subject, stain, inOrder }: Judged): Finding[] {
 
 /** A new mark stands until a reading of a later day exists; under a load it stands for its whole first quarter. */
 function newMarkFindings({ mark, subject, loadAbove, today, inOrder }: Judged): Finding[] {
-  if (daysBetween(mark.firstSeenOn, today) > NEW_MARK_DAYS) return []
+  if (daysBetween(mark.reportedOn, today) > NEW_MARK_DAYS) return []
   if (!loadAbove || loadAbove.totalLb < LEAST_LOAD_ABOVE_LB) {
     if (inOrder[0]?.takenOn !== inOrder.at(-1)?.takenOn) return []
     return [{ rule: 'new-mark', subject, severity: 'notice', evidence: { firstSeenOn: mark.firstSeenOn }, adviceCode: 'watch-and-check-above' }]

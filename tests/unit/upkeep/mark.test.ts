@@ -5,9 +5,12 @@ import { markTrend } from '../../../shared/utils/movement/trend'
 import { findMarkFindings, type JudgedReading, type MarkJudgement } from '../../../shared/utils/upkeep/findMarkFindings'
 import { monthly, readingsOn } from '../movement/seeded'
 
+const LONG_KNOWN = { firstSeenOn: '2025-01-01', reportedOn: '2025-01-01' }
+const YOUNG = { firstSeenOn: '2024-06-01', reportedOn: '2026-01-01' }
+
 function judge(kind: MarkJudgement['mark']['kind'], readings: JudgedReading[], changes: Partial<MarkJudgement> = {}): MarkJudgement {
   return {
-    mark: { id: 'm1', kind, shape: null, firstSeenOn: '2026-01-01' }, today: readings.at(-1)?.takenOn ?? '2026-06-01', readings, trend: markTrend(readings),
+    mark: { id: 'm1', kind, shape: null, ...LONG_KNOWN }, today: readings.at(-1)?.takenOn ?? '2026-06-01', readings, trend: markTrend(readings),
     dangerSigns: [], dangerClearedOn: null, stain: null, loadAbove: null, ceilingSpanMm: null, plaster: false, nextReading: null, ...changes,
   }
 }
@@ -59,8 +62,7 @@ describe('Findings of a mark', () => {
     const trend = markTrend(growing, { seasonAllowance: 0.1 })
     expect(trend.activity).toBe('active')
     expect(findMarkFindings(judge('crack', growing, { trend }))).toMatchObject([{ rule: 'mark-active', severity: 'attention', adviceCode: 'look-then-engineer' }])
-    const above = { trend, mark: { id: 'm1', kind: 'crack' as const, shape: null, firstSeenOn: '2025-01-01' } }
-    expect(findMarkFindings(judge('crack', growing, { ...above, loadAbove: { totalLb: 400, utilisation: 1.3 } })))
+    expect(findMarkFindings(judge('crack', growing, { trend, loadAbove: { totalLb: 400, utilisation: 1.3 } })))
       .toMatchObject([{ rule: 'mark-active', severity: 'urgent', adviceCode: 'unload-then-engineer', evidence: { readingCount: 13, unit: 'mm' } }])
   })
 
@@ -78,7 +80,7 @@ describe('Findings of a mark', () => {
   it('of nail pops come with three more, or three in a row', () => {
     expect(rules(judge('nail-pops', readingsOn([0, 30], [2, 4], 0.5)))).toEqual([])
     expect(rules(judge('nail-pops', readingsOn([0, 30, 60, 90], [2, 3, 4, 5], 0.5)))).toEqual(['nail-pops-growing'])
-    const row = { mark: { id: 'm1', kind: 'nail-pops' as const, shape: 'bumps-in-a-row' as const, firstSeenOn: '2026-01-01' } }
+    const row = { mark: { id: 'm1', kind: 'nail-pops' as const, shape: 'bumps-in-a-row' as const, ...LONG_KNOWN } }
     expect(rules(judge('nail-pops', readingsOn([0], [3], 0.5), row))).toEqual(['nail-pops-in-line'])
     expect(rules(judge('nail-pops', readingsOn([0], [2], 0.5), row))).toEqual([])
   })
@@ -103,12 +105,21 @@ describe('Findings of a mark', () => {
     expect(rules(judge('stain', dry, { stain: { state: 'dripping', seenOn: '2026-01-01' } }))).toEqual([])
   })
 
+  it('of a new mark stand until it is read on a later day, counted from the report and not from when it was first seen', () => {
+    const mark = { id: 'm1', kind: 'crack' as const, shape: null, ...YOUNG }
+    expect(findMarkFindings(judge('crack', readingsOn([0], [1]), { mark }))).toMatchObject([{ rule: 'new-mark', severity: 'notice', evidence: { firstSeenOn: '2024-06-01' } }])
+    expect(rules(judge('crack', [], { mark, today: '2026-01-05' }))).toEqual(['new-mark'])
+    expect(rules(judge('crack', readingsOn([0, 7], [1, 1]), { mark }))).toEqual([])
+    expect(rules(judge('crack', readingsOn([0], [1]), { mark, today: addDays('2026-01-01', 91) }))).toEqual([])
+  })
+
   it('of a new mark look at what is above it', () => {
+    const mark = { id: 'm1', kind: 'crack' as const, shape: null, ...YOUNG }
     const young = readingsOn([0, 20], [1, 1])
-    expect(rules(judge('crack', young, { loadAbove: { totalLb: 49, utilisation: 0.1 } }))).toEqual([])
-    expect(findMarkFindings(judge('crack', young, { loadAbove: { totalLb: 300, utilisation: null } }))).toMatchObject([{ rule: 'new-mark-under-load', severity: 'attention' }])
-    expect(findMarkFindings(judge('crack', young, { loadAbove: { totalLb: 300, utilisation: 1.2 } }))).toMatchObject([{ severity: 'urgent', adviceCode: 'unload-then-engineer' }])
-    expect(rules(judge('crack', young, { today: addDays('2026-01-01', 91), loadAbove: { totalLb: 300, utilisation: 1.2 } }))).toEqual([])
+    expect(rules(judge('crack', young, { mark, loadAbove: { totalLb: 49, utilisation: 0.1 } }))).toEqual([])
+    expect(findMarkFindings(judge('crack', young, { mark, loadAbove: { totalLb: 300, utilisation: null } }))).toMatchObject([{ rule: 'new-mark-under-load', severity: 'attention' }])
+    expect(findMarkFindings(judge('crack', young, { mark, loadAbove: { totalLb: 300, utilisation: 1.2 } }))).toMatchObject([{ severity: 'urgent', adviceCode: 'unload-then-engineer' }])
+    expect(rules(judge('crack', young, { mark, today: addDays('2026-01-01', 91), loadAbove: { totalLb: 300, utilisation: 1.2 } }))).toEqual([])
   })
 
   it('of a late reading come after a week’s grace, graver when it matters more', () => {
