@@ -16,7 +16,7 @@ export const ATTEMPT_LIMITS = {
   'token by remote': { points: 60, minutes: 15 },
   'change password by person': { points: 10, minutes: 15 },
   'invite by organisation': { points: 200, minutes: 24 * 60 },
-  'invite by address': { points: 5, minutes: 24 * 60 },
+  'invite again by invitation': { points: 5, minutes: 24 * 60 },
 } as const satisfies Record<string, { points: number, minutes: number }>
 
 export type AttemptKind = keyof typeof ATTEMPT_LIMITS

@@ -18,6 +18,9 @@ export const unsound = (fields: Record<string, string>, message = 'Some answers 
   problem(422, 'unsound-input', message, { fields })
 export const clash = (theirs: object, message = 'Somebody else changed this meanwhile. Both versions are shown.') =>
   problem(409, 'changed-meanwhile', message, { theirs })
+/** A link of a mail that does not open anything any more. */
+export const linkClosed = (code: 'link-unknown' | 'link-used' | 'link-expired' | 'link-revoked', message: string) =>
+  problem(code === 'link-unknown' ? 404 : 410, code, message)
 export const tooMany = (retryAfterSeconds: number) =>
   problem(429, 'too-many-tries', 'Too many tries. Please wait a little.', { retryAfterSeconds })
 export const databaseAway = () =>

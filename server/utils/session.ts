@@ -1,4 +1,6 @@
 import type { H3Event } from 'h3'
+import type { Db } from '../db/connect'
+import { findSessionUser } from '../db/queries/accounts'
 import type { SessionIdentity } from '../db/queries/actor'
 
 declare module '#auth-utils' {
@@ -12,6 +14,12 @@ export async function sessionIdentity(event: H3Event): Promise<SessionIdentity |
   if (!getCookie(event, useRuntimeConfig(event).session.name ?? 'nuxt-session')) return undefined
   const { user, organisationId } = await getUserSession(event)
   return user ? { userId: user.id, epoch: user.epoch, organisationId } : undefined
+}
+
+/** The account of a live session, whatever its memberships; for the public routes. */
+export async function sessionUser(event: H3Event, db: Db) {
+  const identity = await sessionIdentity(event)
+  return identity && findSessionUser(db, identity)
 }
 
 export async function openSession(event: H3Event, user: { id: string, sessionEpoch: number }, organisationId?: string) {

@@ -7,6 +7,7 @@ import * as upkeep from './0005Upkeep'
 import * as record from './0006Record'
 import * as mailAttempts from './0007MailAttempts'
 import * as judging from './0008Judging'
+import * as invitationTerms from './0009InvitationTerms'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -18,4 +19,5 @@ export const migrations: Record<string, Migration> = {
   '0006Record': record,
   '0007MailAttempts': mailAttempts,
   '0008Judging': judging,
+  '0009InvitationTerms': invitationTerms,
 }

@@ -1,4 +1,4 @@
-import type { Defaulted, Instant } from '../schema'
+import type { Day, Defaulted, Instant } from '../schema'
 import type { Role } from '../../../shared/types/people'
 
 export interface PeopleTables {
@@ -58,6 +58,9 @@ export interface InvitationTable {
   role: Role
   unitId: string | null
   tenancyId: string | null
+  /** For an engineer: the last day of access. */
+  untilOn: Day | null
+  sends: Defaulted<number>
   tokenHash: string
   invitedBy: string
   expiresAt: Instant
