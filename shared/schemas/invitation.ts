@@ -19,7 +19,7 @@ const Fields = z.strictObject({
 type Draft = Partial<z.input<typeof Fields>>
 
 const rule = (field: keyof Draft, message: string, holds: (draft: Draft) => boolean) =>
-  [(draft: Draft) => holds(draft), { path: [field], message, when: ({ value }: { value: unknown }) => typeof value === 'object' && value !== null }] as const
+  [(draft: Draft) => holds(draft), { path: [field] as PropertyKey[], message, when: ({ value }: { value: unknown }) => typeof value === 'object' && value !== null }] as const
 
 const isForUnit = ({ role }: Draft) => role === 'tenant' || role === 'engineer'
 const makesTenancy = ({ role, tenancyId }: Draft) => role === 'tenant' && !tenancyId

@@ -28,7 +28,7 @@ export async function joinOrganisation(trx: Trx, actor: RecordActor, { organisat
     .onConflict(conflict => conflict.columns(['organisationId', 'userId']).doUpdateSet({ role, endedAt: null }))
     .returning('id').executeTakeFirstOrThrow()
   await appendRecord(trx, actor, {
-    organisationId, unitId: null, action: 'person joined', subjectKind: 'membership', subjectId: id, after: { name: user.name, role },
+    organisationId, unitId: null, action: 'person joined', subjectKind: 'person', subjectId: user.id, after: { name: user.name, role },
   })
   return id
 }

@@ -5,20 +5,23 @@ import type { TenancyCreateValue, TenancyEditValue } from '../../../shared/schem
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
 import { problem } from '../../utils/problems'
-import { appendRecord } from './appendRecord'
+import { appendRecord, type RecordActor } from './appendRecord'
 import { editRow } from './editRow'
 import { refuseArchived } from './refuseArchived'
 
 export function createTenancy(db: Db, actor: Actor, unit: Thing<'unit'>, input: TenancyCreateValue) {
   refuseArchived(unit, 'unit')
-  return refusingOverlap(() => db.transaction().execute(async (trx) => {
-    await refuseOverlap(trx, unit.id, input)
-    const id = newId()
-    const { organisationId } = unit
-    await trx.insertInto('tenancy').values({ id, organisationId, unitId: unit.id, ...input, createdAt: nowInstant() }).execute()
-    await appendRecord(trx, actor, { organisationId, unitId: unit.id, action: 'tenancy added', subjectKind: 'tenancy', subjectId: id, after: input })
-    return { id }
-  }))
+  return refusingOverlap(() => db.transaction().execute(trx => addTenancy(trx, actor, unit, input)))
+}
+
+/** In the caller's transaction: an invitation makes its tenancy with it. */
+export async function addTenancy(trx: Trx, actor: RecordActor, unit: Thing<'unit'>, input: TenancyCreateValue) {
+  await refuseOverlap(trx, unit.id, input)
+  const id = newId()
+  const { organisationId } = unit
+  await trx.insertInto('tenancy').values({ id, organisationId, unitId: unit.id, ...input, createdAt: nowInstant() }).execute()
+  await appendRecord(trx, actor, { organisationId, unitId: unit.id, action: 'tenancy added', subjectKind: 'tenancy', subjectId: id, after: input })
+  return { id }
 }
 
 export function editTenancy(db: Db, actor: Actor, tenancy: Thing<'tenancy'>, { version, ...patch }: TenancyEditValue) {
@@ -44,7 +47,7 @@ async function refuseOverlap(trx: Trx, unitId: string, { startsOn, endsOn, id }:
 const overlaps = (message: string, other?: object) => problem(409, 'overlaps', message, { fields: { startsOn: message }, other })
 
 /** Two people adding at the same moment: the database's own constraint refuses the second. */
-async function refusingOverlap<T>(work: () => Promise<T>): Promise<T> {
+export async function refusingOverlap<T>(work: () => Promise<T>): Promise<T> {
   try { return await work() }
   catch (error) {
     if ((error as { code?: string }).code === '23P01') throw overlaps('These days overlap with another tenancy.')

@@ -22,7 +22,7 @@ export function endMembership(db: Db, actor: Actor, membership: Thing<'membershi
     const access = await trx.deleteFrom('unitAccess').where('userId', '=', userId).where('organisationId', '=', organisationId).returning(['unitId', 'untilOn']).execute()
     const { name } = await trx.selectFrom('appUser').select('name').where('id', '=', userId).executeTakeFirstOrThrow()
     await appendRecord(trx, actor, {
-      organisationId, unitId: null, action: 'access ended', subjectKind: 'membership', subjectId: id,
+      organisationId, unitId: null, action: 'access ended', subjectKind: 'person', subjectId: userId,
       before: { name, role, tenancyIds: tenancies.map(row => row.tenancyId), unitAccess: access }, after: { name, role: null },
     })
     return { ended: true }

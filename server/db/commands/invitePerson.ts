@@ -14,6 +14,7 @@ import { ROLE_WORDS } from '../../../shared/utils/roleWords'
 import { appendRecord } from './appendRecord'
 import { addTenancy, refusingOverlap } from './createTenancy'
 import { queueMessage } from './queueMessage'
+import { refuseArchived } from './refuseArchived'
 
 const DAY_MS = 86_400_000
 export const invitationEnd = () => new Date(now().getTime() + INVITATION_DAYS * DAY_MS).toISOString()
@@ -50,7 +51,7 @@ async function unitOf(trx: Trx, actor: Actor, { role, unitId }: Invitation): Pro
   if ((role !== 'tenant' && role !== 'engineer') || !unitId) return undefined
   const unit = await things.unit(trx, unitId)
   if (!unit || unit.organisationId !== actor.organisationId) throw unsound({ unitId: 'Choose one of your homes.' })
-  if (unit.archivedAt) throw unsound({ unitId: 'This home is archived. Restore it first.' })
+  refuseArchived(unit, 'unit')
   return unit
 }
 

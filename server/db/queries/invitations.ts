@@ -19,7 +19,7 @@ export async function listInvitations(db: Db, actor: Actor, { search, after }: {
     .innerJoin('appUser as by', 'by.id', 'i.invitedBy')
     .leftJoin('unit as u', 'u.id', 'i.unitId').leftJoin('property as p', 'p.id', 'u.propertyId')
     .leftJoin('tenancy as t', 't.id', 'i.tenancyId')
-    .leftJoin('message as m', join => join.on(sql`m.dedupe_key = 'invitation:' || i.id || ':' || i.sends`))
+    .leftJoin('message as m', join => join.on(sql<boolean>`m.dedupe_key = 'invitation:' || i.id || ':' || i.sends`))
     .select(['i.id', 'i.email', 'i.role', 'i.untilOn', 'i.createdAt', 'i.expiresAt', 'by.name as invitedByName', 't.tenantName', 'm.state as mail',
       'u.id as unitId', 'u.name as unitName', 'p.name as propertyName'])
     .where('i.organisationId', '=', actor.organisationId).where('i.acceptedAt', 'is', null).where('i.revokedAt', 'is', null)
