@@ -19,11 +19,11 @@ export function endMembership(db: Db, actor: Actor, membership: Thing<'membershi
       .where('id', '=', id).where('endedAt', 'is', null).returning('id').executeTakeFirst()
     if (!ended) throw notFound()
     const tenancies = await trx.deleteFrom('tenancyPerson').where('userId', '=', userId).where('organisationId', '=', organisationId).returning('tenancyId').execute()
-    const access = await trx.deleteFrom('unitAccess').where('userId', '=', userId).where('organisationId', '=', organisationId).returning(['unitId', 'untilOn']).execute()
+    const access = await trx.deleteFrom('unitAccess').where('userId', '=', userId).where('organisationId', '=', organisationId).returning('unitId').execute()
     const { name } = await trx.selectFrom('appUser').select('name').where('id', '=', userId).executeTakeFirstOrThrow()
     await appendRecord(trx, actor, {
       organisationId, unitId: null, action: 'access ended', subjectKind: 'person', subjectId: userId,
-      before: { name, role, tenancyIds: tenancies.map(row => row.tenancyId), unitAccess: access }, after: { name, role: null },
+      before: { name, role, tenancyIds: tenancies.map(row => row.tenancyId), unitIds: access.map(row => row.unitId) }, after: { name, role: null },
     })
     return { ended: true }
   })
