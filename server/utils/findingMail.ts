@@ -1,7 +1,8 @@
 import type { Finding, FindingRule } from '../../shared/types/finding'
 import type { UnitsOfMeasure } from '../../shared/types/people'
+import { formatDay } from '../../shared/utils/days'
 import { ADVICE_SENTENCES, findingSentence, findingTitle, SEVERITY_WORDS } from '../../shared/utils/messages/findingMessages'
-import { ESTIMATE_CAVEAT, LEAVE_ROOM_SIGNS } from '../../shared/utils/messages/safety'
+import { ESTIMATE_CAVEAT, LEAVE_ROOM_SIGNS, RESPONSE_TIMES_CAVEAT } from '../../shared/utils/messages/safety'
 import { appUrl } from './appUrl'
 import type { MailContent } from './mailDesign'
 
@@ -63,5 +64,16 @@ export function newMarkMail({ place, findings, mailClass, system, mark, report }
     items: findings.map(entry => asItem(entry, system)),
     action: { label: 'See the mark and its photos', href: appUrl(`/marks/${mark.id}`) },
     footer: footerOf(place, mailClass),
+  }
+}
+
+/** An urgent finding nobody has answered within the organisation's own response time. */
+export function unansweredMail({ openedAt, ...mail }: UrgentMail & { openedAt: string }): MailContent {
+  const urgent = urgentFindingMail(mail)
+  return {
+    ...urgent,
+    subject: `Unanswered: ${urgent.subject}`,
+    heading: `Nobody has answered this since ${formatDay(openedAt.slice(0, 10))}`,
+    footer: [RESPONSE_TIMES_CAVEAT, ...urgent.footer],
   }
 }

@@ -4,6 +4,8 @@ export interface MailContent {
   heading: string
   paragraphs: string[]
   items?: MailItem[]
+  /** Items under headings of their own: one home each. */
+  groups?: { heading: string, items: MailItem[] }[]
   action?: { label: string, href: string }
   /** Why the person gets this, and what they can do about it. */
   footer: string[]
@@ -18,19 +20,32 @@ const MOST_ITEMS = 60
 
 /** Our own plain design: text first, the same words as HTML. No pictures, nothing fetched, no tracking. */
 export function renderMail(content: MailContent): RenderedMail {
-  const items = (content.items ?? []).slice(0, MOST_ITEMS)
-  const left = (content.items?.length ?? 0) - items.length
-  const shown = { ...content, items, more: left > 0 ? `And ${left} more. You find them all after signing in.` : undefined }
+  const { groups, left } = cutGroups([...(content.items ? [{ heading: '', items: content.items }] : []), ...(content.groups ?? [])])
+  const shown = { ...content, groups, more: left > 0 ? `And ${left} more. You find them all after signing in.` : undefined }
   return { subject: oneLine(content.subject), text: asText(shown), html: asHtml(shown) }
 }
 
-type Shown = MailContent & { items: MailItem[], more?: string }
+type Shown = MailContent & { groups: NonNullable<MailContent['groups']>, more?: string }
 
-function asText({ heading, paragraphs, items, more, action, footer }: Shown): string {
+function cutGroups(groups: NonNullable<MailContent['groups']>) {
+  let room = MOST_ITEMS
+  const all = groups.reduce((sum, group) => sum + group.items.length, 0)
+  const kept = groups.flatMap((group) => {
+    const items = group.items.slice(0, room)
+    room -= items.length
+    return items.length > 0 ? [{ ...group, items }] : []
+  })
+  return { groups: kept, left: Math.max(0, all - MOST_ITEMS) }
+}
+
+function asText({ heading, paragraphs, groups, more, action, footer }: Shown): string {
   const parts = [
     heading, '='.repeat(Math.min(heading.length, LINE_CHARACTERS)), '',
     ...paragraphs.flatMap(paragraph => [wrap(paragraph), '']),
-    ...items.flatMap(item => [wrap(`* ${item.title}`), ...(item.detail ? [wrap(`  ${item.detail}`)] : []), `  ${item.label}: ${item.href}`, '']),
+    ...groups.flatMap(group => [
+      ...(group.heading ? [group.heading, '-'.repeat(Math.min(group.heading.length, LINE_CHARACTERS))] : []),
+      ...group.items.flatMap(item => [wrap(`* ${item.title}`), ...(item.detail ? [wrap(`  ${item.detail}`)] : []), `  ${item.label}: ${item.href}`, '']),
+    ]),
     ...(more ? [more, ''] : []),
     ...(action ? [`${action.label}:`, action.href, ''] : []),
     '--', ...footer.map(wrap),
@@ -56,7 +71,7 @@ const LINK = 'color:#17635A;font-weight:bold;text-decoration:underline'
 const FONT = 'font-family:\'Nunito Sans\',\'Segoe UI\',Helvetica,Arial,sans-serif'
 const RULE = 'border-top:1px solid #8A8F86'
 
-function asHtml({ subject, heading, paragraphs, items, more, action, footer }: Shown): string {
+function asHtml({ subject, heading, paragraphs, groups, more, action, footer }: Shown): string {
   const link = (href: string, label: string) => `<a class="link" href="${escape(href)}" style="${LINK}">${escape(label)}</a>`
   return `<!doctype html>
 <html lang="en"><head><meta charset="utf-8">
@@ -68,8 +83,9 @@ function asHtml({ subject, heading, paragraphs, items, more, action, footer }: S
 <div role="article" style="max-width:600px;margin:0 auto;padding:24px 16px;${FONT};font-size:16px;line-height:1.5">
 <h1 style="margin:0 0 16px;font-size:22px;line-height:1.3">${escape(heading)}</h1>
 ${paragraphs.map(paragraph => `<p style="margin:0 0 16px">${escape(paragraph)}</p>`).join('\n')}
-${items.map(item => `<div style="${RULE};padding:12px 0"><p style="margin:0;font-weight:bold">${escape(item.title)}</p>
-${item.detail ? `<p style="margin:4px 0 0">${escape(item.detail)}</p>` : ''}<p style="margin:8px 0 0">${link(item.href, item.label)}</p></div>`).join('\n')}
+${groups.map(group => `${group.heading ? `<h2 style="margin:24px 0 8px;font-size:18px;line-height:1.3">${escape(group.heading)}</h2>` : ''}
+${group.items.map(item => `<div style="${RULE};padding:12px 0"><p style="margin:0;font-weight:bold">${escape(item.title)}</p>
+${item.detail ? `<p style="margin:4px 0 0">${escape(item.detail)}</p>` : ''}<p style="margin:8px 0 0">${link(item.href, item.label)}</p></div>`).join('\n')}`).join('\n')}
 ${more ? `<p style="margin:16px 0">${escape(more)}</p>` : ''}
 ${action ? `<p style="margin:24px 0"><a class="link" href="${escape(action.href)}" style="${LINK};display:inline-block;padding:12px 20px;border:2px solid;border-radius:2px;text-decoration:none">${escape(action.label)}</a></p>` : ''}
 <div style="${RULE};margin-top:24px;padding-top:12px;font-size:14px">
