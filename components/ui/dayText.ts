@@ -1,18 +1,8 @@
-const months = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec']
-
-/** '2027-03-14' → '14 Mar 2027'. Null when it is no day of the calendar. */
-export function dayText(day: string): string | null {
-  const match = /^(\d{4})-(\d{2})-(\d{2})$/.exec(day)
-  if (!match) return null
-  const [year, month, date] = [Number(match[1]), Number(match[2]), Number(match[3])]
-  const lastDate = new Date(Date.UTC(year, month, 0)).getUTCDate()
-  if (month < 1 || month > 12 || date < 1 || date > lastDate) return null
-  return `${date} ${months[month - 1]} ${year}`
-}
+import { formatDay, isDay } from '../../shared/utils/days'
 
 /**
  * An instant as a day in a time zone, with the time of day when asked: '14 Mar 2027, 14:08'.
- * Server and browser must write the same, so the zone is never the machine's own.
+ * Server and browser must write the same, so the zone is never the machine's own. Null when it is no instant.
  */
 export function instantText(instant: Date, options: { timeZone?: string, withTime?: boolean } = {}): string | null {
   if (Number.isNaN(instant.getTime())) return null
@@ -21,7 +11,14 @@ export function instantText(instant: Date, options: { timeZone?: string, withTim
     year: 'numeric', month: '2-digit', day: '2-digit', hour: '2-digit', minute: '2-digit',
   }).formatToParts(instant)
   const part = (type: Intl.DateTimeFormatPartTypes) => parts.find(p => p.type === type)?.value ?? ''
-  const day = dayText(`${part('year')}-${part('month')}-${part('day')}`)
-  if (!options.withTime || day === null) return day
-  return `${day}, ${part('hour')}:${part('minute')}${options.timeZone ? '' : ' UTC'}`
+  const day = formatDay(`${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`)
+  return options.withTime ? `${day}, ${part('hour')}:${part('minute')}${options.timeZone ? '' : ' UTC'}` : day
+}
+
+/** A day or an instant in words, with the form a machine reads; null when it is neither. */
+export function timeText(value: string | Date, options: { timeZone?: string, withTime?: boolean } = {}): { text: string, machine: string } | null {
+  if (typeof value === 'string' && isDay(value)) return { text: formatDay(value), machine: value }
+  const instant = new Date(value)
+  const text = instantText(instant, options)
+  return text === null ? null : { text, machine: instant.toISOString() }
 }

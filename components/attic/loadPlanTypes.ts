@@ -1,0 +1,23 @@
+import type { LoadTone } from '../house/sectionTypes'
+
+export interface LoadPlanField { spanFt: number, spacingIn: number, joistCount: number }
+
+export interface LoadPlanItem {
+  id: string
+  name: string
+  /** From the first wall, along the joists. */
+  xFt: number
+  /** From the first joist, across them. */
+  yFt: number
+  lengthFt: number
+  widthFt: number
+  weightLb: number
+  state: LoadTone
+}
+
+export interface LoadPlanJoist { utilisation: number, state: LoadTone }
+
+/** The bearing walls at x = 0 and x = span: 'south wall', 'hall wall'. */
+export interface LoadPlanWalls { start: string, end: string }
+
+export interface LoadPlanSpot { xFt: number, yFt: number, lengthFt: number, widthFt: number }
