@@ -1,4 +1,8 @@
+import type { InjectionKey, MaybeRef } from 'vue'
 import { formatDay, isDay } from '../../shared/utils/days'
+
+/** The time zone of the organisation, provided once by the frame around the page. */
+export const timeZoneKey: InjectionKey<MaybeRef<string | undefined>> = Symbol('time zone')
 
 /**
  * An instant as a day in a time zone, with the time of day when asked: '14 Mar 2027, 14:08'.

@@ -4,7 +4,7 @@ import type { Component, ComponentPublicInstance } from 'vue'
 interface Mounting {
   props?: Record<string, unknown>
   slots?: Record<string, unknown>
-  global?: { provide?: Record<string, unknown> }
+  global?: { provide?: Record<string | symbol, unknown> }
 }
 
 /** Mounts a component as it stands on a page; links are plain anchors, since there is no router here. */

@@ -17,6 +17,7 @@ import UiUndo from '../../../components/ui/UiUndo.vue'
 import UiVerdict from '../../../components/ui/UiVerdict.vue'
 import { frameEntries, isWithin } from '../../../components/ui/frameNav'
 import { wordsForError } from '../../../components/ui/errorWords'
+import { timeZoneKey } from '../../../components/ui/dayText'
 import { mountUi } from './mountUi'
 
 const plain = (text: string) => text.replaceAll('\u00A0', ' ')
@@ -101,7 +102,7 @@ describe('a day', () => {
   })
 
   it('takes its zone from the frame around it', () => {
-    expect(plain(mountUi(UiDay, { props: { value: '2027-03-14T23:30:00Z' }, global: { provide: { timeZone: 'Asia/Tokyo' } } }).text())).toBe('15 Mar 2027')
+    expect(plain(mountUi(UiDay, { props: { value: '2027-03-14T23:30:00Z' }, global: { provide: { [timeZoneKey as symbol]: 'Asia/Tokyo' } } }).text())).toBe('15 Mar 2027')
   })
 
   it('that is missing is said, not guessed', () => {
