@@ -34,7 +34,7 @@ export function readingPoints({ readings }: MarkChartData): Point[] {
   return sorted(readings).map(({ takenOn, value }) => ({ x: timeOf(takenOn), y: value }))
 }
 
-/** One upright stroke of ±1.96 σ a reading, with caps, as one broken line. */
+/** One upright stroke of ±1.96 σ a reading, with caps, as one broken line. The charting library drops the first point after a break, so it stands twice. */
 export function errorBars(data: MarkChartData): Point[] {
   const { min, max } = timeRange(data)
   const cap = (max - min) * 0.006
@@ -42,7 +42,7 @@ export function errorBars(data: MarkChartData): Point[] {
     const x = timeOf(takenOn)
     const [low, high] = [Math.max(0, value - 1.96 * sigma), value + 1.96 * sigma]
     return [
-      { x: x - cap, y: low }, { x: x + cap, y: low }, { x, y: low }, { x, y: high }, { x: x - cap, y: high }, { x: x + cap, y: high }, { x: x + cap, y: null },
+      { x: x - cap, y: low }, { x: x - cap, y: low }, { x: x + cap, y: low }, { x, y: low }, { x, y: high }, { x: x - cap, y: high }, { x: x + cap, y: high }, { x: x + cap, y: null },
     ]
   })
 }

@@ -1,5 +1,6 @@
 const narrow = /[iljtfrI.,:;'’|!()[\] ·]/
-const wide = /[mwMW@%—]/
+const wide = /[mwMQO@%]/
+const widest = /[W\u2000-\uffff]/
 const capital = /[A-Z]/
 
 /**
@@ -10,6 +11,7 @@ export function textWidth(text: string, fontPx: number): number {
   let em = 0
   for (const letter of text) {
     if (narrow.test(letter)) em += 0.42
+    else if (widest.test(letter)) em += 1.12
     else if (wide.test(letter)) em += 0.98
     else if (capital.test(letter)) em += 0.76
     else em += 0.62

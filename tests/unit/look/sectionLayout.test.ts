@@ -142,6 +142,16 @@ describe('spreading along a line', () => {
 })
 
 describe('fitting a text', () => {
+  /** Measured in Chromium on a canvas, Nunito Sans 600 as shipped by @fontsource/nunito-sans 5.3.0, in em. */
+  it.each([
+    ['tools 140 lb', 5.498], ['clothes 150 lb', 6.513], ['winter clothes, 6 totes 1,940 lb', 14.207], ['Living room', 5.353], ['2.1 mm', 3.432],
+    ['MMMM', 3.444], ['WWWW', 4.428], ['illicit', 2.173], ['5 pops', 3.094], ['Bathroom', 4.522], ['0123456789', 6],
+    ['abcdefghijklmnopqrstuvwxyz', 13.385], ['ABCDEFGHIJKLMNOPQRSTUVWXYZ', 17.338], ['łąßé', 2.215], ['Æ—…·×½', 4.394],
+  ])('never thinks "%s" narrower than it is, nor wider by more than half', (text, em) => {
+    expect(textWidth(text, 1)).toBeGreaterThanOrEqual(em)
+    expect(textWidth(text, 1)).toBeLessThan(em * 1.5)
+  })
+
   it('yields a text that fits, or none', () => {
     fc.assert(fc.property(word, fc.integer({ min: 0, max: 300 }), (text, room) => {
       const fitted = fitText(text, 14, room)
