@@ -3,6 +3,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { enableAutoUnmount, RouterLinkStub } from '@vue/test-utils'
 import { nextTick } from 'vue'
 import FrameBar from '../../../components/ui/FrameBar.vue'
+import PhoneBar from '../../../components/ui/PhoneBar.vue'
 import UiBreadcrumb from '../../../components/ui/UiBreadcrumb.vue'
 import UiButton from '../../../components/ui/UiButton.vue'
 import UiClash from '../../../components/ui/UiClash.vue'
@@ -10,11 +11,14 @@ import UiDay from '../../../components/ui/UiDay.vue'
 import UiEmpty from '../../../components/ui/UiEmpty.vue'
 import UiNotice from '../../../components/ui/UiNotice.vue'
 import UiProgress from '../../../components/ui/UiProgress.vue'
+import UiSafety from '../../../components/ui/UiSafety.vue'
 import UiStateWord from '../../../components/ui/UiStateWord.vue'
 import UiTable from '../../../components/ui/UiTable.vue'
 import UiTitleBlock from '../../../components/ui/UiTitleBlock.vue'
 import UiUndo from '../../../components/ui/UiUndo.vue'
 import UiVerdict from '../../../components/ui/UiVerdict.vue'
+import { safetyWords } from '../../../components/ui/safetyWords'
+import { LEAVE_ROOM_SIGNS, TRUSS_CAUTION } from '../../../shared/utils/messages/safety'
 import { frameEntries, isWithin } from '../../../components/ui/frameNav'
 import { wordsForError } from '../../../components/ui/errorWords'
 import { timeZoneKey } from '../../../components/ui/dayText'
@@ -219,5 +223,28 @@ describe('the frame', () => {
     }
     expect(wordsForError(503).again).toBe(true)
     expect(wordsForError(404).again).toBe(false)
+  })
+})
+
+describe('the bar of a phone page', () => {
+  it('goes a step back by an event, a page back by a link, else home', async () => {
+    const bar = mountUi(PhoneBar, { props: { canGoBack: true, step: 2, of: 6, saved: 'Saved on this phone' } })
+    await bar.get('button').trigger('click')
+    expect(bar.emitted('back')).toHaveLength(1)
+    expect(bar.get('[role=status]').text()).toBe('Saved on this phone')
+    expect(bar.text()).toContain('Step 2 of 6')
+    expect(mountUi(PhoneBar, { props: { backTo: '/units/3' } }).getComponent(RouterLinkStub).props('to')).toBe('/units/3')
+    expect(mountUi(PhoneBar).getComponent(RouterLinkStub).props('to')).toBe('/')
+  })
+})
+
+describe('a caution', () => {
+  it('stands whole, word for word as it is kept in one place', () => {
+    for (const code of Object.keys(safetyWords) as (keyof typeof safetyWords)[]) {
+      const caution = mountUi(UiSafety, { props: { code } })
+      for (const sentence of safetyWords[code].text) expect(caution.text()).toContain(sentence)
+    }
+    expect(mountUi(UiSafety, { props: { code: 'trusses' } }).text()).toContain(TRUSS_CAUTION)
+    expect(mountUi(UiSafety, { props: { code: 'leave-room' } }).text()).toContain(LEAVE_ROOM_SIGNS)
   })
 })
