@@ -1,0 +1,89 @@
+import type { LoadField, LoadPlanProblem, LoadState, PlacedItem } from '../../types/loadPlan'
+import { checkLoadPlan, fieldWidthFt } from './checkLoadPlan'
+import { itemShares, joistLoads, lineLoad } from './itemShares'
+import { governingLimit, isHeavyInMiddle } from './judgeLoadPlan'
+import type { JudgeOptions } from './judgeLoadPlan'
+import { weakestMember } from './loadField'
+import { joistRatios, ratedEffects, ratedTotalLb } from './loadPlan'
+import { loadStateOf } from './loadState'
+import { memberRatios } from './memberRatios'
+import { traceSpan } from './spanTrace'
+
+export const GRID_FT = 0.5
+/** How many places are suggested; ours. */
+const MOST_SUGGESTED = 5
+
+export type NewItem = Pick<PlacedItem, 'lengthFt' | 'widthFt' | 'weightLb'>
+
+export interface Spot {
+  xFt: number
+  yFt: number
+  /** The most used joist under the item if it stood here. */
+  utilisation: number
+  state: LoadState
+  heavyInMiddle: boolean
+  /** No other item stands here. */
+  free: boolean
+  /** From the nearer bearing wall to the item's nearer edge. */
+  fromWallFt: number
+}
+
+export type Places
+  = | { kind: 'places', totalRatio: number, spots: Spot[], best: Spot[] }
+    | { kind: 'larger-than-field', spanFt: number, fieldWidthFt: number }
+    | { kind: 'nothing-allowed' }
+    | { kind: 'refused', problems: LoadPlanProblem[] }
+
+/** 0, ½, 1 … and the last place that still fits. */
+function gridFt(roomFt: number): number[] {
+  const steps = Math.floor(roomFt / GRID_FT + 1e-9)
+  const places = Array.from({ length: steps + 1 }, (_, step) => step * GRID_FT)
+  return roomFt - steps * GRID_FT > 1e-6 ? [...places, roomFt] : places
+}
+
+const apart = (fromA: number, sizeA: number, fromB: number, sizeB: number): boolean => fromA + sizeA <= fromB + 1e-9 || fromB + sizeB <= fromA + 1e-9
+const overlaps = (a: Omit<PlacedItem, 'id' | 'weightLb'>, b: Omit<PlacedItem, 'id' | 'weightLb'>): boolean =>
+  !apart(a.xFt, a.lengthFt, b.xFt, b.lengthFt) && !apart(a.yFt, a.widthFt, b.yFt, b.widthFt)
+
+/** Least used first, then nearest to a bearing wall; the suggested places do not overlap. */
+function bestOf(spots: Spot[], item: NewItem): Spot[] {
+  const fit = spots.filter(spot => spot.state !== 'over' && spot.free && !spot.heavyInMiddle)
+    .sort((a, b) => a.utilisation - b.utilisation || a.fromWallFt - b.fromWallFt)
+  const best: Spot[] = []
+  for (const spot of fit) {
+    if (best.every(chosen => !overlaps({ ...spot, ...item }, { ...chosen, ...item }))) best.push(spot)
+    if (best.length === MOST_SUGGESTED) break
+  }
+  return best
+}
+
+/**
+ * Every place on a ½ ft grid where an item could stand, with the utilisation that would result. Sharing by strongbacks is
+ * left out, on the safe side. Nothing is suggested when the total would pass the rated total.
+ */
+export function whereMayItGo(field: LoadField, items: PlacedItem[], item: NewItem, options: Pick<JudgeOptions, 'member'> = {}): Places {
+  const problems = checkLoadPlan(field, [...items, { ...item, id: 'new', xFt: 0, yFt: 0 }])
+  if (problems.some(problem => problem.code !== 'outside-field' || problem.at.part !== 'item' || problem.at.id !== 'new')) return { kind: 'refused', problems }
+  if (problems.length > 0) return { kind: 'larger-than-field', spanFt: field.spanFt, fieldWidthFt: fieldWidthFt(field) }
+  if (field.ratedPsf === 0) return { kind: 'nothing-allowed' }
+  const member = options.member ?? weakestMember()
+  const rated = ratedEffects(field)
+  const loads = joistLoads(field, items)
+  const spots: Spot[] = []
+  for (const yFt of gridFt(fieldWidthFt(field) - item.widthFt)) {
+    const shares = itemShares(field, { yFt, widthFt: item.widthFt })
+    for (const xFt of gridFt(field.spanFt - item.lengthFt)) {
+      const placed: PlacedItem = { ...item, id: 'new', xFt, yFt }
+      const utilisation = shares.reduce((most, { joist, share }) => {
+        const trace = traceSpan(field.spanFt, [...(loads[joist] ?? []), lineLoad(field, placed, share)])
+        return Math.max(most, governingLimit({ ...joistRatios(trace, rated), ...memberRatios(field, member, trace) }).utilisation)
+      }, 0)
+      spots.push({
+        xFt, yFt, utilisation, state: loadStateOf(utilisation), heavyInMiddle: isHeavyInMiddle(field, placed),
+        free: !items.some(other => overlaps(placed, other)), fromWallFt: Math.min(xFt, field.spanFt - xFt - item.lengthFt),
+      })
+    }
+  }
+  const totalRatio = items.reduce((sum, other) => sum + other.weightLb, item.weightLb) / ratedTotalLb(field)
+  return { kind: 'places', totalRatio, spots, best: loadStateOf(totalRatio) === 'over' ? [] : bestOf(spots, item) }
+}
