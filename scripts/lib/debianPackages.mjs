@@ -27,17 +27,24 @@ export const mayInstall = () => process.getuid?.() === 0 && findProgram('apt-get
  * @param {(line: string) => void} options.say
  */
 export async function installDebianPackages({ packages, keeper, say }) {
-  const apt = parameters => keeper.run('apt-get', parameters, {
-    // Our temporary folder may be closed to the account apt downloads as.
-    env: { ...process.env, TMPDIR: undefined, DEBIAN_FRONTEND: 'noninteractive' }, cwd: '/', stdio: ['ignore', 'ignore', 'inherit'], graceMs: 30_000,
-  })
   say(`Installing ${packages.join(', ')} from Debian's packages …`)
   const steps = [
     ['-qq', 'update'],
     ['-qq', 'install', '-y', '--no-install-recommends', '-o', 'Dpkg::Options::=--force-confold', ...packages],
   ]
   for (const parameters of steps) {
-    const code = await apt(parameters)
-    if (code !== 0) throw new Refusal(`apt-get ${parameters[1]} failed (code ${code}). Its message is above. Install ${packages.join(' and ')} by hand, then run the command again.`)
+    const { code, output } = await runApt(parameters, keeper)
+    if (code !== 0) throw new Refusal(`${output.trimEnd()}\n\napt-get ${parameters[1]} failed (code ${code}). Install ${packages.join(' and ')} by hand, then run the command again.`)
   }
+}
+
+/** Its remarks (no terminal, no init system in a container) matter only where it fails. */
+async function runApt(parameters, keeper) {
+  const apt = keeper.start('apt-get', parameters, {
+    // Our temporary folder may be closed to the account apt downloads as.
+    env: { ...process.env, TMPDIR: undefined, DEBIAN_FRONTEND: 'noninteractive' }, cwd: '/', stdio: ['ignore', 'pipe', 'pipe'], graceMs: 30_000,
+  })
+  let output = ''
+  for (const stream of [apt.child.stdout, apt.child.stderr]) stream?.setEncoding('utf8').on('data', text => output += text)
+  return { code: (await apt.exited).code, output }
 }
