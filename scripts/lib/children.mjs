@@ -38,14 +38,14 @@ export function startChild(command, parameters, options = {}) {
 }
 
 async function stopGroup(child, exited, { isRunning, stopSignal, graceMs }) {
-  if (isRunning()) {
-    signalGroup(child.pid, stopSignal)
-    const timer = setTimeout(() => signalGroup(child.pid, 'SIGKILL'), graceMs)
-    await exited
-    clearTimeout(timer)
-  }
+  // The number of a process that has ended may belong to somebody else by now.
+  if (!isRunning()) return
+  signalGroup(child.pid, stopSignal)
+  const timer = setTimeout(() => signalGroup(child.pid, 'SIGKILL'), graceMs)
+  await exited
+  clearTimeout(timer)
   // Grandchildren that outlived their parent are still in the group.
-  if (child.pid !== undefined) signalGroup(child.pid, 'SIGKILL')
+  signalGroup(child.pid, 'SIGKILL')
 }
 
 function signalGroup(pid, signal) {

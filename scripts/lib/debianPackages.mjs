@@ -46,5 +46,6 @@ async function runApt(parameters, keeper) {
   })
   let output = ''
   for (const stream of [apt.child.stdout, apt.child.stderr]) stream?.setEncoding('utf8').on('data', text => output += text)
-  return { code: (await apt.exited).code, output }
+  const { code } = await apt.exited
+  return { code, output }
 }
