@@ -1,11 +1,9 @@
-import type { Finding } from '../../../shared/types/finding'
-import { inventoryTotal } from '../../../shared/utils/goods/inventoryTotal'
-import { rateAttic } from '../../../shared/utils/structure/rating'
-import { findAtticFindings, NEAR_SHARE, type AtticJudgement } from '../../../shared/utils/upkeep/findAtticFindings'
+import type { JudgedContents } from '../../../shared/types/contents'
+import { judgeContents } from '../../../shared/utils/attic/judgeContents'
+import { findAtticFindings, type AtticJudgement } from '../../../shared/utils/upkeep/findAtticFindings'
 import type { Trx } from '../connect'
 import type { AtticStatusTable } from '../schema/upkeep'
 import { dayIn, nowInstant } from '../../utils/clock'
-import { ratedTotalLb } from '../../utils/judgedLoad'
 import { asAtticDocument, findDocuments, findItemsIn, findLatestSurvey } from '../queries/attics'
 import { asAtticItem, findJudgedAttic, findJudgedMark } from '../queries/judging'
 import type { RecordActor } from './appendRecord'
@@ -42,42 +40,45 @@ export async function judgeLockedAttic(trx: Trx, attic: JudgedAttic): Promise<vo
     await trx.deleteFrom('atticStatus').where('atticId', '=', attic.id).execute()
     return
   }
-  const judgement = await judgementOf(trx, attic)
+  const { judgement, contents } = await judgementOf(trx, attic)
   const findings = findAtticFindings(judgement)
-  await storeStatus(trx, attic, statusOf(judgement, findings))
+  await storeStatus(trx, attic, statusOf(contents))
   const changes = await keepFindings(trx, scope, findings)
   await tellStaffUrgent(trx, { ...scope, changes })
 }
 
-async function judgementOf(trx: Trx, attic: JudgedAttic): Promise<AtticJudgement> {
+async function judgementOf(trx: Trx, attic: JudgedAttic): Promise<{ judgement: AtticJudgement, contents: JudgedContents }> {
   const survey = await findLatestSurvey(trx, attic.id)
   const documents = await findDocuments(trx, attic.id)
-  const items = (await findItemsIn(trx, attic.id)).map(asAtticItem)
-  const rating = survey ? rateAttic(survey.answers, documents.map(asAtticDocument)) : null
+  const rows = await findItemsIn(trx, attic.id)
+  const contents = judgeContents({ survey: survey?.answers ?? null, documents: documents.map(asAtticDocument), items: rows })
   const inspections = documents.filter(document => document.kind === 'inspection-record').map(document => document.writtenOn)
   return {
-    atticId: attic.id, today: dayIn(attic.timeZone), items, rating,
-    load: null,
-    ratedTotalLb: survey && rating ? ratedTotalLb(survey.answers, rating) : null,
-    confirmedOn: attic.inventoryConfirmedOn,
-    inspectedOn: [...inspections, ...(survey ? [survey.surveyedOn] : [])].sort().at(-1) ?? null,
+    contents,
+    judgement: {
+      atticId: attic.id, today: dayIn(attic.timeZone), items: rows.map(asAtticItem), rating: contents.rating,
+      load: loadOf(contents), ratedTotalLb: contents.ratedTotalLb,
+      confirmedOn: attic.inventoryConfirmedOn,
+      inspectedOn: [...inspections, ...(survey ? [survey.surveyedOn] : [])].sort().at(-1) ?? null,
+    },
+  }
+}
+
+/** The load plans of all fields together, as the rules read them; null while none can be drawn. */
+function loadOf(contents: JudgedContents): AtticJudgement['load'] {
+  const plans = contents.fields.flatMap(field => field.plan?.kind === 'judged' ? [{ fieldId: field.name, joists: field.plan.joists }] : [])
+  if (plans.length === 0) return null
+  return {
+    totalLb: contents.totalLb, ratedTotalLb: contents.ratedTotalLb, heavyInMiddle: contents.heavyInMiddle,
+    joists: plans.flatMap(({ fieldId, joists }) => joists.map(({ utilisation }, index) => ({ fieldId, joistNumber: index + 1, utilisation }))),
   }
 }
 
 type Status = Pick<AtticStatusTable, 'loadState' | 'utilisation' | 'storedLb' | 'ratedPsf'>
 
-function statusOf({ rating, load, ratedTotalLb: areaLb, items }: AtticJudgement, findings: Finding[]): Status {
-  const storedLb = inventoryTotal(items).typicalLb
-  if (!rating) return { loadState: 'unsurveyed', utilisation: null, storedLb, ratedPsf: null }
-  const common = { storedLb, ratedPsf: rating.ratedPsf }
-  if (rating.hold) return { ...common, loadState: 'hold', utilisation: null }
-  if (rating.ratedPsf <= 0) return { ...common, loadState: storedLb > 0 ? 'over' : 'within', utilisation: null }
-  const ratedLb = load?.ratedTotalLb ?? areaLb
-  const shares = [...(ratedLb ? [storedLb / ratedLb] : []), ...(load?.joists ?? []).map(joist => joist.utilisation)].filter(Number.isFinite)
-  const utilisation = shares.length > 0 ? Math.max(...shares) : null
-  const over = (utilisation ?? 0) > 1 || findings.some(finding => finding.rule === 'joist-over')
-  const near = (utilisation ?? 0) >= NEAR_SHARE || findings.some(finding => finding.rule === 'attic-may-exceed')
-  return { ...common, utilisation, loadState: over ? 'over' : near ? 'near' : 'within' }
+function statusOf({ state, rating, totalLb, utilisation }: JudgedContents): Status {
+  const loadState = state === 'empty' ? 'within' : state === 'no-storage' ? totalLb > 0 ? 'over' : 'within' : state
+  return { loadState, utilisation: rating && !rating.hold && utilisation !== null && Number.isFinite(utilisation) ? utilisation : null, storedLb: totalLb, ratedPsf: rating?.ratedPsf ?? null }
 }
 
 async function storeStatus(trx: Trx, attic: JudgedAttic, status: Status) {

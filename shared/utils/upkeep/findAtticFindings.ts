@@ -12,7 +12,8 @@ export interface JudgedRating { ratedPsf: number, hold: boolean, basis: string, 
 /** The part of a load plan's verdict the rules look at, for all fields of the attic together. */
 export interface JudgedLoad {
   totalLb: number
-  ratedTotalLb: number
+  /** Null while a field is not measured: the measured part alone would be taken for the whole. */
+  ratedTotalLb: number | null
   joists: readonly { fieldId: string, joistNumber: number, utilisation: number }[]
   /** Items whose weight over footprint exceeds the rating in the middle half of the span. */
   heavyInMiddle: readonly string[]

@@ -1,0 +1,41 @@
+import type { AtticDetail, AtticListRow } from '~/shared/types/atticDetail'
+import type { AtticSurvey } from '~/shared/types/attic'
+import type { AtticItemEditValue, AtticItemMovesValue, AtticItemValue } from '~/shared/schemas/atticItem'
+
+export const atticKey = (atticId: string) => ['attics', atticId]
+
+export const useAttic = (atticId: string) =>
+  useServerQuery<AtticDetail>({ key: atticKey(atticId), path: `/api/attics/${atticId}`, essential: true })
+
+export const useAttics = (search: Ref<string>, after: Ref<string | undefined>) => useServerQuery<{ rows: AtticListRow[], next: string | null }>({
+  key: () => ['attics', 'list', search.value, after.value],
+  path: () => `/api/attics?${new URLSearchParams({ ...search.value && { search: search.value }, ...after.value && { after: after.value } })}`,
+})
+
+/** What changes when the load or the survey changes. */
+const STALE = ['attics', 'units', 'overview', 'findings', 'properties', 'record']
+
+const post = <V extends object>(path: (value: V) => string, bodyOf: (value: V) => object = value => value) =>
+  useServerChange<V, unknown>({ stale: STALE, send: (request, value) => request(path(value), { method: 'POST', body: bodyOf(value) }) })
+
+export const useKeepSurvey = (atticId: string) => post<AtticSurvey>(() => `/api/attics/${atticId}/surveys`)
+export const useAddItem = (atticId: string) => post<AtticItemValue>(() => `/api/attics/${atticId}/items`)
+export const useMoveItems = (atticId: string) => post<AtticItemMovesValue>(() => `/api/attics/${atticId}/moves`)
+export const useConfirmInventory = (atticId: string) => post<{ confirmedOn: string }>(() => `/api/attics/${atticId}/inventory-confirmation`)
+export const useRemoveItem = () =>
+  post<{ itemId: string, removedOn: string, version: number }>(({ itemId }) => `/api/items/${itemId}/removal`, ({ removedOn, version }) => ({ removedOn, version }))
+export const useWithdrawDocument = () => post<{ documentId: string }>(({ documentId }) => `/api/documents/${documentId}/withdrawal`, () => ({}))
+
+export const useEditItem = () => useServerChange<{ itemId: string, edit: AtticItemEditValue }, unknown>({
+  stale: STALE, send: (request, { itemId, edit }) => request(`/api/items/${itemId}`, { method: 'PATCH', body: edit }),
+})
+
+export const useAddDocument = (atticId: string) => useServerChange<{ file: File, about: object }, unknown>({
+  stale: STALE,
+  send: (request, { file, about }) => {
+    const form = new FormData()
+    form.set('about', JSON.stringify(about))
+    form.set('file', file)
+    return request(`/api/attics/${atticId}/documents`, { method: 'POST', body: form })
+  },
+})

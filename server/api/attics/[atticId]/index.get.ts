@@ -1,0 +1,8 @@
+import { readAttic } from '../../../db/queries/readAttic'
+import { apiRoute, abilitiesFor } from '../../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'see attic',
+  on: { attic: 'atticId' },
+  handle: async ({ db, actor, attic }) => ({ ...await readAttic(db, attic), abilities: abilitiesFor(actor) }),
+})

@@ -1,0 +1,35 @@
+import type { Db } from '../connect'
+import { judgeContents } from '../../../shared/utils/attic/judgeContents'
+import type { AtticDetail } from '../../../shared/types/atticDetail'
+import type { RatingBasis } from '../../../shared/types/atticRating'
+import { dayIn } from '../../utils/clock'
+import { asAtticDocument, findDocuments, findItemsIn, findLoadEvents, findSurveys } from './attics'
+
+interface AtticRow { id: string, unitId: string, name: string, notes: string, inventoryConfirmedOn: string | null, archivedAt: string | null, version: number }
+
+/** Everything an attic's page shows, judged as it stands now. */
+export async function readAttic(db: Db, attic: AtticRow): Promise<Omit<AtticDetail, 'abilities'>> {
+  const [place, surveys, documents, items, events] = await Promise.all([
+    db.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('organisation as o', 'o.id', 'u.organisationId')
+      .select(['u.id as unitId', 'u.name as unitName', 'p.id as propertyId', 'p.name as propertyName', 'p.yearBuilt', 'o.timeZone'])
+      .where('u.id', '=', attic.unitId).executeTakeFirstOrThrow(),
+    findSurveys(db, attic.id), findDocuments(db, attic.id), findItemsIn(db, attic.id), findLoadEvents(db, attic.id),
+  ])
+  const survey = surveys[0]?.answers ?? null
+  const { id, name, notes, inventoryConfirmedOn, archivedAt, version } = attic
+  return {
+    today: dayIn(place.timeZone),
+    attic: { id, name, notes, inventoryConfirmedOn, archivedAt, version },
+    unit: { id: place.unitId, name: place.unitName },
+    property: { id: place.propertyId, name: place.propertyName, yearBuilt: place.yearBuilt },
+    survey,
+    surveys: surveys.map(({ answers: _answers, basis, ...row }) => ({ ...row, basis: basis as RatingBasis })),
+    documents: documents.map(row => ({
+      id: row.id, kind: row.kind, ratedPsf: row.ratedPsf, liftsHold: row.liftsHold, writtenOn: row.writtenOn, writtenBy: row.writtenBy,
+      coversWholeAttic: row.coversWholeAttic, area: row.area, fileName: row.fileName, createdAt: row.createdAt,
+    })),
+    items,
+    events,
+    contents: judgeContents({ survey, documents: documents.map(asAtticDocument), items }),
+  }
+}

@@ -1,0 +1,92 @@
+import type { AtticSurvey, DocumentKind } from './attic'
+import type { RatingBasis } from './atticRating'
+import type { JudgedContents } from './contents'
+import type { ItemCategory, ItemOwner, WeightSource } from './item'
+
+/** A stored item as its row stands: weights of one piece, footprint of the whole pile. */
+export interface StoredItem {
+  id: string
+  version: number
+  fieldNumber: number
+  catalogueKey: string | null
+  name: string
+  category: ItemCategory
+  quantity: number
+  lowLb: number
+  typicalLb: number
+  highLb: number
+  weightSource: WeightSource
+  belongsTo: ItemOwner
+  xFt: number
+  yFt: number
+  lengthFt: number
+  widthFt: number
+  heightFt: number | null
+  placedOn: string
+  removedOn: string | null
+  notes: string
+}
+
+export interface SurveyRow {
+  id: string
+  surveyedOn: string
+  ratedPsf: number
+  onHold: boolean
+  basis: RatingBasis
+  surveyedByName: string
+  createdAt: string
+}
+
+export interface DocumentRow {
+  id: string
+  kind: DocumentKind
+  ratedPsf: number | null
+  liftsHold: boolean
+  writtenOn: string
+  writtenBy: string
+  coversWholeAttic: boolean
+  area: string
+  fileName: string
+  createdAt: string
+}
+
+export interface LoadEventRow {
+  id: string
+  kind: 'in' | 'out' | 'moved' | 'reweighed'
+  happenedOn: string
+  deltaLb: number
+  totalAfterLb: number
+  itemName: string
+  recordedByName: string
+  recordedAt: string
+}
+
+/** What GET /api/attics/:id answers. */
+export interface AtticDetail {
+  today: string
+  attic: { id: string, name: string, notes: string, inventoryConfirmedOn: string | null, version: number, archivedAt: string | null }
+  unit: { id: string, name: string }
+  property: { id: string, name: string, yearBuilt: number | null }
+  survey: AtticSurvey | null
+  surveys: SurveyRow[]
+  documents: DocumentRow[]
+  items: StoredItem[]
+  events: LoadEventRow[]
+  contents: JudgedContents
+  abilities: string[]
+}
+
+export interface AtticListRow {
+  id: string
+  name: string
+  unitId: string
+  unitName: string
+  propertyName: string
+  inventoryConfirmedOn: string | null
+  surveyedOn: string | null
+  ratedPsf: number | null
+  onHold: boolean | null
+  basis: RatingBasis | null
+  storedLb: number
+  itemCount: number
+}

@@ -1,0 +1,89 @@
+import type { AtticDocument, AtticSurvey } from '../../types/attic'
+import type { StoredItem } from '../../types/atticDetail'
+import type { AtticRating } from '../../types/atticRating'
+import type { ContentState, JudgedContents, JudgedField } from '../../types/contents'
+import type { PlacedItem } from '../../types/loadPlan'
+import { chanceOfExceeding, inventoryTotal } from '../goods/inventoryTotal'
+import { judgeLoadPlan } from '../structure/judgeLoadPlan'
+import { loadFieldOf } from '../structure/loadField'
+import { loadStateOf } from '../structure/loadState'
+import { rateAttic } from '../structure/rating'
+
+export type ContentsItem = Pick<StoredItem, 'id' | 'fieldNumber' | 'quantity' | 'lowLb' | 'typicalLb' | 'highLb' | 'weightSource' | 'xFt' | 'yFt' | 'lengthFt' | 'widthFt'>
+
+export interface Contents {
+  survey: AtticSurvey | null
+  documents: readonly Pick<AtticDocument, keyof AtticDocument>[]
+  items: readonly ContentsItem[]
+}
+
+/** Ours: above this chance of being over its rating an attic is near, whatever the typical total says. */
+const NEAR_CHANCE = 0.1
+
+/**
+ * An attic's contents against its rating: the total with its band, the load plan of each field and one verdict. The server,
+ * the attic's page and the trial plan all judge by this.
+ */
+export function judgeContents({ survey, documents, items }: Contents): JudgedContents {
+  const rating = survey ? rateAttic(survey, [...documents]) : null
+  const total = inventoryTotal(items.map(item => ({ ...item, count: item.quantity })))
+  const fields = survey && rating ? survey.joistFields.map((_, index) => judgeField(survey, rating, index, items)) : []
+  const ratedTotalLb = ratedTotalOf(rating, fields)
+  const worstJoist = worstJoistOf(fields)
+  const chance = ratedTotalLb === null ? null : chanceOfExceeding(total, ratedTotalLb)
+  const shares = [...ratedTotalLb ? [total.typicalLb / ratedTotalLb] : [], ...worstJoist ? [worstJoist.utilisation] : []]
+  const utilisation = shares.length > 0 ? Math.max(...shares) : null
+  return {
+    rating, itemCount: items.length, totalLb: total.typicalLb, lowLb: total.lowLb, highLb: total.highLb,
+    ratedTotalLb, chanceOfExceeding: chance, utilisation, worstJoist,
+    heavyInMiddle: fields.flatMap(field => field.plan?.kind === 'judged' ? field.plan.items.filter(item => item.heavyInMiddle).map(item => item.id) : []),
+    fields,
+    state: stateOf({ rating, itemCount: items.length, fields, utilisation, chance }),
+  }
+}
+
+const placed = (item: ContentsItem): PlacedItem => ({
+  id: item.id, weightLb: item.quantity * item.typicalLb, xFt: item.xFt, yFt: item.yFt, lengthFt: item.lengthFt, widthFt: item.widthFt,
+})
+
+function judgeField(survey: AtticSurvey, rating: AtticRating, index: number, items: readonly ContentsItem[]): JudgedField {
+  const surveyed = survey.joistFields[index]!
+  const answer = loadFieldOf(survey, surveyed, rating.ratedPsf)
+  const here = items.filter(item => item.fieldNumber === index + 1).map(placed)
+  const plan = answer.kind === 'field'
+    ? judgeLoadPlan(answer.field, here, { member: answer.memberAssumed ? undefined : answer.member, strongbacksCount: answer.strongbacksCount })
+    : null
+  return { number: index + 1, name: surveyed.name, answer, plan }
+}
+
+/** Only when every field is measured: a part would make the whole look smaller than it is, or larger. */
+function ratedTotalOf(rating: AtticRating | null, fields: readonly JudgedField[]): number | null {
+  if (!rating || rating.ratedPsf <= 0 || fields.length === 0) return null
+  const totals = fields.map(field => field.plan?.kind === 'judged' ? field.plan.ratedTotalLb : null)
+  return totals.every(total => total !== null) ? totals.reduce((sum, total) => sum + total, 0) : null
+}
+
+function worstJoistOf(fields: readonly JudgedField[]): JudgedContents['worstJoist'] {
+  let worst: JudgedContents['worstJoist'] = null
+  for (const { number, name, plan } of fields) {
+    if (plan?.kind !== 'judged') continue
+    const { utilisation, limit, state } = plan.joists[plan.worstJoist]!
+    if (utilisation > (worst?.utilisation ?? 0)) worst = { fieldNumber: number, fieldName: name, joistNumber: plan.worstJoist + 1, utilisation, limit, state }
+  }
+  return worst
+}
+
+interface Standing { rating: AtticRating | null, itemCount: number, fields: readonly JudgedField[], utilisation: number | null, chance: number | null }
+
+function stateOf({ rating, itemCount, fields, utilisation, chance }: Standing): ContentState {
+  if (!rating) return 'unsurveyed'
+  if (rating.hold) return 'hold'
+  if (rating.ratedPsf <= 0) return 'no-storage'
+  if (itemCount === 0) return 'empty'
+  // A thing entered outside the measured field cannot be judged, and must not pass as within.
+  if (fields.some(field => field.plan?.kind === 'refused')) return 'over'
+  const state = loadStateOf(utilisation ?? 0)
+  const unjudged = utilisation === null || fields.some(field => field.plan === null)
+  const uncertain = (chance ?? 0) > NEAR_CHANCE || unjudged
+  return state === 'within' && uncertain ? 'near' : state
+}
