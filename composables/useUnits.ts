@@ -1,6 +1,6 @@
 import { computed, inject, unref, type InjectionKey, type MaybeRef } from 'vue'
-import * as units from '../shared/utils/units'
-import type { UnitSystem } from '../shared/utils/units'
+import * as units from '~/shared/utils/units'
+import type { UnitSystem } from '~/shared/utils/units'
 
 /** The person's own system of units, provided once by the frame around the page. */
 export const unitSystemKey: InjectionKey<MaybeRef<UnitSystem>> = Symbol('unit system')

@@ -1,4 +1,4 @@
-import type { CeilingPin } from '../../shared/types/mark'
+import type { CeilingPin } from '~/shared/types/mark'
 
 /** Which side of the sketch is which wall; the door is at the bottom unless said otherwise. */
 export interface CeilingWalls { top: string, right: string, bottom: string, left: string }

@@ -1,6 +1,6 @@
 import type { ApexOptions } from 'apexcharts'
-import { formatDay } from '../../shared/utils/days'
-import { formatNumber } from '../../shared/utils/units'
+import { formatDay } from '~/shared/utils/days'
+import { formatNumber } from '~/shared/utils/units'
 import { errorBars, loadLine, readingPoints, timeOf, timeRange, trendBand, trendLine, type MarkChartData } from './markChartSeries'
 
 type ChartSeries = NonNullable<ApexOptions['series']>

@@ -1,4 +1,4 @@
-import { dayNumber } from '../../shared/utils/days'
+import { dayNumber } from '~/shared/utils/days'
 
 /** What the chart of one mark shows; all in the unit of the readings. */
 export interface MarkChartData {

@@ -1,5 +1,5 @@
 import type { InjectionKey, MaybeRef } from 'vue'
-import { formatDay, isDay } from '../../shared/utils/days'
+import { formatDay, isDay } from '~/shared/utils/days'
 
 /** The time zone of the organisation, provided once by the frame around the page. */
 export const timeZoneKey: InjectionKey<MaybeRef<string | undefined>> = Symbol('time zone')

@@ -1,4 +1,4 @@
-import * as safety from '../../shared/utils/messages/safety'
+import * as safety from '~/shared/utils/messages/safety'
 
 export interface SafetyWords { title: string, text: readonly string[], urgent?: boolean }
 
