@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs'
 import { constants } from 'node:os'
 import { startChild } from './children.mjs'
 
@@ -72,8 +73,19 @@ export function stopOnSignals(keeper, exitCodeFor = signal => 128 + constants.si
   const stopFor = signal => keeper.stopAll().then(() => process.exit(exitCodeFor(signal)))
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => stopFor(signal))
   if (process.env.npm_lifecycle_event === undefined) return
-  const parent = process.ppid
+  const before = ancestry()
   setInterval(() => {
-    if (process.ppid !== parent) stopFor('SIGHUP')
+    if (ancestry() !== before) stopFor('SIGHUP')
   }, 1_000).unref()
+}
+
+/** Parent and grandparent: between npm and us there may be a shell that outlives npm. */
+function ancestry() {
+  try {
+    return `${process.ppid} ${/^PPid:\s*(\d+)/m.exec(readFileSync(`/proc/${process.ppid}/status`, 'utf8'))?.[1]}`
+  }
+  catch {
+    // The parent has just gone, or this system has no /proc.
+    return String(process.ppid)
+  }
 }
