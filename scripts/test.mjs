@@ -30,6 +30,7 @@ async function step(name, context, work) {
   const startedAt = Date.now()
   say(`\n— ${name}`)
   const result = await work(context)
+  if (keeper.isStopping()) return
   counts.push(result)
   say(`  ${name}: ${result.failed === 0 ? 'good' : `${result.failed} failed`} (${((Date.now() - startedAt) / 1000).toFixed(1)} s)`)
 }
