@@ -124,6 +124,14 @@ export interface ObservationAnswers {
   note: string | null
 }
 
+/** A report before anything was asked; `kind` and `roomId` have no default. */
+export const NOTHING_ASKED: Omit<ObservationAnswers, 'kind' | 'roomId'> = {
+  pin: null, place: null, shape: null, direction: 'not-known', wallType: null,
+  widthComparison: null, widthMm: null, widthMethod: null, lengthMm: null, tip: null, popCount: null,
+  sagDropMm: null, sagSpanMm: null, stain: 'none', stainSizeMm: null, doors: 'not-known', sounds: 'none',
+  changeAbove: 'not-known', recentEvents: [], heatingOn: null, humidityPercent: null, dangerSigns: [], firstSeenOn: null, note: null,
+}
+
 /** One dated measurement of a mark. `value` is in the unit READING_QUANTITIES names for the mark's kind. */
 export interface Reading {
   id: string

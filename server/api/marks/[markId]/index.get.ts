@@ -1,0 +1,8 @@
+import { findMarkPage } from '../../../db/queries/markPage'
+import { apiRoute } from '../../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'see mark',
+  on: { mark: 'markId' },
+  handle: ({ db, actor, mark }) => findMarkPage(db, actor, mark.id),
+})

@@ -1,0 +1,8 @@
+import { findReceipt } from '../../db/queries/observations'
+import { abilitiesFor, apiRoute } from '../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'see mark',
+  on: { observation: 'observationId' },
+  handle: async ({ db, actor, observation }) => ({ ...await findReceipt(db, observation.id), abilities: abilitiesFor(actor) }),
+})

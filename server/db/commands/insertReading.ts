@@ -1,0 +1,53 @@
+import type { Trx } from '../connect'
+import type { MarkKind, StainState, TipState, WidthComparison } from '../../../shared/types/mark'
+import type { MeasuredReading } from '../../../shared/utils/movement/measureReading'
+import { nowInstant } from '../../utils/clock'
+import { newId } from '../../utils/newId'
+import { appendRecord, type RecordActor } from './appendRecord'
+
+/** What a reading may carry besides its size; kept in reading.detail. */
+export interface ReadingDetail {
+  observationId?: string
+  spanMm?: number | null
+  tip?: TipState | null
+  comparison?: WidthComparison | null
+  /** The report made of danger signs seen with this reading. */
+  reportId?: string
+}
+
+interface NewReading {
+  clientKey: string
+  takenOn: string
+  measured: Extract<MeasuredReading, { kind: 'measured' }> | { kind: 'could-not-measure', reason: string }
+  lengthMm: number | null
+  stain: StainState | null
+  note: string
+  detail: ReadingDetail
+  photos: { id: string, sha256: string }[]
+}
+
+interface ReadMark { id: string, organisationId: string, unitId: string, number: number, kind: MarkKind, segment: number }
+
+const QUANTITY_COLUMNS = { 'crack': 'width_mm', 'nail-pops': 'pop_count', 'sag': 'drop_mm', 'stain': 'size_mm' } as const
+
+/** One reading of the mark's present segment, with its record entry. */
+export async function insertReading(trx: Trx, actor: RecordActor & { userId: string }, mark: ReadMark, reading: NewReading): Promise<{ id: string, receivedAt: string }> {
+  const { measured, photos, detail, stain, ...rest } = reading
+  const size = measured.kind === 'measured'
+    ? { method: measured.method, value: measured.value, sigma: measured.sigma, low: measured.low, high: measured.high, couldNotMeasureReason: null }
+    : { method: 'could-not-measure' as const, value: null, sigma: null, low: null, high: null, couldNotMeasureReason: measured.reason }
+  const row = {
+    id: newId(), organisationId: mark.organisationId, unitId: mark.unitId, markId: mark.id, segment: mark.segment,
+    quantity: QUANTITY_COLUMNS[mark.kind], ...size, ...rest, stainState: stain === 'none' ? null : stain,
+    detail: JSON.stringify(detail), takenBy: actor.userId, receivedAt: nowInstant(),
+  }
+  await trx.insertInto('reading').values(row).execute()
+  await appendRecord(trx, actor, {
+    organisationId: mark.organisationId, unitId: mark.unitId, subjectKind: 'reading', subjectId: row.id, action: 'reading recorded',
+    after: {
+      markId: mark.id, markNumber: mark.number, segment: mark.segment, takenOn: row.takenOn, quantity: row.quantity, ...size,
+      lengthMm: row.lengthMm, stainState: row.stainState, note: row.note, ...detail, photos,
+    },
+  })
+  return { id: row.id, receivedAt: row.receivedAt }
+}

@@ -1,0 +1,68 @@
+import type { Db, Trx } from '../connect'
+import type { Actor } from '../queries/actor'
+import type { Receipt } from '../../../shared/types/receipt'
+import { answersOf, type ObservationValue } from '../../../shared/schemas/observation'
+import type { ObservationAnswers } from '../../../shared/types/mark'
+import { firstReading } from '../../../shared/utils/movement/measureReading'
+import { refusedReadingSentence } from '../../../shared/utils/messages/readingMessages'
+import { dayIn } from '../../utils/clock'
+import { newId } from '../../utils/newId'
+import { notFound, problem, unsound } from '../../utils/problems'
+import { findObservationByKey, findReceipt } from '../queries/observations'
+import { insertObservation } from './insertObservation'
+import { insertReading } from './insertReading'
+import { judgeMark } from './judgeMark'
+import { lockUnit } from './lockUnit'
+import { openMark, reopenMark, type FollowedMark } from './openMark'
+
+interface ReportedUnit { id: string, organisationId: string }
+
+/**
+ * A report of something on a ceiling: observation, mark (new, or one that is followed already), first reading, photos,
+ * record, findings and mail, all or nothing. The same key from the same person gives the first answer again.
+ */
+export async function reportObservation(db: Db, actor: Actor, unit: ReportedUnit, clientKey: string | undefined, body: ObservationValue): Promise<Receipt> {
+  if (!clientKey) throw problem(422, 'idempotency-key-needed', 'This report came without its own key, so that sending it twice could not be told apart. Please open the form again.')
+  const id = await db.transaction().execute(async (trx) => {
+    await lockUnit(trx, unit.organisationId, unit.id)
+    const earlier = await findObservationByKey(trx, actor.userId, clientKey)
+    if (earlier && earlier.unitId !== unit.id) throw problem(409, 'key-used', 'This key belongs to a report about another home.')
+    return earlier?.id ?? await writeReport(trx, actor, unit, clientKey, body)
+  })
+  const receipt = await findReceipt(db, id)
+  if (!receipt) throw notFound()
+  return receipt
+}
+
+async function writeReport(trx: Trx, actor: Actor, unit: ReportedUnit, clientKey: string, body: ObservationValue): Promise<string> {
+  const answers = answersOf(body)
+  const measured = firstReading(answers)
+  if (measured?.kind === 'refused') throw unsound({ [SIZE_FIELDS[answers.kind]]: refusedReadingSentence(answers.kind, measured.why) })
+  const today = dayIn(actor.timeZone)
+  if (answers.firstSeenOn !== null && answers.firstSeenOn > today) throw unsound({ firstSeenOn: 'That day is still to come.' })
+  const room = await trx.selectFrom('room').select(['id', 'name']).where('id', '=', answers.roomId).where('unitId', '=', unit.id).where('archivedAt', 'is', null).executeTakeFirst()
+  if (!room) throw unsound({ roomId: 'Choose a room of this home.' })
+  const mark = body.sameAsMarkId === null
+    ? await openMark(trx, actor, unit, room, { ...answers, firstSeenOn: answers.firstSeenOn ?? today })
+    : await joinMark(trx, actor, unit, body.sameAsMarkId, answers, today)
+  const { id } = await insertObservation(trx, actor, mark, { answers, clientKey, photoIds: body.photoIds })
+  if (measured) {
+    await insertReading(trx, actor, mark, {
+      clientKey: newId(), takenOn: today, measured, lengthMm: answers.lengthMm, note: '', stain: answers.kind === 'stain' ? answers.stain : null, photos: [],
+      detail: { observationId: id, spanMm: answers.sagSpanMm, tip: answers.tip, comparison: answers.widthComparison },
+    })
+  }
+  await judgeMark(trx, actor, mark.id)
+  return id
+}
+
+const SIZE_FIELDS = { 'crack': 'widthMm', 'nail-pops': 'popCount', 'sag': 'sagDropMm', 'stain': 'stainSizeMm' } as const
+
+/** A mark that came back after a repair is open again from this day. */
+async function joinMark(trx: Trx, actor: Actor, unit: ReportedUnit, markId: string, answers: ObservationAnswers, today: string): Promise<FollowedMark> {
+  const mark = await trx.selectFrom('mark').selectAll().where('id', '=', markId).where('unitId', '=', unit.id).forUpdate().executeTakeFirst()
+  if (!mark || mark.state === 'closed') throw unsound({ sameAsMarkId: 'That mark is not being followed here. Report it as a new one.' })
+  if (mark.kind !== answers.kind) throw unsound({ sameAsMarkId: 'That mark is of another kind. Report this as a new one.' })
+  if (answers.stain !== 'none') await trx.updateTable('mark').set({ stainState: answers.stain }).where('id', '=', mark.id).execute()
+  return mark.state === 'repaired' ? reopenMark(trx, actor, mark, today, 'reported again') : mark
+}

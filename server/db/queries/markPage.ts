@@ -1,0 +1,57 @@
+import type { Db } from '../connect'
+import type { Actor } from './actor'
+import type { MarkFacts, MarkPage, ReadingRow } from '../../../shared/types/markPage'
+import type { WallType } from '../../../shared/types/mark'
+import { DEFAULT_SEASON_ALLOWANCE_MM } from '../../../shared/utils/movement/activity'
+import { cluesFor } from '../../../shared/utils/movement/causeClues'
+import { loadLinks } from '../../../shared/utils/movement/loadLink'
+import type { TrendReading } from '../../../shared/utils/movement/series'
+import { markTrend, type MarkTrend } from '../../../shared/utils/movement/trend'
+import { trendOptionsFor } from '../../../shared/utils/movement/trendOptions'
+import { dayIn } from '../../utils/clock'
+import { notFound } from '../../utils/problems'
+import { abilitiesOf } from '../../utils/policy'
+import { findLatestSurvey } from './attics'
+import { findMarkFacts, findMarkSurroundings, listJobsOfMark, listLoadSteps, listRoomsOf } from './marks'
+import { listPhotosOfMark } from './photos'
+import { listReadings } from './readings'
+import { listReportsOfMark } from './observations'
+
+type Surroundings = NonNullable<Awaited<ReturnType<typeof findMarkSurroundings>>>
+
+/** Everything a mark's page shows; a fixed number of statements whatever it holds. */
+export async function findMarkPage(db: Db, actor: Actor, markId: string): Promise<MarkPage> {
+  const [mark, around] = await Promise.all([findMarkFacts(db, markId), findMarkSurroundings(db, markId)])
+  if (!mark || !around) throw notFound()
+  const [readings, reports, photos, jobs, rooms, loadSteps, survey] = await Promise.all([
+    listReadings(db, markId), listReportsOfMark(db, markId), listPhotosOfMark(db, markId), listJobsOfMark(db, markId), listRoomsOf(db, mark.unitId),
+    mark.atticId ? listLoadSteps(db, mark.atticId) : [], mark.atticId ? findLatestSurvey(db, mark.atticId) : undefined,
+  ])
+  const first = reports.at(-1)?.answers
+  const wallType = first?.wallType ?? null
+  const points = measuredIn(readings, mark.segment)
+  const trend = trendOf(mark, around, points, wallType, survey?.answers.framing ?? null)
+  return {
+    mark, readings, trend, loadSteps, reports, photos, jobs, rooms,
+    room: { id: around.roomId, name: around.roomName, lengthFt: around.lengthFt, widthFt: around.widthFt },
+    unit: { id: around.unitId, name: around.unitName },
+    property: { id: around.propertyId, name: around.propertyName, yearBuilt: around.yearBuilt },
+    attic: around.atticId && around.atticName !== null ? { id: around.atticId, name: around.atticName } : null,
+    loadLinks: loadLinks(points, loadSteps),
+    clues: cluesFor({
+      kind: mark.kind, place: mark.place, shape: mark.shape, wallType, recentEvents: first?.recentEvents ?? [],
+      mendedBefore: mark.segment > 1, widestOnDayOfYear: trend.kind === 'measured' && trend.season ? trend.season.highestOnDayOfYear : null,
+    }),
+    abilities: abilitiesOf(actor.role), today: dayIn(around.timeZone), timeZone: around.timeZone, contactPhone: around.contactPhone,
+  }
+}
+
+const measuredIn = (readings: ReadingRow[], segment: number): TrendReading[] =>
+  readings.flatMap(({ segment: own, takenOn, value, sigma }) => own === segment && value !== null && sigma !== null ? [{ takenOn, value, sigma }] : [])
+
+function trendOf(mark: MarkFacts, around: Surroundings, points: TrendReading[], wallType: WallType | null, framing: string | null): MarkTrend {
+  const options = trendOptionsFor({ kind: mark.kind, place: mark.place, wallType, framing })
+  // The organisation's own allowance stands in for our default; the larger one under trusses stays.
+  const seasonAllowance = options.seasonAllowance === DEFAULT_SEASON_ALLOWANCE_MM ? around.seasonAllowanceMm : options.seasonAllowance
+  return markTrend(points, { ...options, seasonAllowance })
+}

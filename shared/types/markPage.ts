@@ -1,0 +1,134 @@
+import type { MarkTrend } from '../utils/movement/trend'
+import type { LoadLink } from '../utils/movement/loadLink'
+import type { CauseClue } from '../utils/movement/causeClues'
+import type { Activity, DangerSign, Direction, MarkKind, MarkPlace, MarkShape, ObservationAnswers, ReadingMethod, StainState, TipState, WallType } from './mark'
+import type { PhotoRef } from './photo'
+
+export type MarkState = 'open' | 'repaired' | 'closed'
+
+export interface ReadingRow {
+  id: string
+  takenOn: string
+  receivedAt: string
+  takenBy: string
+  segment: number
+  method: ReadingMethod | 'could-not-measure'
+  value: number | null
+  sigma: number | null
+  low: number | null
+  high: number | null
+  lengthMm: number | null
+  spanMm: number | null
+  tip: TipState | null
+  stainState: Exclude<StainState, 'none'> | null
+  /** The report made of danger signs seen with this reading. */
+  reportId: string | null
+  couldNotMeasureReason: string | null
+  note: string
+}
+
+export interface MarkFacts {
+  id: string
+  organisationId: string
+  unitId: string
+  roomId: string
+  atticId: string | null
+  number: number
+  kind: MarkKind
+  label: string
+  pinX: number
+  pinY: number
+  place: MarkPlace | null
+  shape: MarkShape | null
+  direction: Direction | null
+  firstSeenOn: string
+  state: MarkState
+  segment: number
+  activity: Activity
+  widthClass: number | null
+  lastValue: number | null
+  lastReadOn: string | null
+  slopePerYear: number | null
+  nextReadingOn: string | null
+  stainState: Exclude<StainState, 'none'> | null
+  notes: string
+  createdAt: string
+  version: number
+}
+
+export interface ReportRow {
+  id: string
+  number: number
+  receivedAt: string
+  reportedBy: string
+  answers: ObservationAnswers
+  dangerSigns: DangerSign[]
+  startedAt: string | null
+  correctedAt: string | null
+}
+
+/** Weight in the attic above from this day on. */
+export interface LoadStepRow { on: string, totalLb: number }
+
+export interface MarkPhoto extends PhotoRef { readingId: string | null, observationId: string | null, uploadedBy: string }
+
+export interface MarkJob { id: string, number: number, title: string, state: string, dueOn: string, doneOn: string | null }
+
+/** Everything GET /api/marks/[markId] answers. */
+export interface MarkPage {
+  mark: MarkFacts
+  room: { id: string, name: string, lengthFt: number | null, widthFt: number | null }
+  unit: { id: string, name: string }
+  property: { id: string, name: string, yearBuilt: number | null }
+  attic: { id: string, name: string } | null
+  rooms: { id: string, name: string }[]
+  /** Oldest first, every segment. */
+  readings: ReadingRow[]
+  /** Of the newest segment. */
+  trend: MarkTrend
+  loadSteps: LoadStepRow[]
+  loadLinks: LoadLink[]
+  clues: CauseClue[]
+  reports: ReportRow[]
+  photos: MarkPhoto[]
+  jobs: MarkJob[]
+  abilities: string[]
+  today: string
+  timeZone: string
+  contactPhone: string | null
+}
+
+export interface MarkRow {
+  id: string
+  number: number
+  label: string
+  kind: MarkKind
+  state: MarkState
+  activity: Activity
+  widthClass: number | null
+  lastValue: number | null
+  lastReadOn: string | null
+  slopePerYear: number | null
+  nextReadingOn: string | null
+  stainState: Exclude<StainState, 'none'> | null
+  unitId: string
+  unitName: string
+  propertyId: string
+  propertyName: string
+  roomName: string
+}
+
+/** What a sent reading is answered with. */
+export interface ReadingAnswer {
+  id: string
+  markId: string
+  takenOn: string
+  receivedAt: string
+  value: number | null
+  /** Danger signs make a report of their own, with a receipt. */
+  report: { id: string, number: number, dangerSigns: DangerSign[] } | null
+  activity: Activity
+  nextReadingOn: string | null
+  /** It jumped: said at once, apart from any trend. */
+  sudden: { value: number, baseline: number } | null
+}
