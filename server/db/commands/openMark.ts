@@ -11,7 +11,7 @@ import { takeNumber } from './takeNumber'
 
 export type FollowedMark = Selectable<MarkTable>
 
-type OpeningAnswers = Pick<ObservationAnswers, 'kind' | 'pin' | 'place' | 'shape' | 'direction' | 'wallType' | 'stain'> & { firstSeenOn: string }
+type OpeningAnswers = Pick<ObservationAnswers, 'kind' | 'pin' | 'place' | 'shape' | 'direction' | 'stain'> & { firstSeenOn: string }
 
 const MIDDLE = 0.5
 
@@ -22,7 +22,7 @@ export async function openMark(trx: Trx, actor: RecordActor & { userId: string }
     id: newId(), organisationId: unit.organisationId, unitId: unit.id, roomId: room.id, atticId: attics.length === 1 ? attics[0]!.id : null,
     number: await takeNumber(trx, unit.organisationId), kind: answers.kind, label: `${MARK_KIND_WORDS[answers.kind]}, ${room.name}`,
     pinX: answers.pin?.xShare ?? MIDDLE, pinY: answers.pin?.yShare ?? MIDDLE,
-    place: answers.place, shape: answers.shape, direction: answers.direction, wallType: answers.wallType, firstSeenOn: answers.firstSeenOn,
+    place: answers.place, shape: answers.shape, direction: answers.direction, firstSeenOn: answers.firstSeenOn,
     stainState: answers.stain === 'none' ? null : answers.stain, createdBy: actor.userId, createdAt: nowInstant(),
   }).returningAll().executeTakeFirstOrThrow()
   await appendRecord(trx, actor, {
