@@ -1,7 +1,7 @@
 import type { MarkTrend } from '../utils/movement/trend'
 import type { LoadLink } from '../utils/movement/loadLink'
 import type { CauseClue } from '../utils/movement/causeClues'
-import type { Activity, DangerSign, Direction, MarkKind, MarkPlace, MarkShape, ObservationAnswers, ReadingMethod, StainState, TipState, WallType } from './mark'
+import type { Activity, DangerSign, Direction, MarkKind, MarkPlace, MarkShape, ObservationAnswers, ReadingMethod, StainState, TipState } from './mark'
 import type { PhotoRef } from './photo'
 
 export type MarkState = 'open' | 'repaired' | 'closed'

@@ -15,16 +15,17 @@ import type { FollowedMark } from './openMark'
 export async function editMark(db: Db, actor: Actor, mark: FollowedMark, { version, change, pin, ...facts }: MarkEditValue): Promise<FollowedMark> {
   return db.transaction().execute(async (trx) => {
     await lockUnit(trx, mark.organisationId, mark.unitId)
-    let edited: FollowedMark | undefined
+    let current = version
     const patch = { ...facts, ...(pin ? { pinX: pin.xShare, pinY: pin.yShare } : {}) }
     if (Object.keys(patch).length > 0) {
       await checkFacts(trx, actor, mark, facts)
-      edited = await editRow<FollowedMark>(trx, actor, {
+      const edited = await editRow<FollowedMark>(trx, actor, {
         table: 'mark', id: mark.id, version, patch,
         record: { organisationId: mark.organisationId, unitId: mark.unitId, subjectKind: 'mark', action: 'mark edited' },
       })
+      current = edited.version
     }
-    if (change) edited = await changeState(trx, actor, mark.id, edited?.version ?? version, change)
+    if (change) await changeState(trx, actor, mark.id, current, change)
     await judgeMark(trx, actor, mark.id)
     return await trx.selectFrom('mark').selectAll().where('id', '=', mark.id).executeTakeFirstOrThrow()
   })
@@ -44,7 +45,7 @@ const FROM = { repaired: ['open'], reopened: ['repaired', 'closed'], closed: ['o
 const TO = { repaired: 'repaired', reopened: 'open', closed: 'closed' } as const
 
 /** A repair starts a new segment, so that no trend runs across it. Repair and closing settle what was reported. */
-async function changeState(trx: Trx, actor: Actor, id: string, version: number, change: NonNullable<MarkEditValue['change']>): Promise<FollowedMark> {
+async function changeState(trx: Trx, actor: Actor, id: string, version: number, change: NonNullable<MarkEditValue['change']>) {
   const before = await trx.selectFrom('mark').selectAll().where('id', '=', id).forUpdate().executeTakeFirst()
   if (!before) throw notFound()
   if (before.version !== version) throw clash(before)
@@ -60,5 +61,4 @@ async function changeState(trx: Trx, actor: Actor, id: string, version: number, 
     organisationId: before.organisationId, unitId: before.unitId, subjectKind: 'mark', subjectId: id, action: `mark ${change.to}`,
     before: { state: before.state, segment: before.segment }, after: { state: after.state, segment, happenedOn: change.happenedOn, reason: change.reason },
   })
-  return after
 }

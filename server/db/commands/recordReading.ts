@@ -16,6 +16,7 @@ import { insertReading } from './insertReading'
 import { judgeMark } from './judgeMark'
 import { lockUnit } from './lockUnit'
 import { reopenMark, type FollowedMark } from './openMark'
+import { tellOfRepeatedReport } from './tellOfRepeatedReport'
 
 /** A later reading of a mark, judged at once. The same key from the same person gives the first answer again. */
 export async function recordReading(db: Db, actor: Actor, mark: FollowedMark, clientKey: string | undefined, body: ReadingValue): Promise<ReadingAnswer> {
@@ -50,6 +51,7 @@ async function writeReading(trx: Trx, actor: Actor, markId: string, clientKey: s
   if (photos.length > 0) await trx.updateTable('photo').set({ readingId: reading.id }).where('id', 'in', body.photoIds).execute()
   if (body.stain !== null) await trx.updateTable('mark').set({ stainState: body.stain === 'none' ? null : body.stain }).where('id', '=', markId).execute()
   await judgeMark(trx, actor, markId)
+  if (report) await tellOfRepeatedReport(trx, actor, mark, report.id)
   return reading.id
 }
 

@@ -14,6 +14,7 @@ import { insertReading } from './insertReading'
 import { judgeMark } from './judgeMark'
 import { lockUnit } from './lockUnit'
 import { openMark, reopenMark, type FollowedMark } from './openMark'
+import { tellOfRepeatedReport } from './tellOfRepeatedReport'
 
 interface ReportedUnit { id: string, organisationId: string }
 
@@ -53,6 +54,7 @@ async function writeReport(trx: Trx, actor: Actor, unit: ReportedUnit, clientKey
     })
   }
   await judgeMark(trx, actor, mark.id)
+  if (body.sameAsMarkId !== null) await tellOfRepeatedReport(trx, actor, mark, id)
   return id
 }
 
