@@ -1,0 +1,65 @@
+import cron from 'node-cron'
+import { failReview } from '../db/commands/failReview'
+import { reviewOrganisation } from '../db/commands/reviewOrganisation'
+import { findOrganisationsToReview } from '../db/queries/reviews'
+import { startJobQueue, type JobQueue, type ReviewOrder } from './jobQueue'
+import { kickMail, setMailSender } from './kickMail'
+import { logTrouble } from './logTrouble'
+import { createMailer } from './mailer'
+import { createMailSender } from './mailSender'
+import { useDb } from './useDb'
+
+export interface Background { queue: JobQueue, stop: () => Promise<void> }
+
+let running: Background | undefined
+
+/** False while the queue is not up; the caller then says that it will be tried again. */
+export async function orderReview(order: ReviewOrder): Promise<boolean> {
+  return await running?.queue.order('review', order, order.runId ?? order.organisationId) ?? false
+}
+
+/** The clock only orders; the queue does the work, once for any number of servers. */
+export function startBackground(settings: { databaseUrl: string, smtpUrl: string | undefined, mailFrom: string }): Background {
+  const sender = settings.smtpUrl ? createMailSender(useDb, createMailer(settings.smtpUrl, settings.mailFrom)) : undefined
+  if (sender) setMailSender(() => void sender.send())
+  const queue = startJobQueue(settings.databaseUrl, {
+    review,
+    reviewFailed: order => failReview(useDb(), order),
+    mail: async () => sender?.send(),
+  })
+  const clock = [
+    cron.schedule('*/15 * * * *', () => orderDueReviews(queue), { name: 'review-due', noOverlap: true }),
+    cron.schedule('* * * * *', () => orderMail(queue), { name: 'mail-due', noOverlap: true }),
+  ]
+  const soon = setTimeout(() => void orderDueReviews(queue), 10_000)
+  soon.unref()
+  return running = { queue, stop: async () => {
+    running = undefined
+    clearTimeout(soon)
+    setMailSender(undefined)
+    await Promise.all(clock.map(task => task.destroy()))
+    await queue.stop()
+    await sender?.stop()
+  } }
+}
+
+/** Another run under way is tried again later; a run that is done needs nothing. */
+async function review({ organisationId, askedBy, runId }: ReviewOrder) {
+  const answer = await reviewOrganisation(useDb(), organisationId, { askedBy, runId })
+  if (answer.kind === 'under way' && askedBy) throw new Error('Another review of this organisation is under way')
+  kickMail()
+}
+
+async function orderDueReviews(queue: JobQueue) {
+  try {
+    for (const { organisationId, today } of await findOrganisationsToReview(useDb())) await queue.order('review', { organisationId }, `${organisationId}:${today}`)
+  }
+  catch (error) {
+    logTrouble('Due reviews could not be ordered', error)
+  }
+}
+
+async function orderMail(queue: JobQueue) {
+  try { await queue.order('mail', {}, 'mail') }
+  catch (error) { logTrouble('Sending of mail could not be ordered', error) }
+}
