@@ -64,4 +64,4 @@ export const findStaff = (db: Db, organisationId: string): Promise<StaffMember[]
 export const findUnitPlace = (db: Db, unitId: string) =>
   db.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId')
     .innerJoin('organisation as o', 'o.id', 'u.organisationId')
-    .select(['u.id', 'u.organisationId', 'u.name as unitName', 'p.name as propertyName', 'o.name as organisationName']).where('u.id', '=', unitId).executeTakeFirstOrThrow()
+    .select(['u.id', 'u.organisationId', 'u.name as unitName', 'p.name as propertyName', 'o.name as organisationName', 'p.yearBuilt']).where('u.id', '=', unitId).executeTakeFirstOrThrow()

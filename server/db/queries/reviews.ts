@@ -1,6 +1,9 @@
 import { sql } from 'kysely'
+import type { ReviewRun, Reviews } from '../../../shared/types/review'
+import { addDays } from '../../../shared/utils/days'
 import type { Db } from '../connect'
-import { nowInstant } from '../../utils/clock'
+import { dayIn, nowInstant } from '../../utils/clock'
+import type { Actor } from './actor'
 
 /** Organisations whose review hour of today, in their own time zone, has come and whose run of today is not done. */
 export function findOrganisationsToReview(db: Db): Promise<{ organisationId: string, today: string }[]> {
@@ -12,17 +15,16 @@ export function findOrganisationsToReview(db: Db): Promise<{ organisationId: str
     .orderBy('o.id').execute()
 }
 
-export interface ReviewRunRow {
-  id: string
-  reviewedOn: string
-  askedByName: string | null
-  startedAt: string
-  finishedAt: string | null
-  counts: Partial<Record<string, number>>
-  error: string | null
-}
-
-export const listReviewRuns = (db: Db, organisationId: string, limit: number): Promise<ReviewRunRow[]> =>
+const listReviewRuns = (db: Db, organisationId: string, limit: number): Promise<ReviewRun[]> =>
   db.selectFrom('reviewRun as r').leftJoin('appUser as u', 'u.id', 'r.askedBy')
     .select(['r.id', 'r.reviewedOn', 'u.name as askedByName', 'r.startedAt', 'r.finishedAt', 'r.counts', 'r.error'])
-    .where('r.organisationId', '=', organisationId).orderBy('r.startedAt', 'desc').limit(limit).$castTo<ReviewRunRow>().execute()
+    .where('r.organisationId', '=', organisationId).orderBy('r.startedAt', 'desc').limit(limit).$castTo<ReviewRun>().execute()
+
+/** Past runs, latest first, and when the next comes by itself. */
+export async function findReviews(db: Db, actor: Actor): Promise<Reviews> {
+  const runs = await listReviewRuns(db, actor.organisationId, 30)
+  const { reviewHour: hour, timeZone } = await db.selectFrom('organisation').select(['reviewHour', 'timeZone']).where('id', '=', actor.organisationId).executeTakeFirstOrThrow()
+  const today = dayIn(timeZone)
+  const isDone = runs.some(run => run.askedByName === null && run.reviewedOn === today && run.finishedAt !== null)
+  return { runs, next: { on: isDone ? addDays(today, 1) : today, hour, timeZone } }
+}

@@ -1,0 +1,8 @@
+import { findJobView } from '../../../db/queries/jobs'
+import { apiRoute } from '../../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'see job',
+  on: { job: 'jobId' },
+  handle: ({ db, actor, job }) => findJobView(db, actor, job.id),
+})

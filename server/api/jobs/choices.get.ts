@@ -1,0 +1,7 @@
+import { findJobChoices } from '../../db/queries/jobs'
+import { apiRoute } from '../../utils/apiRoute'
+
+export default apiRoute({
+  can: 'edit job',
+  handle: ({ db, actor }) => findJobChoices(db, actor),
+})
