@@ -18,7 +18,7 @@ export interface JobQueue {
 
 const TRY_AGAIN_MS = 5_000
 const STOP_WITHIN_MS = 10_000
-const REVIEW = { policy: 'short', retryLimit: 8, retryDelay: 15, retryBackoff: true, expireInMinutes: 60, deadLetter: 'review-failed' } as const
+const REVIEW = { policy: 'short', retryLimit: 9, retryDelay: 2, retryBackoff: true, expireInMinutes: 60, deadLetter: 'review-failed' } as const
 const MAIL = { policy: 'short', retryLimit: 0, expireInMinutes: 10 } as const
 const POLL_S = 2
 

@@ -33,7 +33,7 @@ const AWAY = new Set(['ECONNREFUSED', 'ECONNRESET', 'EPIPE', 'ETIMEDOUT', 'ENOTF
 /** What the database refused, said as a problem; undefined when it is not the database's doing. */
 export function problemFromDatabase(error: unknown): H3Error<ProblemData> | undefined {
   const { code, constraint, message = '' } = (error ?? {}) as DatabaseError
-  if ((code && (AWAY.has(code) || code.startsWith('08'))) || /Connection terminated|timeout exceeded when trying to connect/.test(message)) return databaseAway()
+  if ((code && (AWAY.has(code) || code.startsWith('08'))) || /Connection terminated|timeout exceeded when trying to connect|not currently accepting connections/.test(message)) return databaseAway()
   if (code === '23P01') return problem(409, 'overlaps', 'This overlaps in time with one that is there already.', { constraint })
   if (code === '23505') return problem(409, 'already-there', 'There is one like this already.', { constraint })
   if (code === '40001' || code === '40P01') return problem(409, 'changed-meanwhile', 'Somebody else was writing at the same moment. Please try again.')
