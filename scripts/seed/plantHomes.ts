@@ -1,0 +1,76 @@
+import type { Db } from '../../server/db/connect'
+import { addItem, confirmInventory } from '../../server/db/commands/changeItems'
+import { createProperty } from '../../server/db/commands/createProperty'
+import { createTenancy } from '../../server/db/commands/createTenancy'
+import { createUnit } from '../../server/db/commands/createUnit'
+import { surveyAttic } from '../../server/db/commands/surveyAttic'
+import { things, type Thing } from '../../server/db/queries/things'
+import { suggestFootprint } from '../../shared/utils/goods/footprint'
+import { searchCatalogue } from '../../shared/utils/goods/itemCatalogue'
+import { PropertyCreate, UnitCreate } from '../../shared/schemas/home'
+import { daysBack } from './demoClock'
+import type { Cast } from './plantPeople'
+import type { DemoAttic, DemoItem, DemoProperty, DemoUnit } from './scenario'
+import { HOUSE_AGE_DAYS, type Step } from './steps'
+
+interface Plot { db: Db, cast: Cast, today: string }
+export interface PlantedUnit { unit: Thing<'unit'>, roomIds: string[], demo: DemoUnit }
+
+const SQUARE_PILE = (count: number) => Math.max(1, Math.ceil(Math.sqrt(count)))
+
+/** Properties, units, rooms and tenancies as they stood before the year begins. */
+export async function plantProperty({ db, cast, today }: Plot, demo: DemoProperty): Promise<PlantedUnit[]> {
+  const owner = cast.maren!
+  const { id } = await createProperty(db, owner, PropertyCreate.parse({ name: demo.name, addressLines: demo.addressLines, yearBuilt: demo.yearBuilt, notes: 'Invented for the demo.' }))
+  const property = (await things.property(db, id))!
+  const planted: PlantedUnit[] = []
+  for (const unitDemo of demo.units) {
+    const ceilingFinish = unitDemo.finish ?? 'gypsum-half-inch'
+    const made = await createUnit(db, owner, property, UnitCreate.parse({
+      name: unitDemo.name, accessNotes: 'Invented: ring first.', atticName: unitDemo.attic?.name ?? null,
+      rooms: unitDemo.rooms.map(room => ({ ...room, ceilingHeightIn: 96, ceilingFinish })),
+    }))
+    const unit = (await things.unit(db, made.id))!
+    const rooms = await db.selectFrom('room').select('id').where('unitId', '=', unit.id).orderBy('sort').execute()
+    await plantTenancy({ db, cast, today }, unit, unitDemo)
+    planted.push({ unit, roomIds: rooms.map(room => room.id), demo: unitDemo })
+  }
+  return planted
+}
+
+async function plantTenancy({ db, cast, today }: Plot, unit: Thing<'unit'>, demo: DemoUnit) {
+  if (!demo.tenantName || demo.tenantName.startsWith('Vacant')) return
+  const { id } = await createTenancy(db, cast.maren!, unit, { tenantName: demo.tenantName, startsOn: daysBack(today, HOUSE_AGE_DAYS + 180), endsOn: null, notes: '' })
+  const tenant = demo.tenant ? cast[demo.tenant] : undefined
+  if (!tenant) return
+  await db.insertInto('tenancyPerson').values({ tenancyId: id, organisationId: tenant.organisationId, userId: tenant.userId }).execute()
+  tenant.unitIds.push(unit.id)
+}
+
+/** Everything that happens in one attic over the year, as steps in time. */
+export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic): Step[] {
+  const attic = async () => (await things.attic(db, atticId))!
+  const otis = cast.otis!
+  const steps: Step[] = demo.items.map(item => ({
+    daysAgo: item.daysAgo, run: async on => void await addItem(db, otis, await attic(), itemOf(item, on)),
+  }))
+  if (demo.survey) {
+    const survey = demo.survey
+    steps.push({ daysAgo: HOUSE_AGE_DAYS - 5, run: async on => void await surveyAttic(db, otis, await attic(), { ...survey, surveyedOn: on }) })
+  }
+  if (demo.confirmedDaysAgo !== undefined) steps.push({ daysAgo: demo.confirmedDaysAgo, run: async on => void await confirmInventory(db, otis, await attic(), on) })
+  return steps
+}
+
+function itemOf({ find, quantity, xFt, yFt, weighedLb, tenantOwns }: DemoItem, placedOn: string) {
+  const row = searchCatalogue(find)[0]
+  if (!row) throw new Error(`The demo asks for "${find}", which the catalogue does not know`)
+  const foot = suggestFootprint(row)
+  const side = SQUARE_PILE(quantity)
+  const weight = weighedLb ? { lowLb: weighedLb, typicalLb: weighedLb, highLb: weighedLb, weightSource: 'weighed' as const } : { lowLb: row.lowLb, typicalLb: row.typicalLb, highLb: row.highLb, weightSource: 'catalogue' as const }
+  const round = (feet: number) => Math.round(feet * 100) / 100
+  return {
+    name: row.label, catalogueKey: row.key, category: row.category, quantity, ...weight, belongsTo: tenantOwns ? 'tenant' as const : 'landlord' as const,
+    fieldNumber: 1, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', placedOn,
+  }
+}
