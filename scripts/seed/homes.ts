@@ -17,8 +17,8 @@ export const PROPERTIES: DemoProperty[] = [
         attic: {
           name: 'Attic over the flat', survey: openAttic([J2X8], { ceilingFinish: 'plaster-on-lath' }), confirmedDaysAgo: 40,
           items: [
-            { find: 'Carton of books', quantity: 5, xFt: 4.5, yFt: 9, daysAgo: 270 },
-            { find: 'Tool', quantity: 1, xFt: 0, yFt: 2, daysAgo: 300, weighedLb: 140 },
+            { find: 'Carton of books', quantity: 12, xFt: 3.3, yFt: 9, daysAgo: 270 },
+            { find: 'Tool chest', quantity: 1, xFt: 0, yFt: 2, daysAgo: 300, weighedLb: 140 },
             { find: 'Medium carton', quantity: 4, xFt: 4, yFt: 4, daysAgo: 330 },
           ],
         },
@@ -65,7 +65,7 @@ export const PROPERTIES: DemoProperty[] = [
     units: [
       {
         name: '1', tenantName: 'Anselm Vogt', rooms: [room('Living room', 15, 12), bedroom('Bedroom', 11, 10)],
-        attic: { name: 'Storage attic 1', survey: openAttic([J2X10]), confirmedDaysAgo: 90, items: [{ find: 'Christmas tree', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }] },
+        attic: { name: 'Storage attic 1', survey: openAttic([J2X10]), confirmedDaysAgo: 90, items: [{ find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }] },
         marks: [crack({ room: 0, pattern: 'still', startMm: 0.2, shape: 'straight-line' })],
       },
       {
@@ -78,7 +78,7 @@ export const PROPERTIES: DemoProperty[] = [
       },
       {
         name: '5', tenantName: 'Dagny Holm', rooms: [room('Living room', 16, 12), bedroom('Bedroom', 12, 10)],
-        attic: { name: 'Storage attic 5', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 9, xFt: 0, yFt: 6, daysAgo: 22 }, { find: 'Large carton', quantity: 20, xFt: 0, yFt: 0, daysAgo: 200 }] },
+        attic: { name: 'Storage attic 5', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 12, xFt: 0, yFt: 8.5, daysAgo: 22 }, { find: 'Large carton', quantity: 27, xFt: 0, yFt: 0, daysAgo: 200 }] },
         marks: [crack({ room: 0, pattern: 'slow', startMm: 0.3, readings: 3, sinceDaysAgo: 18, lastDaysAgo: 4 })],
       },
     ],
