@@ -22,9 +22,13 @@ function takeFolder(dataDir) {
   keeper.add(release)
 }
 
+/** The demo is planted while the program is being built: both take some seconds and neither needs the other. */
 async function prepareDatabase(settings) {
   const database = await bringUpDatabase({ settings, keeper, say })
   await migrate({ root, keeper, env: { ...process.env, DATABASE_OWNER_URL: database.ownerUrl } })
+  if (settings.isDemoWanted) {
+    await seedWhenEmpty({ root, keeper, env: { ...process.env, DATABASE_URL: database.appUrl, DATA_DIR: settings.dataDir, PHOTO_DIR: settings.photoDir } })
+  }
   return database
 }
 
@@ -40,7 +44,6 @@ async function bringUp() {
     isDev ? undefined : buildIfStale({ root, outputDir: join(root, '.output'), buildDir: join(root, '.nuxt'), keeper, say }),
   ])
   const env = serverEnvironment(settings, { ...database, smtpUrl: mail.smtpUrl, port })
-  if (settings.isDemoWanted) await seedWhenEmpty({ root, keeper, env })
   const address = addressOf(settings.host, port)
   const command = entry ? [entry] : [join(root, 'node_modules/nuxt/bin/nuxt.mjs'), 'dev', '--host', settings.host, '--port', String(port)]
   const server = await bringUpServer({ command, cwd: root, env: { ...env, NODE_ENV: isDev ? 'development' : 'production' }, address, keeper, timeoutMs: isDev ? 120_000 : 45_000 })

@@ -78,7 +78,7 @@ export const PROPERTIES: DemoProperty[] = [
       },
       {
         name: '5', tenantName: 'Dagny Holm', rooms: [room('Living room', 16, 12), bedroom('Bedroom', 12, 10)],
-        attic: { name: 'Storage attic 5', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 12, xFt: 0, yFt: 8.5, daysAgo: 22 }, { find: 'Large carton', quantity: 27, xFt: 0, yFt: 0, daysAgo: 200 }] },
+        attic: { name: 'Storage attic 5', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 10, xFt: 0, yFt: 8.5, daysAgo: 22 }, { find: 'Large carton', quantity: 27, xFt: 0, yFt: 0, daysAgo: 200 }] },
         marks: [crack({ room: 0, pattern: 'slow', startMm: 0.3, readings: 3, sinceDaysAgo: 18, lastDaysAgo: 4 })],
       },
     ],
