@@ -41,7 +41,7 @@ export async function countPortfolio(db: Db, organisationId: string, today: stri
     (select count(*) filter (where state in ('planned', 'scheduled') and due_on < ${today}::date) late_jobs,
         coalesce(sum(cost_cents) filter (where done_on >= date_trunc('year', ${today}::date)), 0)::bigint spent_this_year_cents
       from job where organisation_id = ${organisationId}) j,
-    (select count(*) filter (where s.load_state = 'within') within, count(*) filter (where s.load_state = 'near') near,
+    (select count(*) filter (where s.load_state = 'within') as "within", count(*) filter (where s.load_state = 'near') near,
         count(*) filter (where s.load_state = 'over') "over", count(*) filter (where s.load_state = 'hold') hold,
         count(*) filter (where s.load_state is null or s.load_state = 'unsurveyed') unsurveyed
       from attic t left join attic_status s on s.attic_id = t.id where t.organisation_id = ${organisationId} and t.archived_at is null) a,
