@@ -29,7 +29,9 @@ export function useAccountChanges() {
   const client = useQueryClient()
   return {
     saveAccount: async (input: AccountEdit) => {
-      client.setQueryData(meKey, await $fetch<Me>('/api/me', { method: 'PATCH', body: input }))
+      const me = await $fetch<Me>('/api/me', { method: 'PATCH', body: input })
+      client.setQueryData(meKey, me)
+      return me
     },
     changePassword: (input: ChangePassword) => $fetch('/api/me/password', { method: 'POST', body: input }),
     switchOrganisation: async (organisationId: string) => {
