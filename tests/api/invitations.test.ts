@@ -33,7 +33,7 @@ const inFuture = (days: number) => new Date(Date.now() + days * 86_400_000).toIS
 
 describe('an invitation', () => {
   it('is mailed, kept for 14 days with only a digest of its link, and recorded', async () => {
-    const email = inventAddress('Mina')
+    const email = inventAddress('mina')
     const { status, body } = await invite({ email: ` ${email.toUpperCase()}`, role: 'manager' })
     expect(status).toBe(201)
     const row = await rowOf(body.id)

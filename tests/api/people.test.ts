@@ -88,7 +88,7 @@ describe('ending access', () => {
     const { client: owner } = await signUp(server.url)
     const trades = await bringIn(server, rows, owner, 'trades')
     await owner.remove(`/api/people/${(await rowOf(owner, trades.email)).id}`)
-    const sent = await trades.client.send('/upkeep')
+    const sent = await trades.client.send('/account')
     expect([sent.status, sent.headers.get('location')]).toEqual([302, '/no-membership'])
     expect(await (await trades.client.send('/no-membership')).text()).toContain('You are not part of an organisation just now')
   })
