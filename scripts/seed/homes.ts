@@ -15,7 +15,7 @@ export const PROPERTIES: DemoProperty[] = [
       {
         name: 'upper flat', finish: 'plaster-on-lath', tenant: 'tomas', tenantName: 'Tomas Ilves', rooms: [bedroom('Bedroom', 14, 12), room('Hall', 8, 5), room('Living room', 18, 14)],
         attic: {
-          name: 'Attic over the flat', survey: openAttic([J2X8], { ceilingFinish: 'plaster-on-lath' }), confirmedDaysAgo: 40,
+          name: 'Attic over the flat', surveyAgainDaysAgo: 95, survey: openAttic([J2X8], { ceilingFinish: 'plaster-on-lath' }), confirmedDaysAgo: 40,
           items: [
             { find: 'Carton of books', quantity: 12, xFt: 3.3, yFt: 9, daysAgo: 270 },
             { find: 'Tool chest', quantity: 1, xFt: 0, yFt: 2, daysAgo: 300, weighedLb: 140 },
@@ -38,7 +38,7 @@ export const PROPERTIES: DemoProperty[] = [
     name: '8 Ferry Lane', addressLines: ['8 Ferry Lane', 'Quillbrook, Example State'], yearBuilt: 1971,
     units: [{
       name: 'whole house', tenant: 'wanda', tenantName: 'Wanda Okonjo', rooms: [room('Stairs', 10, 6), bedroom('Front bedroom', 13, 12), bedroom('Back bedroom', 11, 10), room('Living room', 16, 13)],
-      attic: { name: 'Attic', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 200, items: [{ find: 'Large carton', quantity: 6, xFt: 0, yFt: 3, daysAgo: 360, tenantOwns: true }] },
+      attic: { name: 'Attic', surveyAgainDaysAgo: 150, survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 200, items: [{ find: 'Large carton', quantity: 6, xFt: 0, yFt: 3, daysAgo: 360, tenantOwns: true }] },
       marks: [
         { room: 0, kind: 'sag', shape: 'shallow-dish', place: 'middle', startMm: 14, pattern: 'jump', readings: 3, sinceDaysAgo: 25, lastDaysAgo: 0, danger: true },
         crack({ room: 1, pattern: 'slow', startMm: 0.5 }),
@@ -65,12 +65,12 @@ export const PROPERTIES: DemoProperty[] = [
     units: [
       {
         name: '1', tenantName: 'Anselm Vogt', rooms: [room('Living room', 15, 12), bedroom('Bedroom', 11, 10)],
-        attic: { name: 'Storage attic 1', survey: openAttic([J2X10]), confirmedDaysAgo: 90, items: [{ find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }] },
+        attic: { name: 'Storage attic 1', surveyAgainDaysAgo: 80, survey: openAttic([J2X10]), confirmedDaysAgo: 90, items: [{ find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }] },
         marks: [crack({ room: 0, pattern: 'still', startMm: 0.2, shape: 'straight-line' })],
       },
       {
         name: '2', tenant: 'ilse', tenantName: 'Ilse Marchetti', rooms: [room('Living room', 15, 12), bedroom('Bedroom', 11, 10)],
-        attic: { name: 'Storage attic 2', survey: openAttic([J2X10]), confirmedDaysAgo: 30, items: [] },
+        attic: { name: 'Storage attic 2', surveyAgainDaysAgo: 110, survey: openAttic([J2X10]), confirmedDaysAgo: 30, items: [] },
         marks: [crack({ room: 0, pattern: 'slow', startMm: 1.6, repairedDaysAgo: 45, readings: 12 }), crack({ room: 1, pattern: 'still', startMm: 0.4, lastDaysAgo: 70 })],
       },
       {
@@ -78,7 +78,7 @@ export const PROPERTIES: DemoProperty[] = [
       },
       {
         name: '5', tenantName: 'Dagny Holm', rooms: [room('Living room', 16, 12), bedroom('Bedroom', 12, 10)],
-        attic: { name: 'Storage attic 5', survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 10, xFt: 0, yFt: 8.5, daysAgo: 22 }, { find: 'Large carton', quantity: 27, xFt: 0, yFt: 0, daysAgo: 200 }] },
+        attic: { name: 'Storage attic 5', surveyAgainDaysAgo: 140, survey: openAttic([J2X6_SHORT]), confirmedDaysAgo: 60, items: [{ find: 'Carton of books', quantity: 10, xFt: 0, yFt: 8.5, daysAgo: 22 }, { find: 'Large carton', quantity: 27, xFt: 0, yFt: 0, daysAgo: 200 }] },
         marks: [crack({ room: 0, pattern: 'slow', startMm: 0.3, readings: 3, sinceDaysAgo: 18, lastDaysAgo: 4 })],
       },
     ],
@@ -88,12 +88,12 @@ export const PROPERTIES: DemoProperty[] = [
     units: [
       {
         name: 'A', tenantName: 'Joren Pell', rooms: [room('Living room', 17, 13), bedroom('Bedroom', 12, 12)],
-        attic: { name: 'Attic A', survey: TRUSSED, items: [{ find: 'Medium carton', quantity: 3, xFt: 1, yFt: 1, daysAgo: 150, tenantOwns: true }] },
+        attic: { name: 'Attic A', surveyAgainDaysAgo: 170, survey: TRUSSED, items: [{ find: 'Medium carton', quantity: 3, xFt: 1, yFt: 1, daysAgo: 150, tenantOwns: true }] },
         marks: [crack({ room: 0, pattern: 'season', startMm: 1.5, shape: 'gap-along-wall', place: 'wall-ceiling-corner' })],
       },
       {
         name: 'B', tenantName: 'Sunniva Ask', rooms: [room('Living room', 17, 13), bedroom('Bedroom', 12, 12)],
-        attic: { name: 'Attic B', survey: TRUSSED, items: [] },
+        attic: { name: 'Attic B', surveyAgainDaysAgo: 160, survey: TRUSSED, items: [] },
         marks: [crack({ room: 1, pattern: 'season', startMm: 1.1, shape: 'gap-along-wall', place: 'wall-ceiling-corner' }), crack({ room: 0, pattern: 'still', startMm: 0.5, readings: 2, sinceDaysAgo: 20 })],
       },
       { name: 'C', tenantName: 'Halvor Reyes', rooms: [room('Living room', 17, 13)], marks: [crack({ room: 0, pattern: 'still', startMm: 0.3 }), crack({ room: 0, pattern: 'season', startMm: 0.8, shape: 'straight-line' })] },

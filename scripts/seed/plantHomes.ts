@@ -56,7 +56,9 @@ export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic)
   }))
   if (demo.survey) {
     const survey = demo.survey
-    steps.push({ daysAgo: HOUSE_AGE_DAYS - 5, run: async on => void await surveyAttic(db, otis, await attic(), { ...survey, surveyedOn: on }) })
+    const surveyed = (daysAgo: number): Step => ({ daysAgo, run: async on => void await surveyAttic(db, otis, await attic(), { ...survey, surveyedOn: on }) })
+    steps.push(surveyed(HOUSE_AGE_DAYS - 5))
+    if (demo.surveyAgainDaysAgo !== undefined) steps.push(surveyed(demo.surveyAgainDaysAgo))
   }
   if (demo.confirmedDaysAgo !== undefined) steps.push({ daysAgo: demo.confirmedDaysAgo, run: async on => void await confirmInventory(db, otis, await attic(), on) })
   return steps

@@ -8,6 +8,7 @@ import * as record from './0006Record'
 import * as mailAttempts from './0007MailAttempts'
 import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
+import * as lookedBefore from './0012LookedBefore'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -20,4 +21,5 @@ export const migrations: Record<string, Migration> = {
   '0007MailAttempts': mailAttempts,
   '0008Judging': judging,
   '0009InvitationTerms': invitationTerms,
+  '0012LookedBefore': lookedBefore,
 }

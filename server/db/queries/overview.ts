@@ -2,6 +2,7 @@ import { sql } from 'kysely'
 import type { Db } from '../connect'
 import type { AtticCounts, OverviewChange, OverviewDecision, OverviewDue } from '../../../shared/types/overview'
 import type { Activity } from '../../../shared/types/mark'
+import { RISK_ORDER } from '../../../shared/utils/upkeep/riskOrder'
 import { atticsOf, marksOf, roomsOf } from './unitParts'
 
 /** Homes shown as waiting for a decision; the rest is counted and listed on the findings page. */
@@ -9,7 +10,7 @@ const MOST_DECISIONS = 12
 const MOST_CHANGES = 8
 const MOST_UPCOMING = 30
 
-/** Homes with something that waits for a person: worst first, then longest open. */
+/** Homes with something that waits for a person: worst first, by what could hurt somebody, then longest open. */
 export async function findDecisions(db: Db, organisationId: string): Promise<OverviewDecision[]> {
   const rows = await db.selectFrom('unitStatus as us')
     .innerJoin('finding as f', 'f.id', 'us.topFindingId')
@@ -20,7 +21,7 @@ export async function findDecisions(db: Db, organisationId: string): Promise<Ove
       roomsOf(db, eb.ref('us.unitId')).as('rooms'), atticsOf(db, eb.ref('us.unitId')).as('attics'), marksOf(db, eb.ref('us.unitId')).as('marks'),
     ])
     .where('us.organisationId', '=', organisationId).where('us.worstSeverity', 'in', ['urgent', 'attention']).where('u.archivedAt', 'is', null)
-    .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy('f.openedAt').orderBy('us.unitId')
+    .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy(sql`array_position(${[...RISK_ORDER]}::text[], f.rule)`).orderBy('f.openedAt').orderBy('us.unitId')
     .limit(MOST_DECISIONS).execute()
   return rows.map(({ unitId, unitName, propertyName, openFindings, severity, rooms, attics, marks, evidence, ...finding }) => ({
     unitId, unitName, propertyName, openFindings, severity,
@@ -76,12 +77,19 @@ export function findUpcoming(db: Db, organisationId: string, untilOn: string): P
     .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING).execute()
 }
 
-export const findLastLooked = (db: Db, organisationId: string, userId: string) =>
-  db.selectFrom('membership').select('lastLookedAt').where('organisationId', '=', organisationId).where('userId', '=', userId).executeTakeFirst()
-
 /** Ours: one visit, however often the page is loaded within these hours. */
-const ONE_VISIT_HOURS = 8
+const ONE_VISIT_MS = 8 * 3_600_000
 
+/** When the asker last looked before this visit; null at the first one. */
+export async function findLastLooked(db: Db, organisationId: string, userId: string, at: string): Promise<string | null> {
+  const row = await db.selectFrom('membership').select(['lastLookedAt', 'lookedBeforeAt'])
+    .where('organisationId', '=', organisationId).where('userId', '=', userId).executeTakeFirst()
+  if (!row?.lastLookedAt) return null
+  return Date.parse(at) - Date.parse(row.lastLookedAt) < ONE_VISIT_MS ? row.lookedBeforeAt : row.lastLookedAt
+}
+
+/** Notes a visit once; the one before it stays what changes are counted from. */
 export const noteLooked = (db: Db, organisationId: string, userId: string, at: string) =>
-  db.updateTable('membership').set({ lastLookedAt: at }).where('organisationId', '=', organisationId).where('userId', '=', userId)
-    .where(eb => eb.or([eb('lastLookedAt', 'is', null), eb('lastLookedAt', '<', new Date(Date.parse(at) - ONE_VISIT_HOURS * 3_600_000).toISOString())])).execute()
+  db.updateTable('membership').set(eb => ({ lookedBeforeAt: eb.ref('lastLookedAt'), lastLookedAt: at }))
+    .where('organisationId', '=', organisationId).where('userId', '=', userId)
+    .where(eb => eb.or([eb('lastLookedAt', 'is', null), eb('lastLookedAt', '<', new Date(Date.parse(at) - ONE_VISIT_MS).toISOString())])).execute()

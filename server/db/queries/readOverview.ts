@@ -1,7 +1,7 @@
 import type { Db } from '../connect'
 import type { Overview } from '../../../shared/types/overview'
 import { addDays } from '../../../shared/utils/days'
-import { dayIn } from '../../utils/clock'
+import { dayIn, nowInstant } from '../../utils/clock'
 import type { Actor } from './actor'
 import { countPortfolio, findChanges, findDecisions, findLastLooked, findUpcoming } from './overview'
 
@@ -10,8 +10,7 @@ const UPCOMING_DAYS = 14
 /** The portfolio at a glance, in five statements whatever its size. */
 export async function readOverview(db: Db, actor: Actor): Promise<Overview> {
   const today = dayIn(actor.timeZone)
-  const looked = await findLastLooked(db, actor.organisationId, actor.userId)
-  const since = looked?.lastLookedAt ?? null
+  const since = await findLastLooked(db, actor.organisationId, actor.userId, nowInstant())
   const [counts, decisions, changes, upcoming] = await Promise.all([
     countPortfolio(db, actor.organisationId, today),
     findDecisions(db, actor.organisationId),

@@ -1,3 +1,4 @@
+import type { ColumnType } from 'kysely'
 import type { Day, Defaulted, Instant } from '../schema'
 import type { Role } from '../../../shared/types/people'
 
@@ -47,6 +48,7 @@ export interface MembershipTable {
   role: Role
   digest: Defaulted<boolean>
   lastLookedAt: Instant | null
+  lookedBeforeAt: ColumnType<string | null, string | null | undefined, string | null>
   createdAt: Instant
   endedAt: Instant | null
 }
