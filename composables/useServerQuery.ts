@@ -1,4 +1,4 @@
-import { useQuery, useQueryClient, type QueryKey } from '@tanstack/vue-query'
+import { keepPreviousData, useQuery, useQueryClient, type QueryKey } from '@tanstack/vue-query'
 
 interface ServerQuery {
   key: MaybeRefOrGetter<QueryKey>
@@ -6,6 +6,8 @@ interface ServerQuery {
   enabled?: MaybeRefOrGetter<boolean>
   /** The page makes no sense without it: a refusal becomes the error page (404 stays 404). */
   essential?: boolean
+  /** Show the last answer while another key is fetched: lists that are searched and paged. */
+  keepPrevious?: boolean
 }
 
 /** A GET of our own server as a vue-query query: fetched with the asker's cookie while the page is rendered, then hydrated. */
@@ -15,6 +17,7 @@ export function useServerQuery<T>(options: ServerQuery) {
     queryKey: computed(() => toValue(options.key)),
     queryFn: () => request(toValue(options.path)) as Promise<T>,
     enabled: computed(() => toValue(options.enabled ?? true)),
+    placeholderData: options.keepPrevious ? keepPreviousData : undefined,
     retry: (failures, error) => failures < 2 && isWorthRetrying(error),
   })
   onServerPrefetch(async () => {

@@ -1,5 +1,5 @@
 import type { CeilingFinish } from './attic'
-import type { Severity } from './finding'
+import type { Severity, StoredFinding } from './finding'
 import type { Activity, MarkKind } from './mark'
 
 export interface PropertyFacts {
@@ -99,18 +99,8 @@ export interface MarkOfUnit {
   stainState: string | null
 }
 
-export interface FindingOfUnit {
-  id: string
-  rule: string
-  subjectKind: string
-  subjectId: string
-  severity: Severity
-  evidence: Record<string, unknown>
-  openedAt: string
-  acknowledgedAt: string | null
-  acknowledgedReason: string | null
-  lookAgainOn: string | null
-}
+/** An open finding, with the day it is to be looked at again when somebody acknowledged it. */
+export type FindingOfUnit = StoredFinding
 
 export interface JobOfUnit {
   id: string

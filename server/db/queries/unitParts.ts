@@ -2,7 +2,8 @@ import { sql, type Expression } from 'kysely'
 import { jsonBuildObject } from 'kysely/helpers/postgres'
 import type { Db } from '../connect'
 import type { CeilingFinish } from '../../../shared/types/attic'
-import type { FieldMeasures, UnitLoadState } from '../../../shared/types/home'
+import type { StoredFinding } from '../../../shared/types/finding'
+import type { FieldMeasures } from '../../../shared/types/home'
 import { isoInstant, jsonList } from './jsonList'
 
 /** Subqueries for parts of one unit; `unitId` is a value or a column of the statement around them. */
@@ -16,6 +17,7 @@ export const roomsOf = (db: Db, unitId: Expression<string>, kept: 'in use' | 'ar
 
 /** Each attic with the survey that holds now and what is in it. */
 export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('attic as a')
+  .leftJoin('atticStatus as judged', 'judged.atticId', 'a.id')
   .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s')
     .select(['s.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', sql<FieldMeasures[]>`(
       select json_agg(json_build_object('spanFt', f->'spanFt', 'spacingIn', f->'spacingIn', 'joistCount', f->'joistCount') order by n)
@@ -33,7 +35,7 @@ export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('a
   .select(({ ref }) => jsonList(jsonBuildObject({
     id: ref('a.id'), name: ref('a.name'), notes: ref('a.notes'), inventoryConfirmedOn: ref('a.inventoryConfirmedOn'),
     surveyedOn: ref('latest.surveyedOn'), ratedPsf: ref('latest.ratedPsf'), onHold: ref('latest.onHold'), basis: ref('latest.basis'),
-    loadState: sql<UnitLoadState | null>`null`, utilisation: sql<number | null>`null`, storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
+    loadState: ref('judged.loadState'), utilisation: ref('judged.utilisation'), storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
   }), sql`a.name, a.id`).as('list'))
   .where('a.unitId', '=', unitId).where('a.archivedAt', 'is', null)
 
@@ -47,11 +49,11 @@ export const marksOf = (db: Db, unitId: Expression<string>) => db.selectFrom('ma
   .where('m.unitId', '=', unitId).where('m.state', '!=', 'closed')
 
 export const findingsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('finding as f')
-  .select(({ ref }) => jsonList(jsonBuildObject({
-    id: ref('f.id'), rule: ref('f.rule'), subjectKind: ref('f.subjectKind'), subjectId: ref('f.subjectId'), severity: ref('f.severity'),
-    evidence: sql<Record<string, unknown>>`f.evidence`, openedAt: isoInstant(ref('f.openedAt')), acknowledgedAt: isoInstant(ref('f.acknowledgedAt')),
-    acknowledgedReason: ref('f.acknowledgedReason'), lookAgainOn: ref('f.lookAgainOn'),
-  }), sql`array_position(array['urgent', 'attention', 'notice'], f.severity), f.opened_at desc, f.id`).as('list'))
+  .select(({ ref }) => jsonList(sql<StoredFinding>`${jsonBuildObject({
+    id: ref('f.id'), rule: ref('f.rule'), subject: jsonBuildObject({ kind: ref('f.subjectKind'), id: ref('f.subjectId') }), severity: ref('f.severity'),
+    adviceCode: ref('f.adviceCode'), evidence: ref('f.evidence'), openedAt: isoInstant(ref('f.openedAt')), clearedAt: ref('f.clearedAt'),
+    acknowledgedAt: isoInstant(ref('f.acknowledgedAt')), acknowledgedReason: ref('f.acknowledgedReason'), lookAgainOn: ref('f.lookAgainOn'),
+  })}`, sql`array_position(array['urgent', 'attention', 'notice'], f.severity), f.opened_at desc, f.id`).as('list'))
   .where('f.unitId', '=', unitId).where('f.clearedAt', 'is', null)
 
 /** What is still to be done or to be confirmed. */
