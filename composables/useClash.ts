@@ -24,7 +24,10 @@ export function useClash<In extends { version: number }, A>(form: Form<In, A>, f
     },
     takeTheirs: () => {
       const now = theirs.value
-      if (now) form.reset(Object.fromEntries(Object.keys(form.values).map(key => [key, now[key as keyof In]])) as In)
+      if (!now) return
+      const next = { ...form.values }
+      for (const key of Object.keys(next) as (keyof In)[]) next[key] = now[key]
+      form.reset(next)
     },
   }
 }

@@ -32,9 +32,11 @@ export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('a
       }), sql`i.quantity * i.typical_lb desc, i.id`).as('items'),
     ])
     .whereRef('i.atticId', '=', 'a.id').where('i.removedOn', 'is', null).as('stored'), join => join.onTrue())
-  .select(({ ref }) => jsonList(jsonBuildObject({
+  .select(({ ref, fn }) => jsonList(jsonBuildObject({
     id: ref('a.id'), name: ref('a.name'), notes: ref('a.notes'), inventoryConfirmedOn: ref('a.inventoryConfirmedOn'),
-    surveyedOn: ref('latest.surveyedOn'), ratedPsf: ref('latest.ratedPsf'), onHold: ref('latest.onHold'), basis: ref('latest.basis'),
+    surveyedOn: ref('latest.surveyedOn'), basis: ref('latest.basis'),
+    // As judged with the documents on file; before the first judgement as the survey alone says.
+    ratedPsf: fn.coalesce('judged.ratedPsf', 'latest.ratedPsf'), onHold: sql<boolean | null>`case when judged.attic_id is null then latest.on_hold else judged.load_state = 'hold' end`,
     loadState: ref('judged.loadState'), utilisation: ref('judged.utilisation'), storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
   }), sql`a.name, a.id`).as('list'))
   .where('a.unitId', '=', unitId).where('a.archivedAt', 'is', null)
