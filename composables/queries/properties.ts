@@ -1,8 +1,8 @@
 import type { MaybeRefOrGetter } from 'vue'
 import { pathWith } from '~/composables/queries/pathWith'
 import { useServerChange, useServerQuery } from '~/composables/useServerQuery'
-import type { PropertyCreateValue, PropertyEditValue, UnitCreateValue } from '~/shared/schemas/home'
-import type { Page, PropertyCard, PropertyFacts, PropertyPage } from '~/shared/types/home'
+import type { PropertyCreateValue, PropertyEditValue, UnitCreateValue } from '#shared/schemas/home'
+import type { Page, PropertyCard, PropertyFacts, PropertyPage } from '#shared/types/home'
 
 export interface HomesFilter { search?: string, after?: string, archived?: string, [more: string]: string | undefined }
 

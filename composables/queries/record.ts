@@ -1,7 +1,7 @@
 import type { MaybeRefOrGetter } from 'vue'
 import { pathWith } from '~/composables/queries/pathWith'
 import { useServerQuery } from '~/composables/useServerQuery'
-import type { RecordPage } from '~/shared/types/record'
+import type { RecordPage } from '#shared/types/record'
 
 export interface RecordFilter { after?: string, subject?: string, [more: string]: string | undefined }
 

@@ -1,10 +1,10 @@
 import type { MaybeRefOrGetter } from 'vue'
 import { pathWith } from '~/composables/queries/pathWith'
 import { useServerChange, useServerQuery } from '~/composables/useServerQuery'
-import type { AtticCreateValue, UnitEditValue } from '~/shared/schemas/home'
-import type { RoomCreateValue, RoomEditValue } from '~/shared/schemas/room'
-import type { TenancyCreateValue, TenancyEditValue } from '~/shared/schemas/tenancy'
-import type { Page, RoomFacts, TenancyFacts, UnitCard, UnitFacts, UnitPage } from '~/shared/types/home'
+import type { AtticCreateValue, UnitEditValue } from '#shared/schemas/home'
+import type { RoomCreateValue, RoomEditValue } from '#shared/schemas/room'
+import type { TenancyCreateValue, TenancyEditValue } from '#shared/schemas/tenancy'
+import type { Page, RoomFacts, TenancyFacts, UnitCard, UnitFacts, UnitPage } from '#shared/types/home'
 
 export interface UnitsFilter { search?: string, after?: string, sections?: 'yes', [more: string]: string | undefined }
 
@@ -13,7 +13,7 @@ export const useUnit = (unitId: MaybeRefOrGetter<string>) => useServerQuery<Unit
 })
 
 /** The units the asker may see, by property and name. */
-export const useUnits = (filter: MaybeRefOrGetter<UnitsFilter>, enabled: MaybeRefOrGetter<boolean> = true) => useServerQuery<Page<UnitCard>>({
+export const useUnitList = (filter: MaybeRefOrGetter<UnitsFilter>, enabled: MaybeRefOrGetter<boolean> = true) => useServerQuery<Page<UnitCard>>({
   key: () => ['units', 'list', toValue(filter)], path: () => pathWith('/api/units', toValue(filter)), enabled, essential: true, keepPrevious: true,
 })
 

@@ -1,5 +1,6 @@
-import type { CeilingFinish } from './attic'
+import type { AtticDocument, AtticSurvey, CeilingFinish } from './attic'
 import type { Severity, StoredFinding } from './finding'
+import type { WeightSource } from './item'
 import type { Activity, MarkKind } from './mark'
 
 export interface PropertyFacts {
@@ -49,14 +50,14 @@ export interface TenancyFacts {
 /** What the section needs of a joist field; null where it was not measured. */
 export interface FieldMeasures { spanFt: number | null, spacingIn: number | null, joistCount: number | null }
 
-export interface StoredItem {
+export interface ItemOfUnit {
   id: string
   name: string
   quantity: number
   lowLb: number
   typicalLb: number
   highLb: number
-  weightSource: string
+  weightSource: WeightSource
   fieldNumber: number
   xFt: number
   yFt: number
@@ -78,7 +79,10 @@ export interface AtticOfUnit {
   utilisation: number | null
   storedLb: number
   fields: FieldMeasures[]
-  items: StoredItem[]
+  items: ItemOfUnit[]
+  /** The survey that holds now and the papers in force: only on the unit's own page, where the contents are judged joist by joist. */
+  survey?: AtticSurvey | null
+  documents?: AtticDocument[]
 }
 
 export interface MarkOfUnit {

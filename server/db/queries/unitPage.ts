@@ -4,7 +4,7 @@ import type { Actor } from './actor'
 import type { UnitPage } from '../../../shared/types/home'
 import { dayIn } from '../../utils/clock'
 import { abilitiesOf, reachOf } from '../../utils/policy'
-import { atticsOf, findingsOf, jobsOf, marksOf, roomsOf, statusOf, tenanciesOf } from './unitParts'
+import { judgedAtticsOf, findingsOf, jobsOf, marksOf, roomsOf, statusOf, tenanciesOf } from './unitParts'
 
 /** Everything the unit's page shows, in one statement; what the asker's role may not see is left out. */
 export async function findUnitPage(db: Db, actor: Actor, unitId: string): Promise<UnitPage> {
@@ -15,7 +15,7 @@ export async function findUnitPage(db: Db, actor: Actor, unitId: string): Promis
   const row = await db.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId').leftJoin('recordChain as c', 'c.chainId', 'u.id')
     .select(['u.id', 'u.propertyId', 'u.name', 'u.notes', 'u.accessNotes', 'u.archivedAt', 'u.version',
       'p.name as propertyName', 'p.addressLines', 'p.yearBuilt', 'p.notes as propertyNotes', 'p.archivedAt as propertyArchivedAt', 'p.version as propertyVersion',
-      'c.entries', roomsOf(db, id).as('rooms'), roomsOf(db, id, 'archived').as('archivedRooms'), atticsOf(db, id).as('attics'), marksOf(db, id).as('marks'),
+      'c.entries', roomsOf(db, id).as('rooms'), roomsOf(db, id, 'archived').as('archivedRooms'), judgedAtticsOf(db, id).as('attics'), marksOf(db, id).as('marks'),
       tenanciesOf(db, id, edits ? null : actor.userId).as('tenancies')])
     .$if(seesFindings, query => query.select([findingsOf(db, id).as('findings'), statusOf(db, id).as('status')]))
     .$if(seesJobs, query => query.select(jobsOf(db, id).as('jobs')))

@@ -1,9 +1,9 @@
-import { sql, type Expression } from 'kysely'
+import { sql, type Expression, type ExpressionBuilder, type SelectQueryBuilder } from 'kysely'
 import { jsonBuildObject } from 'kysely/helpers/postgres'
 import type { Db } from '../connect'
 import type { CeilingFinish } from '../../../shared/types/attic'
 import type { StoredFinding } from '../../../shared/types/finding'
-import type { FieldMeasures } from '../../../shared/types/home'
+import type { AtticOfUnit, FieldMeasures } from '../../../shared/types/home'
 import { isoInstant, jsonList } from './jsonList'
 
 /** Subqueries for parts of one unit; `unitId` is a value or a column of the statement around them. */
@@ -15,11 +15,22 @@ export const roomsOf = (db: Db, unitId: Expression<string>, kept: 'in use' | 'ar
   }), sql`r.sort, r.id`).as('list'))
   .where('r.unitId', '=', unitId).where('r.archivedAt', kept === 'in use' ? 'is' : 'is not', null)
 
-/** Each attic with the survey that holds now and what is in it. */
-export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('attic as a')
+/** Each attic with what the survey that holds now says in short, and what is in it. */
+export const atticsOf = (db: Db, unitId: Expression<string>) => atticRowsOf(db, unitId).select(eb => jsonList(atticFacts(eb), byName).as('list'))
+
+/** The same with the whole survey and the papers in force, for judging the contents. */
+export const judgedAtticsOf = (db: Db, unitId: Expression<string>) => atticRowsOf(db, unitId).select(eb => jsonList(sql<AtticOfUnit>`${atticFacts(eb)}::jsonb || jsonb_build_object(
+  'survey', latest.answers, 'documents', coalesce(${eb.selectFrom('atticDocument as d').select(({ ref }) => jsonList(jsonBuildObject({
+    kind: ref('d.kind'), writtenOn: ref('d.writtenOn'), writtenBy: ref('d.writtenBy'), attached: sql<boolean>`true`, ratedPsf: ref('d.ratedPsf'),
+    liftsHold: ref('d.liftsHold'), coversWholeAttic: ref('d.coversWholeAttic'), area: ref('d.area'),
+  }), sql`d.created_at`).as('list')).whereRef('d.atticId', '=', 'a.id').where('d.withdrawnAt', 'is', null)}, '[]'::json)::jsonb)`, byName).as('list'))
+
+const byName = sql`a.name, a.id`
+
+const atticRowsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('attic as a')
   .leftJoin('atticStatus as judged', 'judged.atticId', 'a.id')
   .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s')
-    .select(['s.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', sql<FieldMeasures[]>`(
+    .select(['s.answers', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', sql<FieldMeasures[]>`(
       select json_agg(json_build_object('spanFt', f->'spanFt', 'spacingIn', f->'spacingIn', 'joistCount', f->'joistCount') order by n)
       from jsonb_array_elements(s.answers->'joistFields') with ordinality as field(f, n))`.as('fields')])
     .whereRef('s.atticId', '=', 'a.id').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1).as('latest'), join => join.onTrue())
@@ -32,14 +43,17 @@ export const atticsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('a
       }), sql`i.quantity * i.typical_lb desc, i.id`).as('items'),
     ])
     .whereRef('i.atticId', '=', 'a.id').where('i.removedOn', 'is', null).as('stored'), join => join.onTrue())
-  .select(({ ref, fn }) => jsonList(jsonBuildObject({
-    id: ref('a.id'), name: ref('a.name'), notes: ref('a.notes'), inventoryConfirmedOn: ref('a.inventoryConfirmedOn'),
-    surveyedOn: ref('latest.surveyedOn'), basis: ref('latest.basis'),
-    // As judged with the documents on file; before the first judgement as the survey alone says.
-    ratedPsf: fn.coalesce('judged.ratedPsf', 'latest.ratedPsf'), onHold: sql<boolean | null>`case when judged.attic_id is null then latest.on_hold else judged.load_state = 'hold' end`,
-    loadState: ref('judged.loadState'), utilisation: ref('judged.utilisation'), storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
-  }), sql`a.name, a.id`).as('list'))
   .where('a.unitId', '=', unitId).where('a.archivedAt', 'is', null)
+
+type AtticRows = ReturnType<typeof atticRowsOf> extends SelectQueryBuilder<infer DB, infer TB, object> ? ExpressionBuilder<DB, TB> : never
+
+const atticFacts = ({ ref, fn }: AtticRows) => jsonBuildObject({
+  id: ref('a.id'), name: ref('a.name'), notes: ref('a.notes'), inventoryConfirmedOn: ref('a.inventoryConfirmedOn'),
+  surveyedOn: ref('latest.surveyedOn'), basis: ref('latest.basis'),
+  // As judged with the documents on file; before the first judgement as the survey alone says.
+  ratedPsf: fn.coalesce('judged.ratedPsf', 'latest.ratedPsf'), onHold: sql<boolean | null>`case when judged.attic_id is null then latest.on_hold else judged.load_state = 'hold' end`,
+  loadState: ref('judged.loadState'), utilisation: ref('judged.utilisation'), storedLb: sql<number>`stored.stored_lb`, fields: sql<FieldMeasures[]>`coalesce(latest.fields, '[]'::json)`, items: ref('stored.items').$notNull(),
+})
 
 /** Closed marks stay on their own pages. */
 export const marksOf = (db: Db, unitId: Expression<string>) => db.selectFrom('mark as m')

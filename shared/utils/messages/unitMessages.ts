@@ -1,10 +1,9 @@
 import type { AtticOfUnit, MarkOfUnit, RoomFacts, UnitLoadState, UnitStatusFacts } from '../../types/home'
 import type { Activity } from '../../types/mark'
 import { formatDay } from '../days'
-import { formatLoad, formatShare, formatWeight, type UnitSystem } from '../units'
+import type { UnitSystem } from '../units'
 import { ACTIVITY_WORDS, countWords, rateWords } from './activityMessages'
 import { MARK_KIND_WORDS } from './markMessages'
-import { HOLD_CAUTION, TRUSS_CAUTION } from './safety'
 
 export type VerdictTone = 'within' | 'near' | 'over' | 'dormant' | 'watch' | 'active' | 'unknown'
 export interface VerdictWords { word: string, tone: VerdictTone, says: string, number?: string, after?: string, why: string }
@@ -24,32 +23,6 @@ export function atticWord(status: Pick<UnitStatusFacts, 'loadState' | 'atticCoun
 export function ceilingWord({ openMarks, activeMarks }: Pick<UnitStatusFacts, 'openMarks' | 'activeMarks'>): { word: string, tone: VerdictTone } {
   if (activeMarks > 0) return { word: `Active: ${activeMarks}`, tone: 'active' }
   return openMarks > 0 ? { word: `Marks followed: ${openMarks}`, tone: 'watch' } : { word: 'No marks', tone: 'unknown' }
-}
-
-function storedWords(attic: AtticOfUnit, system: UnitSystem): string {
-  return attic.items.length === 0 ? 'Nothing on record is stored here.' : `About ${formatWeight(attic.storedLb, system)} stored in ${countWords(attic.items.length, 'entry', 'entries')}.`
-}
-
-function surveyWords(attic: AtticOfUnit, system: UnitSystem): string {
-  if (attic.surveyedOn === null || attic.ratedPsf === null) return 'Nobody has recorded yet what this attic can hold.'
-  const unverified = attic.basis === 'unverified' ? ', unverified until the joists are measured' : ''
-  return `Rated ${formatLoad(attic.ratedPsf, system)}${unverified}, surveyed on ${formatDay(attic.surveyedOn)}.`
-}
-
-/** One word, one number and the reason for one attic. */
-export function atticVerdict(attic: AtticOfUnit, system: UnitSystem = 'us'): VerdictWords {
-  const why = `${storedWords(attic, system)} ${surveyWords(attic, system)}`
-  if (attic.surveyedOn === null) return { ...LOAD_WORDS.unsurveyed, says: ': what it may hold is not known.', why }
-  if (attic.onHold) return { ...LOAD_WORDS.hold, says: ': no storage until it has been inspected.', why: `${why} ${HOLD_CAUTION}` }
-  if (attic.ratedPsf === 0) {
-    const full = attic.items.length > 0
-    const says = full ? ': things are stored where nothing may be stored.' : ': nothing may be stored here.'
-    return { word: full ? 'Over' : 'No storage', tone: full ? 'over' : 'within', says, why: attic.basis === 'framing' ? `${why} ${TRUSS_CAUTION}` : why }
-  }
-  const state = LOAD_WORDS[attic.loadState ?? 'unsurveyed']
-  if (attic.loadState === null || attic.utilisation === null) return { ...state, says: ': the load has not been judged yet.', why }
-  const says = { within: ': at most', near: ': up to', over: ': up to' }[attic.loadState as string] ?? ': up to'
-  return { ...state, says, number: formatShare(attic.utilisation), after: 'of the rating is used.', why }
 }
 
 const GRAVITY: Record<Activity, number> = { 'active': 3, 'watch': 2, 'too-few-readings': 1, 'dormant': 0 }

@@ -1,4 +1,4 @@
-import type { AtticOfUnit, MarkOfUnit, SectionParts, StoredItem } from '../../types/home'
+import type { AtticOfUnit, MarkOfUnit, SectionParts, ItemOfUnit } from '../../types/home'
 import type { Activity } from '../../types/mark'
 import { countWords } from '../messages/activityMessages'
 import { MARK_KIND_WORDS } from '../messages/markMessages'
@@ -30,7 +30,7 @@ export interface SectionMarkPart {
 export interface SectionDrawn { rooms: SectionRoomPart[], loads: SectionLoadPart[], marks: SectionMarkPart[] }
 
 /** How one item was judged where it stands. */
-export interface ItemVerdict { state: 'within' | 'near' | 'over', utilisation: number }
+export interface ItemVerdict { state: 'within' | 'near' | 'over', utilisation: number | null }
 
 /** A home of unmeasured rooms is drawn with equal ones; an unmeasured field gets this width (ours), or what its items need. */
 const UNKNOWN_ROOM_FT = 12
@@ -89,12 +89,12 @@ function placeLoads(attics: readonly AtticOfUnit[], verdicts: ReadonlyMap<string
   }, system))
 }
 
-function loadPart(attic: AtticOfUnit, item: StoredItem, verdict: ItemVerdict | undefined, place: { positionShare: number, widthShare: number }, system: UnitSystem): SectionLoadPart {
+function loadPart(attic: AtticOfUnit, item: ItemOfUnit, verdict: ItemVerdict | undefined, place: { positionShare: number, widthShare: number }, system: UnitSystem): SectionLoadPart {
   const weightLb = item.quantity * item.typicalLb
   return {
     id: item.id, label: item.name, weightLb, weightText: formatWeight(weightLb, system), ...place,
     state: verdict?.state ?? atticTone(attic),
-    ratingShare: verdict?.utilisation ?? attic.utilisation ?? undefined,
+    ratingShare: (verdict ? verdict.utilisation : attic.utilisation) ?? undefined,
   }
 }
 
