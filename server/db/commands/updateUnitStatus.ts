@@ -1,7 +1,7 @@
 import { sql } from 'kysely'
-import { RISK_ORDER } from '../../../shared/utils/upkeep/riskOrder'
 import type { Trx } from '../connect'
 import { dayIn, nowInstant } from '../../utils/clock'
+import { riskRank } from '../queries/riskRank'
 
 /**
  * Adds up what the portfolio reads of one unit. Worst severity and top finding are among the findings that wait for a
@@ -19,7 +19,7 @@ export async function updateUnitStatus(trx: Trx, unitId: string) {
     from (select count(*) findings from finding where unit_id = ${unit.id} and cleared_at is null) open
     left join lateral (select id, severity from finding
       where unit_id = ${unit.id} and cleared_at is null and acknowledged_at is null
-      order by case severity when 'urgent' then 0 when 'attention' then 1 else 2 end, array_position(${[...RISK_ORDER]}::text[], rule), opened_at, id limit 1) top on true
+      order by case severity when 'urgent' then 0 when 'attention' then 1 else 2 end, ${riskRank('rule')}, opened_at, id limit 1) top on true
     cross join (select count(*) n, max(s.utilisation) utilisation, sum(s.stored_lb) stored_lb
       from attic a left join attic_status s on s.attic_id = a.id where a.unit_id = ${unit.id} and a.archived_at is null) attics
     left join lateral (select coalesce(s.load_state, 'unsurveyed') load_state
