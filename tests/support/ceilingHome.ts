@@ -68,6 +68,8 @@ export async function plantCeilingHome(server: TestServer): Promise<CeilingHome>
   const { client: owner, owner: { email: ownerEmail } } = await signUp(server.url)
   const { client: stranger } = await signUp(server.url)
   const { organisationId } = await db.selectFrom('membership as m').innerJoin('appUser as u', 'u.id', 'm.userId').select('m.organisationId').where('u.email', '=', ownerEmail).executeTakeFirstOrThrow()
+  // One zone for everybody, so that 'today' is the same day in the tests and on the server.
+  await db.updateTable('organisation').set({ timeZone: 'UTC' }).where('id', '=', organisationId).execute()
   const propertyId = newId()
   await db.insertInto('property').values({ id: propertyId, organisationId, name: 'Invented Row', yearBuilt: 1961, createdAt: nowInstant() }).execute()
   const here = await plantUnit(db, organisationId, propertyId, 'Flat 1', ['Bedroom', 'Hall'])

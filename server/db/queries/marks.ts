@@ -4,12 +4,12 @@ import type { MarkListValue } from '../../../shared/schemas/mark'
 import type { MarkFacts, MarkRow } from '../../../shared/types/markPage'
 
 /** Risk first: wet and moving above all, then what is watched, then what has too few readings; mended and closed last. */
-const RISK = sql<number>`case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
-  when m.stain_state = 'damp' then 3 when m.activity = 'watch' then 2 when m.activity = 'too-few-readings' then 1.5 else 1 end`
+const RISK = sql<number>`(case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
+  when m.stain_state = 'damp' then 3 when m.activity = 'watch' then 2 when m.activity = 'too-few-readings' then 1.5 else 1 end)::double precision`
 /** Days as a number, so that one cursor fits every order; no day sorts last. */
-const DUE = sql<number>`coalesce(-(m.next_reading_on - date '1970-01-01'), -1000000)`
+const DUE = sql<number>`coalesce(-(m.next_reading_on - date '1970-01-01'), -1000000)::double precision`
 
-const ORDERS = { risk: RISK, newest: sql<number>`0`, due: DUE }
+const ORDERS = { risk: RISK, newest: sql<number>`0::double precision`, due: DUE }
 
 interface Sight { organisationId: string, units: 'all' | string[], today: string }
 
