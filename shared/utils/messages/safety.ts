@@ -12,6 +12,8 @@ export const LEAVE_ROOM_SIGNS = 'Do so for: sudden or fast-widening cracks, a sa
 
 export const WATER_CAUTION = 'Switch the room off at the panel if the way there is dry. Do not touch switches or lamps that are wet. Draining a wet ceiling is work for a trade.'
 
+export const EMERGENCY_CALL = 'If pieces fall, water comes near lights or wiring, or somebody is hurt: call your emergency number, in the United States 911.'
+
 export const HANDS_OFF = 'Do not press, tap, prod, prop or climb. A photo from the floor with zoom is enough.'
 
 export const NO_ATTIC_FOR_TENANTS = 'Nobody asks you to go into the attic to measure.'
