@@ -1,5 +1,6 @@
 import { defineStore } from 'pinia'
 import { v4 } from 'uuid'
+import { ref } from 'vue'
 import { NOTHING_ASKED } from '~/shared/types/mark'
 import type { DraftPhoto, ReportDraft } from '~/shared/types/reportDraft'
 

@@ -12,11 +12,12 @@ export function questionsFor(kind: MarkKind | null): ReportQuestion[] {
   return REPORT_QUESTIONS.filter(question => ONLY_FOR[question]?.includes(kind ?? 'crack') ?? true)
 }
 
-/** The screen asked for, or the first one that has to be answered before it. */
+const isQuestion = (asked: unknown): asked is ReportQuestion => (REPORT_QUESTIONS as readonly unknown[]).includes(asked)
+
+/** The screen asked for, or the one that has to be answered before it. An address that names none is the first. */
 export function reachableQuestion(asked: unknown, { roomId, kind }: Pick<ReportAnswers, 'roomId' | 'kind'>): ReportQuestion {
-  if (roomId === null || asked === 'room') return 'room'
-  if (kind === null) return 'look'
-  return questionsFor(kind).find(question => question === asked) ?? 'look'
+  if (roomId === null || !isQuestion(asked) || asked === 'room') return 'room'
+  return kind !== null && questionsFor(kind).includes(asked) ? asked : 'look'
 }
 
 export function questionAfter(question: ReportQuestion, kind: MarkKind | null): ReportQuestion {

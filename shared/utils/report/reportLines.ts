@@ -4,7 +4,7 @@ import {
   CHANGE_ABOVE_WORDS, DANGER_SIGN_WORDS, DIRECTION_WORDS, DOOR_STATE_WORDS, MARK_KIND_WORDS, MARK_PLACE_WORDS, MARK_SHAPE_WORDS,
   RECENT_EVENT_WORDS, SOUND_STATE_WORDS, STAIN_STATE_WORDS, WALL_TYPE_WORDS, WIDTH_COMPARISON_WORDS,
 } from '../messages/markMessages'
-import { formatWidth, type UnitSystem } from '../units'
+import { formatLength, formatWidth, mmToIn, type UnitSystem } from '../units'
 
 export interface ReportLine { question: ReportQuestion, label: string, value: string }
 
@@ -21,9 +21,9 @@ export function reportLines(answers: ReportAnswers, roomName: string, system: Un
     kind !== 'crack' && line('shape', 'Shape', [answers.shape && MARK_SHAPE_WORDS[answers.shape]]),
     line('where', 'Where', [answers.place && MARK_PLACE_WORDS[answers.place], answers.wallType && WALL_TYPE_WORDS[answers.wallType], answers.pin && 'Pin set on the sketch']),
     line('size', kind === 'nail-pops' ? 'How many' : 'Size', [sizeWords(answers, system)]),
-    kind === 'crack' && line('run', 'Length', [answers.lengthMm !== null && formatWidth(answers.lengthMm, system), answers.direction !== 'not-known' && DIRECTION_WORDS[answers.direction]]),
+    kind === 'crack' && line('run', 'Length', [answers.lengthMm !== null && formatLength(mmToIn(answers.lengthMm) / 12, system), answers.direction !== 'not-known' && DIRECTION_WORDS[answers.direction]]),
     (kind === 'sag' || kind === 'stain') && line('wet', 'Wet or dry', [STAIN_STATE_WORDS[answers.stain]]),
-    line('danger', 'Danger signs', answers.dangerSigns.map(sign => DANGER_SIGN_WORDS[sign])),
+    line('danger', 'Danger signs', answers.dangerSigns.length > 0 ? answers.dangerSigns.map(sign => DANGER_SIGN_WORDS[sign]) : ['None ticked']),
     line('changed', 'Doors and sounds', [answers.doors !== 'not-known' && DOOR_STATE_WORDS[answers.doors], SOUND_STATE_WORDS[answers.sounds]]),
     line('around', 'What happened', [
       answers.changeAbove !== 'not-known' && `Above: ${CHANGE_ABOVE_WORDS[answers.changeAbove].toLowerCase()}`,
