@@ -32,13 +32,14 @@ export async function takeTry(kind: AttemptKind, who: string): Promise<void> {
   }
 }
 
-/** A try that succeeded does not count. */
-export async function giveTryBack(kind: AttemptKind, who: string): Promise<void> {
-  await limiterOf(kind).reward(keyOf(who))
-}
-
-export async function forgetTries(kind: AttemptKind, who: string): Promise<void> {
-  await limiterOf(kind).delete(keyOf(who))
+/** Counts a sign-in before it is tried, so that many at once count too. One that succeeds is taken off again and clears its address. */
+export async function withinSignInTries<T>(event: H3Event, email: string, work: () => Promise<T>): Promise<T> {
+  const remote = remoteAddress(event)
+  await takeTry('sign-in by remote', remote)
+  await takeTry('sign-in by address', email)
+  const answer = await work()
+  await Promise.all([limiterOf('sign-in by address').delete(keyOf(email)), limiterOf('sign-in by remote').reward(keyOf(remote))])
+  return answer
 }
 
 function limiterOf(kind: AttemptKind): RateLimiterPostgres {

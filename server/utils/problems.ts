@@ -22,7 +22,13 @@ export const clash = (theirs: object, message = 'Somebody else changed this mean
 export const linkClosed = (code: 'link-unknown' | 'link-used' | 'link-expired' | 'link-revoked', message: string) =>
   problem(code === 'link-unknown' ? 404 : 410, code, message)
 export const tooMany = (retryAfterSeconds: number) =>
-  problem(429, 'too-many-tries', 'Too many tries. Please wait a little.', { retryAfterSeconds })
+  problem(429, 'too-many-tries', `Too many tries. Please try again ${waitWords(retryAfterSeconds)}.`, { retryAfterSeconds })
+
+function waitWords(seconds: number): string {
+  const minutes = Math.ceil(seconds / 60)
+  if (minutes > 90) return `in about ${Math.round(minutes / 60)} hours`
+  return minutes > 1 ? `in ${minutes} minutes` : 'in a minute'
+}
 export const databaseAway = () =>
   problem(503, 'database-away', 'The database cannot be reached just now. Nothing was lost; please try again in a moment.', { retryAfterSeconds: 5 })
 

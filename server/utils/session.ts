@@ -1,7 +1,8 @@
 import type { H3Event } from 'h3'
 import type { Db } from '../db/connect'
 import { findSessionUser } from '../db/queries/accounts'
-import type { SessionIdentity } from '../db/queries/actor'
+import { findActor, type Actor, type SessionIdentity } from '../db/queries/actor'
+import { notFound } from './problems'
 
 declare module '#auth-utils' {
   interface User { id: string, epoch: number }
@@ -20,6 +21,15 @@ export async function sessionIdentity(event: H3Event): Promise<SessionIdentity |
 export async function sessionUser(event: H3Event, db: Db) {
   const identity = await sessionIdentity(event)
   return identity && findSessionUser(db, identity)
+}
+
+/** The same session, now looking at another organisation of theirs; 404 when it is not. */
+export async function moveSession(event: H3Event, db: Db, organisationId: string): Promise<Actor> {
+  const identity = await sessionIdentity(event)
+  const there = identity && await findActor(db, identity, organisationId)
+  if (!there) throw notFound()
+  await openSession(event, { id: identity.userId, sessionEpoch: identity.epoch }, there.organisationId)
+  return there
 }
 
 export async function openSession(event: H3Event, user: { id: string, sessionEpoch: number }, organisationId?: string) {

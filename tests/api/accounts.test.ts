@@ -97,6 +97,24 @@ describe('sign-in and sign-out', () => {
     expect(client.cookies()).toEqual([])
   })
 
+  it('takes as long for an unknown address as for a wrong password', async () => {
+    const { owner } = await signUp(server.url)
+    const timeOf = async (email: string) => {
+      const start = performance.now()
+      expect((await createClient(server.url).post('/api/auth/sign-in', { email, password: 'four wet stones' })).status).toBe(401)
+      return performance.now() - start
+    }
+    const [known, unknown]: [number[], number[]] = [[], []]
+    for (let i = 0; i < 7; i++) {
+      known.push(await timeOf(owner.email))
+      unknown.push(await timeOf(inventAddress('nobody')))
+    }
+    const middle = (times: number[]) => [...times].sort((a, b) => a - b)[3]!
+    // Without the hash that is computed for nobody, an unknown address is answered in a tenth of the time.
+    expect(middle(unknown) / middle(known)).toBeGreaterThan(0.7)
+    expect(middle(unknown) / middle(known)).toBeLessThan(1.4)
+  })
+
   it('stops guessing at one address after ten tries, says when to go on, and leaves others alone', async () => {
     const { owner } = await signUp(server.url)
     const { owner: other } = await signUp(server.url)
@@ -107,6 +125,7 @@ describe('sign-in and sign-out', () => {
     const last = tries.at(-1)!
     expect([last.status, last.body.data.code]).toEqual([429, 'too-many-tries'])
     expect(Number(last.headers.get('retry-after'))).toBeGreaterThan(60)
+    expect(last.body.message).toBe('Too many tries. Please try again in 15 minutes.')
     expect((await client.post('/api/auth/sign-in', { email: owner.email, password: owner.password })).status).toBe(429)
     await signIn(server.url, other)
   })

@@ -7,8 +7,7 @@ import { openSession } from '../../utils/session'
 
 export default publicRoute(async ({ event, db }) => {
   const body = await readBodyAs(event, SignUpInput)
-  await takeTry('sign-up by remote', remoteAddress(event))
-  await takeTry('sign-in by address', body.email)
+  await Promise.all([takeTry('sign-up by remote', remoteAddress(event)), takeTry('sign-in by address', body.email)])
   const { user, organisationId } = await signUp(db, body)
   await openSession(event, user, organisationId)
   setResponseStatus(event, 201)

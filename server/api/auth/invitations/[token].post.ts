@@ -8,8 +8,7 @@ import { openSession, sessionUser } from '../../../utils/session'
 export default publicRoute(async ({ event, db }) => {
   const body = await readBodyAs(event, AcceptInput)
   await takeTry('token by remote', remoteAddress(event))
-  const signedIn = await sessionUser(event, db)
-  const { user, organisationId, startPage } = await acceptInvitation(db, getRouterParam(event, 'token'), body, signedIn?.id)
+  const { user, organisationId, startPage } = await acceptInvitation(db, getRouterParam(event, 'token'), body, (await sessionUser(event, db))?.id)
   await openSession(event, user, organisationId)
   return { startPage }
 })
