@@ -3,11 +3,13 @@ export interface FrameEntry { label: string, to: string }
 /** The rooms of the staff frame, each with the ability that opens it. */
 const entries: readonly (FrameEntry & { needs: string })[] = [
   { label: 'Overview', to: '/', needs: 'see portfolio' },
+  { label: 'Findings', to: '/findings', needs: 'see finding' },
   { label: 'Homes', to: '/homes', needs: 'see finding' },
   { label: 'Attics', to: '/attics', needs: 'see finding' },
   { label: 'Ceilings', to: '/ceilings', needs: 'see finding' },
   { label: 'Upkeep', to: '/upkeep', needs: 'do job' },
   { label: 'People', to: '/people', needs: 'manage people' },
+  { label: 'Settings', to: '/settings', needs: 'see settings' },
 ]
 
 export function frameEntries(abilities: readonly string[]): FrameEntry[] {

@@ -1,4 +1,5 @@
 import type { Severity, StoredFinding } from './finding'
+import type { JobState } from './job'
 
 /** A finding with where it is and what it is about, as lists and pages show it. */
 export interface FindingRow {
@@ -27,7 +28,7 @@ export interface FindingView extends FindingRow {
   markId: string | null
   atticId: string | null
   events: FindingEventRow[]
-  jobs: { id: string, number: number, title: string, state: string, dueOn: string }[]
+  jobs: { id: string, number: number, title: string, state: JobState, dueOn: string }[]
   /** The latest day to look again that is allowed: shorter for graver matters. */
   lookAgainUntilOn: string
   /** When it should be put right by the organisation's own policy. */

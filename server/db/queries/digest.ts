@@ -29,9 +29,9 @@ export async function findWaitingFindings(db: Db, organisationId: string): Promi
 /** Open due items with a name for what they are about, the latest first. */
 export const findDueLines = (db: Db, organisationId: string): Promise<DueLine[]> =>
   db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
-    .leftJoin('mark as m', 'm.id', 'd.subjectId').leftJoin('room as r', 'r.id', 'm.roomId').leftJoin('attic as a', 'a.id', 'd.subjectId').leftJoin('job as j', 'j.id', 'd.subjectId')
+    .leftJoin('mark as m', 'm.id', 'd.subjectId').leftJoin('attic as a', 'a.id', 'd.subjectId').leftJoin('job as j', 'j.id', 'd.subjectId')
     .select(['d.id', 'd.kind', 'd.subjectId', 'd.dueOn', 'd.createdAt', 'd.remindersSent', 'd.lastRemindedOn', 'd.unitId', 'u.name as unitName', 'p.name as propertyName',
-      sql<string>`coalesce(m.label || ', ' || r.name, a.name, j.title, '')`.as('label')])
+      sql<string>`coalesce(m.label, a.name, j.title, '')`.as('label')])
     .where('d.organisationId', '=', organisationId).where('d.settledAt', 'is', null)
     .orderBy('d.dueOn').orderBy('d.id').$castTo<DueLine>().execute()
 

@@ -17,11 +17,11 @@ const LIMIT = 50
 
 /** 0 is gravest. */
 const rank = sql<number>`array_position(array['urgent', 'attention', 'notice'], f.severity)`
-const subjectLabel = sql<string>`case f.subject_kind when 'mark' then m.label || ', ' || r.name when 'attic' then a.name when 'job' then j.title else u.name end`
+const subjectLabel = sql<string>`case f.subject_kind when 'mark' then m.label when 'attic' then a.name when 'job' then j.title else u.name end`
 
 const fromFindings = (db: Db) =>
   db.selectFrom('finding as f').innerJoin('unit as u', 'u.id', 'f.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
-    .leftJoin('mark as m', 'm.id', 'f.subjectId').leftJoin('room as r', 'r.id', 'm.roomId').leftJoin('attic as a', 'a.id', 'f.subjectId').leftJoin('job as j', 'j.id', 'f.subjectId')
+    .leftJoin('mark as m', 'm.id', 'f.subjectId').leftJoin('attic as a', 'a.id', 'f.subjectId').leftJoin('job as j', 'j.id', 'f.subjectId')
     .leftJoin('appUser as w', 'w.id', 'f.acknowledgedBy')
     .selectAll('f').select(['u.name as unitName', 'p.name as propertyName', 'm.id as markId', 'a.id as atticId', 'm.atticId as markAtticId', 'w.name as acknowledgedByName', subjectLabel.as('subjectLabel'), rank.as('rank')])
 

@@ -45,10 +45,10 @@ export async function listJobs(db: Db, actor: Actor, { list, unit, search, after
 }
 
 export async function findJobView(db: Db, actor: Actor, jobId: string): Promise<JobView> {
-  const row = await fromJobs(db).leftJoin('mark as m', 'm.id', 'j.markId').leftJoin('room as r', 'r.id', 'm.roomId').leftJoin('attic as a', 'a.id', 'j.atticId')
+  const row = await fromJobs(db).leftJoin('mark as m', 'm.id', 'j.markId').leftJoin('attic as a', 'a.id', 'j.atticId')
     .leftJoin('finding as f', 'f.id', 'j.findingId').innerJoin('organisation as o', 'o.id', 'j.organisationId')
     .select(['j.description', 'j.outcome', 'j.findingId', 'j.markId', 'j.atticId', 'j.assigneeUserId', 'j.createdAt', 'p.addressLines', 'p.yearBuilt', 'u.accessNotes',
-      sql<string | null>`m.label || ', ' || r.name`.as('markLabel'), 'a.name as atticName', 'f.rule as findingRule', 'o.contactPhone'])
+      'm.label as markLabel', 'a.name as atticName', 'f.rule as findingRule', 'o.contactPhone'])
     .where('j.id', '=', jobId).executeTakeFirstOrThrow()
   const manages = reachOf(actor.role, 'edit job') !== undefined
   const does = maySeeCost(actor)

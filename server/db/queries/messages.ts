@@ -7,7 +7,7 @@ import type { Db } from '../connect'
 import { pageOf, readCursor } from '../../utils/cursor'
 import type { Actor } from './actor'
 
-const LIMIT = 50
+const LIMIT = 25
 
 /** Mail of the organisation, newest first, without its words: they may hold a private link. Keyset-paged. */
 export async function listMessages(db: Db, actor: Actor, { state, after }: z.output<typeof MessagesQuery>): Promise<Page<MessageRow>> {

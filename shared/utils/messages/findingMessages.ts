@@ -2,7 +2,7 @@ import { FINDING_RULES, type AdviceCode, type Finding, type FindingOf, type Find
 import { formatDay } from '../days'
 import { formatLoad, formatNumber, formatShare, formatWeight, formatWidth, NO_BREAK_SPACE, formatRate, type UnitSystem } from '../units'
 import { countWords, spanWords } from './activityMessages'
-import { DANGER_SIGN_WORDS } from './markMessages'
+import { dangerSignsWords } from './markMessages'
 import { HANDS_OFF, LEAVE_ROOM, UNLOAD_FIRST, WATER_CAUTION, WIDTH_CLASS_CAVEAT } from './safety'
 
 export const SEVERITY_WORDS: Record<Severity, string> = { notice: 'Notice', attention: 'Needs attention', urgent: 'Urgent' }
@@ -81,7 +81,7 @@ const MARK_SENTENCES: Omit<{ [R in FindingRule]: Sentence<R> }, keyof typeof ATT
   'sag-over-limit': (e, s) => `${formatWidth(e.dropMm, s)} on ${formatDay(e.takenOn)}; the span over ${e.divisor} is ${formatWidth(e.limitMm, s)}.`,
   'sag-growing': (e, s) => growthWords(e, 'mm', s),
   'stain-wet': e => `Seen ${e.state} on ${formatDay(e.seenOn)}.`,
-  'danger-sign': e => `Reported on ${formatDay(e.seenOn)}: ${e.signs.map(sign => DANGER_SIGN_WORDS[sign]).join('; ')}.`,
+  'danger-sign': e => `Reported on ${formatDay(e.seenOn)}: ${dangerSignsWords(e.signs)}.`,
   'reading-overdue': e => `Due on ${formatDay(e.dueOn)}, ${countWords(e.daysLate, 'day')} ago.`,
   'job-overdue': e => `${e.title}: due on ${formatDay(e.dueOn)}, ${countWords(e.daysLate, 'day')} ago.`,
   'no-working-contact': e => CONTACT_REASONS[e.reason],

@@ -78,6 +78,10 @@ export const DANGER_SIGN_WORDS: Record<DangerSign, string> = {
   'after-an-impact': 'It came after a blow, an explosion, an earthquake, or a foot through the ceiling',
 }
 
+/** Several signs as one run of words. */
+export const dangerSignsWords = (signs: readonly DangerSign[]): string =>
+  signs.map((sign, place) => place === 0 ? DANGER_SIGN_WORDS[sign] : DANGER_SIGN_WORDS[sign].charAt(0).toLowerCase() + DANGER_SIGN_WORDS[sign].slice(1)).join('; ')
+
 /** What each class means for decoration (BRE Digest 251, our words). */
 const WIDTH_CLASS_WORDS: Record<WidthClassNumber, string> = {
   0: 'a hairline, nothing to fill',

@@ -36,7 +36,7 @@ describe('GET /api/findings', () => {
     const ranks = body.rows.map(row => ['urgent', 'attention', 'notice'].indexOf(row.finding.severity))
     expect(ranks).toEqual([...ranks].sort())
     expect(body.rows.map(row => row.finding.rule)).toEqual(expect.arrayContaining(['danger-sign', 'attic-load', 'new-mark-under-load']))
-    expect(body.rows.find(row => row.finding.rule === 'danger-sign')).toMatchObject({ propertyName: '4 Alder Row', unitName: 'Upstairs', subjectLabel: 'Crack by the door, Bedroom', unitId: home.unitId })
+    expect(body.rows.find(row => row.finding.rule === 'danger-sign')).toMatchObject({ propertyName: '4 Alder Row', unitName: 'Upstairs', subjectLabel: 'Crack by the door', unitId: home.unitId })
   })
 
   it('narrows by severity, home and words, and pages without losing or repeating any', async () => {

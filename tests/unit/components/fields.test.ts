@@ -44,7 +44,7 @@ describe('a field', () => {
 
   it('that may stay empty says so in words', () => {
     const field = mountUi(UiField, { props: { name: 'name', label: 'Name', optional: true }, slots: { default: () => h(UiInput) } })
-    expect(field.get('label').text()).toContain('if you have it')
+    expect(field.get('label').text()).toContain('can stay empty')
     expect(field.get('input').attributes('aria-required')).toBeUndefined()
   })
 })

@@ -204,7 +204,7 @@ describe('words and shapes', () => {
 describe('the frame', () => {
   it('shows only what the person may open', () => {
     expect(frameEntries(['do job']).map(entry => entry.label)).toEqual(['Upkeep'])
-    expect(frameEntries(['see portfolio', 'see finding', 'do job', 'manage people'])).toHaveLength(6)
+    expect(frameEntries(['see portfolio', 'see finding', 'do job', 'manage people', 'see settings'])).toHaveLength(8)
     expect(frameEntries([])).toEqual([])
   })
 
