@@ -40,6 +40,8 @@ async function plantDemo(db: Db, photoDir: string) {
   endDemoTime()
   await db.updateTable('message').set({ state: 'sent', sentAt: eb => eb.ref('createdAt') })
     .where('createdAt', '<', new Date(Date.now() - FRESH_MAIL_DAYS * 86_400_000).toISOString()).execute()
+  // The story's today has its own hours; what is fresh goes out as soon as a server runs.
+  await db.updateTable('message').set({ nextAttemptAt: new Date().toISOString() }).where('state', '=', 'queued').execute()
   await reviewOrganisation(db, cast.maren!.organisationId, {})
 }
 

@@ -6,7 +6,7 @@ import type { Checkpoint } from '../db/commands/makeCheckpoint'
 import type { DigestReader, DueLine, Home, WaitingFinding } from '../db/queries/digest'
 import { appUrl } from './appUrl'
 import { MOST_REMINDERS, type DigestLines } from './digestLines'
-import { homeOf } from './findingMail'
+import { adviceOf, homeOf } from './findingMail'
 import type { MailContent, MailItem } from './mailDesign'
 
 interface Digest { reader: DigestReader, lines: DigestLines, today: string, organisationName: string, checkpoint?: Checkpoint }
@@ -29,8 +29,9 @@ export function digestMail(digest: Digest): MailContent {
 function introFor({ reader, lines }: Digest): string[] {
   if (reader.role === 'tenant') return ['A reading takes two minutes from the floor. It shows whether the mark is moving.', `${HANDS_OFF} ${NO_ATTIC_FOR_TENANTS}`]
   if (reader.role === 'trades') return ['Jobs of yours that are due. Each page says which hazards to know before you start.']
-  const urgent = lines.findings.filter(entry => entry.finding.severity === 'urgent').length
-  return [urgent > 0 ? `${urgent} of these ${urgent === 1 ? 'is' : 'are'} urgent. Start there.` : 'Nothing here is urgent. Most important first.']
+  const urgent = lines.findings.filter(entry => entry.finding.severity === 'urgent')
+  if (urgent.length === 0) return ['Nothing here is urgent. Most important first.']
+  return [`${urgent.length} of these ${urgent.length === 1 ? 'is' : 'are'} urgent. Start there.`, ...adviceOf(urgent)]
 }
 
 function groupsOf({ lines, today, reader }: Digest): NonNullable<MailContent['groups']> {

@@ -24,7 +24,7 @@ const asItem = ({ findingId, finding }: MailedFinding, system: UnitsOfMeasure) =
 })
 
 /** What to do, each advice once, gravest finding first; the whole list of danger signs where people may have to leave. */
-function adviceOf(findings: MailedFinding[]): string[] {
+export function adviceOf(findings: { finding: Finding }[]): string[] {
   const codes = [...new Set(findings.map(({ finding }) => finding.adviceCode))]
   return [...codes.map(code => ADVICE_SENTENCES[code]), ...(codes.includes('leave-room-and-call') ? [LEAVE_ROOM_SIGNS] : [])]
 }

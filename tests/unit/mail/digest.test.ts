@@ -70,6 +70,10 @@ describe('the digest', () => {
     expect(mail.subject).toContain('3 things need you')
   })
 
+  it('says what to do about what is urgent, before the list', () => {
+    expect(mailTo(reader(), { findings: [finding()] }).paragraphs.join(' ')).toContain('Stop adding. Move the heaviest things to the bearing walls')
+  })
+
   it('prints the checkpoint of the record for owners alone, and says how to switch it off', () => {
     const footer = (who: DigestReader) => mailTo(who, { findings: [finding()] }).footer.join(' ')
     expect(footer(reader())).toContain(checkpoint.hash)
