@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { DOCUMENT_KINDS } from '../types/attic'
-import { cursor, day, longText, pageLimit, shortText, version } from './fields'
+import { day, longText, pageLimit, shortText, version } from './fields'
 
 export const AtticEdit = z.strictObject({ name: shortText('What do you call this attic?'), notes: longText(), version })
 
@@ -14,13 +14,14 @@ export const AtticDocumentInput = z.strictObject({
   coversWholeAttic: z.boolean(),
   area: longText(500),
 }).refine(value => value.coversWholeAttic || value.area.length > 0, { path: ['area'], message: 'Which part does it cover?' })
+  .refine(value => !value.liftsHold || value.kind === 'engineer-letter' || value.kind === 'inspection-record', { path: ['liftsHold'], message: 'Only an engineer’s letter or an inspection record can lift a hold.' })
 
 export type AtticDocumentValue = z.output<typeof AtticDocumentInput>
 
 export const VersionOnly = z.strictObject({ version })
 
-export const AtticListQuery = z.object({
-  search: z.string().trim().max(100).optional(),
-  after: cursor(z.object({ name: z.string(), id: z.uuid() })).optional(),
+export const AtticListQuery = z.strictObject({
+  search: z.string().trim().max(100, 'At most 100 letters, please.').optional(),
+  after: z.string().max(1000).optional(),
   limit: pageLimit,
 })

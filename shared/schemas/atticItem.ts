@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { ITEM_CATEGORIES, ITEM_OWNERS, WEIGHT_SOURCES } from '../types/item'
+import { ITEM_CATEGORIES, ITEM_OWNERS, WEIGHT_SOURCES, type WeightSource } from '../types/item'
+import { catalogueItem } from '../utils/goods/itemCatalogue'
 import { day, longText, measure, shortText, version } from './fields'
 
 const weightLb = (what: string) => z.number({ error: `Please give ${what} in pounds.` }).min(0, 'Not less than 0 lb.').max(20_000, 'That is more than 20,000 lb.')
@@ -7,7 +8,7 @@ const placeFt = (what: string, max: number) => z.number({ error: `Please give ${
 
 const item = {
   name: shortText('What is it?', 160),
-  catalogueKey: z.string().max(120).nullable(),
+  catalogueKey: z.string().max(120).refine(key => catalogueItem(key) !== null, 'That is not in the catalogue.').nullable(),
   category: z.enum(ITEM_CATEGORIES),
   quantity: z.int('A whole number, please.').min(1, 'At least one.').max(1000, 'At most 1,000 pieces in a line.'),
   /** Of one piece. */
@@ -25,20 +26,26 @@ const item = {
   notes: longText(2000),
 }
 
-const inOrder = (value: { lowLb: number, typicalLb: number, highLb: number }) => value.lowLb <= value.typicalLb && value.typicalLb <= value.highLb
+interface Weights { weightSource: WeightSource, lowLb: number, typicalLb: number, highLb: number }
 
-export const AtticItemInput = z.strictObject({ ...item, placedOn: day('When was it put there?') })
-  .refine(inOrder, { path: ['typicalLb'], message: 'Least, usual and most must be in that order.' })
+function soundWeights(value: Weights, context: z.RefinementCtx) {
+  const { weightSource, lowLb, typicalLb, highLb } = value
+  const add = (message: string) => context.addIssue({ code: 'custom', path: ['typicalLb'], message })
+  if (!(lowLb <= typicalLb && typicalLb <= highLb)) add('Least, usual and most must be in that order.')
+  else if (weightSource === 'weighed' && lowLb !== highLb) add('What was weighed has one weight.')
+}
 
-export const AtticItemEdit = z.strictObject({ ...item, happenedOn: day('When did this change?'), version })
-  .refine(inOrder, { path: ['typicalLb'], message: 'Least, usual and most must be in that order.' })
+export const AtticItemInput = z.strictObject({ ...item, placedOn: day('When was it put there?') }).superRefine(soundWeights)
+
+export const AtticItemEdit = z.strictObject({ ...item, happenedOn: day('When did this change?'), version }).superRefine(soundWeights)
 
 /** Several moves saved at once from the load plan. */
 export const AtticItemMoves = z.strictObject({
   happenedOn: day('When were they moved?'),
   moves: z.array(z.strictObject({
     itemId: z.uuid(), version, fieldNumber: item.fieldNumber, xFt: item.xFt, yFt: item.yFt, lengthFt: item.lengthFt, widthFt: item.widthFt,
-  })).min(1, 'Nothing was moved.').max(500),
+  })).min(1, 'Nothing was moved.').max(500)
+    .refine(moves => new Set(moves.map(move => move.itemId)).size === moves.length, 'Each thing moves once.'),
 })
 
 export const AtticItemRemoval = z.strictObject({ removedOn: day('When was it taken out?'), version })
@@ -47,3 +54,4 @@ export const InventoryConfirmation = z.strictObject({ confirmedOn: day('When did
 export type AtticItemValue = z.output<typeof AtticItemInput>
 export type AtticItemEditValue = z.output<typeof AtticItemEdit>
 export type AtticItemMovesValue = z.output<typeof AtticItemMoves>
+export type AtticItemRemovalValue = z.output<typeof AtticItemRemoval>

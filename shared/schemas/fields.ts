@@ -29,16 +29,4 @@ export const measureOrUnknown = (what: string, max: number) => measure(what, max
 export const version = z.int().min(1)
 export const id = z.uuid('That is not a known choice.')
 
-/** A keyset cursor as it travels in the address: base64url of JSON. A spoilt one is refused, not guessed. */
-export const cursor = <S extends z.ZodType>(shape: S) => z.string().max(1000).transform((text, context) => {
-  try {
-    const bytes = Uint8Array.from(atob(text.replaceAll('-', '+').replaceAll('_', '/')), letter => letter.charCodeAt(0))
-    return JSON.parse(new TextDecoder().decode(bytes)) as unknown
-  }
-  catch {
-    context.addIssue({ code: 'custom', message: 'This page mark is not readable. Start again from the first page.' })
-    return z.NEVER
-  }
-}).pipe(shape)
-
 export const pageLimit = z.coerce.number().int().min(1).max(200).default(50)

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { ACTIVITIES, DIRECTIONS, MARK_KINDS, MARK_PLACES, MARK_SHAPES } from '../types/mark'
-import { cursor, day, id, longText, pageLimit, shortText, version } from './fields'
+import { day, id, longText, pageLimit, shortText, version } from './fields'
 import { Pin } from './observation'
 
 const facts = {
@@ -42,7 +42,7 @@ export const MarkListQuery = z.strictObject({
   due: z.enum(['late']).optional(),
   search: z.string().trim().max(120).optional(),
   sort: z.enum(['risk', 'newest', 'due']).default('risk'),
-  after: cursor(z.tuple([z.number(), z.int()])).optional(),
+  after: z.string().max(1000).optional(),
   limit: pageLimit,
 })
 

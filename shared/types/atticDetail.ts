@@ -1,31 +1,8 @@
 import type { AtticSurvey, DocumentKind } from './attic'
 import type { RatingBasis } from './atticRating'
 import type { JudgedContents } from './contents'
-import type { ItemCategory, ItemOwner, WeightSource } from './item'
-
-/** A stored item as its row stands: weights of one piece, footprint of the whole pile. */
-export interface StoredItem {
-  id: string
-  version: number
-  fieldNumber: number
-  catalogueKey: string | null
-  name: string
-  category: ItemCategory
-  quantity: number
-  lowLb: number
-  typicalLb: number
-  highLb: number
-  weightSource: WeightSource
-  belongsTo: ItemOwner
-  xFt: number
-  yFt: number
-  lengthFt: number
-  widthFt: number
-  heightFt: number | null
-  placedOn: string
-  removedOn: string | null
-  notes: string
-}
+import type { StoredItem } from './item'
+import type { UnitLoadState } from './home'
 
 export interface SurveyRow {
   id: string
@@ -84,9 +61,10 @@ export interface AtticListRow {
   propertyName: string
   inventoryConfirmedOn: string | null
   surveyedOn: string | null
+  /** As last judged; null before the first survey. */
   ratedPsf: number | null
-  onHold: boolean | null
-  basis: RatingBasis | null
+  loadState: UnitLoadState | null
+  utilisation: number | null
   storedLb: number
   itemCount: number
 }

@@ -30,5 +30,7 @@ export interface JudgedContents {
   utilisation: number | null
   worstJoist: { fieldNumber: number, fieldName: string, joistNumber: number, utilisation: number, limit: PlanLimit, state: LoadState } | null
   heavyInMiddle: string[]
+  /** Items that stand outside the measured joists. */
+  outside: string[]
   fields: JudgedField[]
 }

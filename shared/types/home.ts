@@ -1,6 +1,6 @@
 import type { AtticDocument, AtticSurvey, CeilingFinish } from './attic'
 import type { Severity, StoredFinding } from './finding'
-import type { WeightSource } from './item'
+import type { NamedContentsItem } from './item'
 import type { Activity, MarkKind } from './mark'
 
 export interface PropertyFacts {
@@ -50,21 +50,6 @@ export interface TenancyFacts {
 /** What the section needs of a joist field; null where it was not measured. */
 export interface FieldMeasures { spanFt: number | null, spacingIn: number | null, joistCount: number | null }
 
-export interface ItemOfUnit {
-  id: string
-  name: string
-  quantity: number
-  lowLb: number
-  typicalLb: number
-  highLb: number
-  weightSource: WeightSource
-  fieldNumber: number
-  xFt: number
-  yFt: number
-  lengthFt: number
-  widthFt: number
-}
-
 export interface AtticOfUnit {
   id: string
   name: string
@@ -79,7 +64,7 @@ export interface AtticOfUnit {
   utilisation: number | null
   storedLb: number
   fields: FieldMeasures[]
-  items: ItemOfUnit[]
+  items: NamedContentsItem[]
   /** The survey that holds now and the papers in force: only on the unit's own page, where the contents are judged joist by joist. */
   survey?: AtticSurvey | null
   documents?: AtticDocument[]

@@ -39,6 +39,34 @@ export interface AtticItem extends ItemWeightRange {
   note: string | null
 }
 
+/** A stored item as its row stands: weights of one piece, footprint of the whole pile. */
+export interface StoredItem {
+  id: string
+  version: number
+  fieldNumber: number
+  catalogueKey: string | null
+  name: string
+  category: ItemCategory
+  quantity: number
+  lowLb: number
+  typicalLb: number
+  highLb: number
+  weightSource: WeightSource
+  belongsTo: ItemOwner
+  xFt: number
+  yFt: number
+  lengthFt: number
+  widthFt: number
+  heightFt: number | null
+  placedOn: string
+  removedOn: string | null
+  notes: string
+}
+
+/** What judging, drawing and listing read of a stored item. */
+export type ContentsItem = Pick<StoredItem, 'id' | 'fieldNumber' | 'quantity' | 'lowLb' | 'typicalLb' | 'highLb' | 'weightSource' | 'xFt' | 'yFt' | 'lengthFt' | 'widthFt'>
+export type NamedContentsItem = ContentsItem & Pick<StoredItem, 'name'>
+
 /** One row of the catalogue of typical weights. */
 export interface CatalogueItem {
   key: string

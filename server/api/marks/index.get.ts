@@ -3,13 +3,9 @@ import { listMarks } from '../../db/queries/marks'
 import { MarkListQuery } from '../../../shared/schemas/mark'
 import { apiRoute } from '../../utils/apiRoute'
 import { dayIn } from '../../utils/clock'
-import { asPage } from '../../utils/keyset'
 
 export default apiRoute({
   can: 'see mark',
   query: MarkListQuery,
-  handle: async ({ db, actor, query }) => {
-    const rows = await listMarks(db, { organisationId: actor.organisationId, units: visibleUnits(actor), today: dayIn(actor.timeZone) }, query)
-    return asPage(rows, query.limit, row => [row.rank, row.number])
-  },
+  handle: ({ db, actor, query }) => listMarks(db, { organisationId: actor.organisationId, units: visibleUnits(actor), today: dayIn(actor.timeZone) }, query),
 })

@@ -1,17 +1,23 @@
 import type { Db } from '../connect'
 import type { AtticSurvey } from '../../../shared/types/attic'
+import { formatDay } from '../../../shared/utils/days'
 import { rateAttic } from '../../../shared/utils/structure/rating'
-import { asAtticDocument, findDocuments } from '../queries/attics'
+import { asAtticDocument, findDocuments, findLatestSurvey } from '../queries/attics'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
+import { unsound } from '../../utils/problems'
 import { appendRecord, type RecordActor } from './appendRecord'
 import { judgeAttic } from './judgeAttic'
-
-interface AtticRef { id: string, organisationId: string, unitId: string, name: string }
+import { lockAttic, type AtticRef } from './lockAttic'
+import { refuseFuture } from './refuseFuture'
 
 /** Keeps a survey with the rating it gave on the day; earlier surveys stay. Everything above the ceiling is judged anew. */
-export function surveyAttic(db: Db, actor: RecordActor & { userId: string }, attic: AtticRef, survey: AtticSurvey) {
+export function surveyAttic(db: Db, actor: RecordActor & { userId: string, timeZone: string }, attic: AtticRef, survey: AtticSurvey) {
+  refuseFuture('surveyedOn', survey.surveyedOn, actor)
   return db.transaction().execute(async (trx) => {
+    await lockAttic(trx, attic)
+    const latest = await findLatestSurvey(trx, attic.id)
+    if (latest && survey.surveyedOn < latest.surveyedOn) throw unsound({ surveyedOn: `The attic was surveyed on ${formatDay(latest.surveyedOn)}. An older survey cannot take its place.` })
     const documents = (await findDocuments(trx, attic.id)).map(asAtticDocument)
     const rating = rateAttic(survey, documents)
     const row = await trx.insertInto('atticSurvey').values({

@@ -1,6 +1,9 @@
 import { sql } from 'kysely'
 import type { Db } from '../connect'
 import type { AtticDocument } from '../../../shared/types/attic'
+import type { AtticListRow } from '../../../shared/types/atticDetail'
+import type { Page } from '../../../shared/types/home'
+import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 
 /** The survey that holds now: the last one entered. */
 export const findLatestSurvey = (db: Db, atticId: string) =>
@@ -26,10 +29,14 @@ export const asAtticDocument = (row: DocumentRow): AtticDocument => ({
   liftsHold: row.liftsHold, coversWholeAttic: row.coversWholeAttic, area: row.area,
 })
 
+/** What stood in the attic after each step, by the day it happened: a step entered late counts from its own day. */
+export const runningTotalLb = sql<number>`sum(delta_lb) over (partition by attic_id order by happened_on, recorded_at, e.id)`
+
+/** The load history, newest first. */
 export const findLoadEvents = (db: Db, atticId: string) =>
   db.selectFrom('loadEvent as e').innerJoin('atticItem as i', 'i.id', 'e.itemId').innerJoin('appUser as u', 'u.id', 'e.recordedBy')
-    .select(['e.id', 'e.kind', 'e.happenedOn', 'e.deltaLb', 'e.totalAfterLb', 'e.detail', 'e.recordedAt', 'e.itemId', 'i.name as itemName', 'u.name as recordedByName'])
-    .where('e.atticId', '=', atticId).orderBy('e.happenedOn', 'desc').orderBy('e.recordedAt', 'desc').limit(500).execute()
+    .select(['e.id', 'e.kind', 'e.happenedOn', 'e.deltaLb', runningTotalLb.as('totalAfterLb'), 'e.recordedAt', 'i.name as itemName', 'u.name as recordedByName'])
+    .where('e.atticId', '=', atticId).orderBy('e.happenedOn', 'desc').orderBy('e.recordedAt', 'desc').orderBy('e.id', 'desc').limit(500).execute()
 
 export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
   const row = await db.selectFrom('atticItem').select(sql<string | null>`sum(quantity * typical_lb)`.as('lb'))
@@ -37,20 +44,24 @@ export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
   return Number(row.lb ?? 0)
 }
 
-export interface AtticListFilter { search?: string, after?: { name: string, id: string }, limit: number }
+export interface AtticListFilter { search?: string, after?: string, limit: number }
 
 /** Attics of the organisation by name, with their home and the latest survey; keyset-paged on (name, id). */
-export function listAttics(db: Db, organisationId: string, { search, after, limit }: AtticListFilter) {
-  return db.selectFrom('attic as a')
+export async function listAttics(db: Db, organisationId: string, { search, after, limit }: AtticListFilter): Promise<Page<AtticListRow>> {
+  const from = readCursor(after, ['text', 'id'])
+  const pattern = search ? likeAnywhere(search) : undefined
+  const rows = await db.selectFrom('attic as a')
     .innerJoin('unit as u', 'u.id', 'a.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
-    .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s').select(['s.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis'])
+    .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s').select('s.surveyedOn')
       .whereRef('s.atticId', '=', 'a.id').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1).as('latest'), join => join.onTrue())
     .leftJoinLateral(eb => eb.selectFrom('atticItem as i').select(i => [sql<number>`coalesce(sum(i.quantity * i.typical_lb), 0)`.as('storedLb'), i.fn.countAll<number>().as('itemCount')])
       .whereRef('i.atticId', '=', 'a.id').where('i.removedOn', 'is', null).as('stored'), join => join.onTrue())
-    .select(['a.id', 'a.name', 'a.unitId', 'u.name as unitName', 'p.name as propertyName', 'a.inventoryConfirmedOn',
-      'latest.surveyedOn', 'latest.ratedPsf', 'latest.onHold', 'latest.basis', 'stored.storedLb', 'stored.itemCount'])
+    .leftJoin('atticStatus as now', 'now.atticId', 'a.id')
+    .select(['a.id', 'a.name', 'a.unitId', 'u.name as unitName', 'p.name as propertyName', 'a.inventoryConfirmedOn', 'latest.surveyedOn',
+      'now.ratedPsf', 'now.loadState', 'now.utilisation', sql<number>`stored.stored_lb`.as('storedLb'), sql<number>`stored.item_count`.as('itemCount')])
     .where('a.organisationId', '=', organisationId).where('a.archivedAt', 'is', null)
-    .$if(Boolean(search), query => query.where(eb => eb.or(['a.name', 'u.name', 'p.name'].map(column => eb(sql.ref(column.replace(/([A-Z])/g, '_$1')), 'ilike', `%${search!.replace(/[\\%_]/g, '\\$&')}%`)))))
-    .$if(after !== undefined, query => query.where(sql<boolean>`(a.name, a.id) > (${after!.name}, ${after!.id}::uuid)`))
+    .$if(pattern !== undefined, query => query.where(eb => eb.or([eb('a.name', 'ilike', pattern!), eb('u.name', 'ilike', pattern!), eb('p.name', 'ilike', pattern!)])))
+    .$if(from !== undefined, query => query.where(sql<boolean>`(a.name, a.id) > (${from![0]}, ${from![1]}::uuid)`))
     .orderBy('a.name').orderBy('a.id').limit(limit + 1).execute()
+  return pageOf(rows, limit, row => [row.name, row.id])
 }

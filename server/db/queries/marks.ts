@@ -2,6 +2,9 @@ import { sql } from 'kysely'
 import type { Db } from '../connect'
 import type { MarkListValue } from '../../../shared/schemas/mark'
 import type { MarkFacts, MarkRow } from '../../../shared/types/markPage'
+import type { Page } from '../../../shared/types/home'
+import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
+import { runningTotalLb } from './attics'
 
 /** Risk first: wet and moving above all, then what is watched, then what has too few readings; mended and closed last. */
 const RISK = sql<number>`(case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
@@ -13,13 +16,12 @@ const ORDERS = { risk: RISK, newest: sql<number>`0::double precision`, due: DUE 
 
 interface Sight { organisationId: string, units: 'all' | string[], today: string }
 
-const likeText = (search: string) => `%${search.replace(/[\\%_]/g, '\\$&')}%`
-
 /** Marks of one organisation within the asker's sight, keyset-paged on (order, number), both falling. */
-export function listMarks(db: Db, { organisationId, units, today }: Sight, filter: MarkListValue): Promise<(MarkRow & { rank: number })[]> {
+export async function listMarks(db: Db, { organisationId, units, today }: Sight, filter: MarkListValue): Promise<Page<MarkRow & { rank: number }>> {
   const rank = ORDERS[filter.sort]
-  const { kind, activity, state, search, after } = filter
-  return db.selectFrom('mark as m').innerJoin('unit as u', 'u.id', 'm.unitId').innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('room as r', 'r.id', 'm.roomId')
+  const { kind, activity, state, search } = filter
+  const after = readCursor(filter.after, ['number', 'number'])
+  const rows = await db.selectFrom('mark as m').innerJoin('unit as u', 'u.id', 'm.unitId').innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('room as r', 'r.id', 'm.roomId')
     .select(['m.id', 'm.number', 'm.label', 'm.kind', 'm.state', 'm.activity', 'm.widthClass', 'm.lastValue', 'm.lastReadOn', 'm.slopePerYear', 'm.nextReadingOn', 'm.stainState',
       'm.unitId', 'u.name as unitName', 'u.propertyId', 'p.name as propertyName', 'r.name as roomName', rank.as('rank')])
     .where('m.organisationId', '=', organisationId)
@@ -31,10 +33,11 @@ export function listMarks(db: Db, { organisationId, units, today }: Sight, filte
     .$if(filter.property !== undefined, query => query.where('u.propertyId', '=', filter.property!))
     .$if(filter.due === 'late', query => query.where('m.nextReadingOn', '<', today).where('m.state', '!=', 'closed'))
     .$if(Boolean(search), query => query.where(eb => eb.or([
-      eb('m.label', 'ilike', likeText(search!)), eb('u.name', 'ilike', likeText(search!)), eb('p.name', 'ilike', likeText(search!)), eb(sql`m.number::text`, '=', search!),
+      eb('m.label', 'ilike', likeAnywhere(search!)), eb('u.name', 'ilike', likeAnywhere(search!)), eb('p.name', 'ilike', likeAnywhere(search!)), eb(sql`m.number::text`, '=', search!),
     ])))
-    .$if(after !== undefined, query => query.where(sql<boolean>`(${rank}, m.number) < (${after![0]}::double precision, ${after![1]}::integer)`))
+    .$if(after !== undefined, query => query.where(sql<boolean>`(${rank}, m.number) < (${after![0]}::double precision, ${after![1]}::double precision)`))
     .orderBy(rank, 'desc').orderBy('m.number', 'desc').limit(filter.limit + 1).execute()
+  return pageOf(rows, filter.limit, row => [row.rank, row.number])
 }
 
 export const findMarkFacts = (db: Db, id: string): Promise<MarkFacts | undefined> =>
@@ -57,4 +60,4 @@ export const listJobsOfMark = (db: Db, markId: string) =>
 
 /** What the attic weighed after each change, oldest first. */
 export const listLoadSteps = (db: Db, atticId: string) =>
-  db.selectFrom('loadEvent').select(['happenedOn as on', 'totalAfterLb as totalLb']).where('atticId', '=', atticId).orderBy('happenedOn').orderBy('recordedAt').limit(2000).execute()
+  db.selectFrom('loadEvent as e').select(['happenedOn as on', runningTotalLb.as('totalLb')]).where('atticId', '=', atticId).orderBy('happenedOn').orderBy('recordedAt').orderBy('e.id').limit(2000).execute()

@@ -55,15 +55,17 @@ export async function countPortfolio(db: Db, organisationId: string, today: stri
   return { homes: counts.homes, needDecision: counts.needDecision, attics, marks, late: { readings: counts.lateReadings, jobs: counts.lateJobs }, spentThisYearCents: counts.spentThisYearCents }
 }
 
-/** What was written since the asker last looked: per home, how often each thing happened. */
-export async function findChanges(db: Db, organisationId: string, since: string | null): Promise<OverviewChange[]> {
+interface Asker { organisationId: string, userId: string }
+
+/** What others and the program itself wrote since the asker last looked: per home, how often each thing happened. */
+export async function findChanges(db: Db, { organisationId, userId }: Asker, since: string | null): Promise<OverviewChange[]> {
   if (!since) return []
   const { rows } = await sql<OverviewChange>`
     select t.unit_id, u.name unit_name, p.name property_name, t.last_at, t.actions
     from (select unit_id, to_char(max(last_at) at time zone 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"') last_at, max(last_at) sort_at,
         json_agg(json_build_object('action', action, 'count', n) order by last_at desc) actions
       from (select unit_id, action, count(*) n, max(recorded_at) last_at from record_entry
-        where organisation_id = ${organisationId} and recorded_at > ${since} and unit_id is not null group by unit_id, action) e
+        where organisation_id = ${organisationId} and recorded_at > ${since} and unit_id is not null and actor_id is distinct from ${userId}::uuid group by unit_id, action) e
       group by unit_id order by max(last_at) desc limit ${MOST_CHANGES}) t
     join unit u on u.id = t.unit_id join property p on p.id = u.property_id order by t.sort_at desc`.execute(db)
   return rows
@@ -73,7 +75,7 @@ export async function findChanges(db: Db, organisationId: string, since: string 
 export function findUpcoming(db: Db, organisationId: string, untilOn: string): Promise<OverviewDue[]> {
   return db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
     .select(['d.kind', 'd.subjectId', 'd.unitId', 'u.name as unitName', 'p.name as propertyName', 'd.dueOn'])
-    .where('d.organisationId', '=', organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', untilOn)
+    .where('d.organisationId', '=', organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', untilOn).where('u.archivedAt', 'is', null)
     .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING).execute()
 }
 

@@ -14,7 +14,7 @@ export async function readOverview(db: Db, actor: Actor): Promise<Overview> {
   const [counts, decisions, changes, upcoming] = await Promise.all([
     countPortfolio(db, actor.organisationId, today),
     findDecisions(db, actor.organisationId),
-    findChanges(db, actor.organisationId, since),
+    findChanges(db, actor, since),
     findUpcoming(db, actor.organisationId, addDays(today, UPCOMING_DAYS)),
   ])
   return { today, ...counts, decisions, since, changes, upcoming }

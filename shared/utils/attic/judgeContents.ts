@@ -1,7 +1,8 @@
 import type { AtticDocument, AtticSurvey } from '../../types/attic'
-import type { StoredItem } from '../../types/atticDetail'
+import type { DocumentRow } from '../../types/atticDetail'
 import type { AtticRating } from '../../types/atticRating'
 import type { ContentState, JudgedContents, JudgedField } from '../../types/contents'
+import type { ContentsItem } from '../../types/item'
 import type { PlacedItem } from '../../types/loadPlan'
 import { chanceOfExceeding, inventoryTotal } from '../goods/inventoryTotal'
 import { judgeLoadPlan } from '../structure/judgeLoadPlan'
@@ -9,11 +10,9 @@ import { loadFieldOf } from '../structure/loadField'
 import { loadStateOf } from '../structure/loadState'
 import { rateAttic } from '../structure/rating'
 
-export type ContentsItem = Pick<StoredItem, 'id' | 'fieldNumber' | 'quantity' | 'lowLb' | 'typicalLb' | 'highLb' | 'weightSource' | 'xFt' | 'yFt' | 'lengthFt' | 'widthFt'>
-
 export interface Contents {
   survey: AtticSurvey | null
-  documents: readonly Pick<AtticDocument, keyof AtticDocument>[]
+  documents: readonly AtticDocument[]
   items: readonly ContentsItem[]
 }
 
@@ -37,9 +36,24 @@ export function judgeContents({ survey, documents, items }: Contents): JudgedCon
     rating, itemCount: items.length, totalLb: total.typicalLb, lowLb: total.lowLb, highLb: total.highLb,
     ratedTotalLb, chanceOfExceeding: chance, utilisation, worstJoist,
     heavyInMiddle: fields.flatMap(field => field.plan?.kind === 'judged' ? field.plan.items.filter(item => item.heavyInMiddle).map(item => item.id) : []),
+    outside: outsideOf(fields, items),
     fields,
-    state: stateOf({ rating, itemCount: items.length, fields, utilisation, chance }),
+    state: stateOf({ rating, items, fields, utilisation, chance }),
   }
+}
+
+/** The same from what the attic's page holds. Every paper listed there has its file. */
+export const judgeTrial = ({ survey, documents }: { survey: AtticSurvey | null, documents: readonly DocumentRow[] }, items: readonly ContentsItem[]): JudgedContents =>
+  judgeContents({ survey, documents: documents.map(paper => ({ ...paper, attached: true })), items })
+
+/** Items that stand outside the measured joists, or over joists the survey does not have: they cannot be judged where they are. */
+function outsideOf(fields: readonly JudgedField[], items: readonly ContentsItem[]): string[] {
+  if (fields.length === 0) return []
+  const refused = fields.flatMap(field => field.plan?.kind === 'refused'
+    ? field.plan.problems.flatMap(({ at }) => at.part === 'item' ? [at.id] : [])
+    : [])
+  const strayed = items.filter(item => !fields.some(field => field.number === item.fieldNumber)).map(item => item.id)
+  return [...new Set([...refused, ...strayed])]
 }
 
 const placed = (item: ContentsItem): PlacedItem => ({
@@ -73,15 +87,15 @@ function worstJoistOf(fields: readonly JudgedField[]): JudgedContents['worstJois
   return worst
 }
 
-interface Standing { rating: AtticRating | null, itemCount: number, fields: readonly JudgedField[], utilisation: number | null, chance: number | null }
+interface Standing { rating: AtticRating | null, items: readonly ContentsItem[], fields: readonly JudgedField[], utilisation: number | null, chance: number | null }
 
-function stateOf({ rating, itemCount, fields, utilisation, chance }: Standing): ContentState {
+function stateOf({ rating, items, fields, utilisation, chance }: Standing): ContentState {
   if (!rating) return 'unsurveyed'
   if (rating.hold) return 'hold'
   if (rating.ratedPsf <= 0) return 'no-storage'
-  if (itemCount === 0) return 'empty'
+  if (items.length === 0) return 'empty'
   // A thing entered outside the measured field cannot be judged, and must not pass as within.
-  if (fields.some(field => field.plan?.kind === 'refused')) return 'over'
+  if (outsideOf(fields, items).length > 0 || fields.some(field => field.plan?.kind === 'refused')) return 'over'
   const state = loadStateOf(utilisation ?? 0)
   const unjudged = utilisation === null || fields.some(field => field.plan === null)
   const uncertain = (chance ?? 0) > NEAR_CHANCE || unjudged

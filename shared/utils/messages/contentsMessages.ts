@@ -1,6 +1,7 @@
 import type { ContentState, JudgedContents } from '../../types/contents'
 import { formatLoad, formatShare, formatWeight, type UnitSystem } from '../units'
 import { LIMIT_WORDS } from './ratingReasons'
+import { UNLOAD_FIRST } from './safety'
 
 export const CONTENT_STATE_WORDS: Record<ContentState, string> = {
   'empty': 'Empty',
@@ -20,39 +21,71 @@ export interface ContentsVerdict { word: string, says: string, number: string | 
 const stored = (contents: JudgedContents, system: UnitSystem) =>
   `about ${formatWeight(contents.totalLb, system)} (most likely between ${formatWeight(contents.lowLb, system)} and ${formatWeight(contents.highLb, system)})`
 
-function loadedVerdict(contents: JudgedContents, system: UnitSystem): ContentsVerdict {
-  const { worstJoist, ratedTotalLb, utilisation, state } = contents
-  const word = CONTENT_STATE_WORDS[state]
-  const whole = ratedTotalLb === null
-    ? `Stored here: ${stored(contents, system)}. The joists are not measured, so the whole cannot be held against the rating.`
-    : `Stored here: ${stored(contents, system)} of ${formatWeight(ratedTotalLb, system)} rated.`
-  const doNow = state === 'over'
-    ? 'Stop adding. Move the heaviest things to the bearing walls or out of the attic.'
-    : contents.heavyInMiddle.length > 0
-      ? 'Move what is denser than the rating out of the middle half of the span.'
-      : state === 'near' ? 'Add nothing more before you weigh what was guessed.' : null
-  if (worstJoist && worstJoist.utilisation >= (utilisation ?? 0)) {
-    return { word, says: `: joist ${worstJoist.joistNumber} carries`, number: `${formatShare(worstJoist.utilisation)} of its rating`, why: `${PLAN_LIMIT_WORDS[worstJoist.limit]} decides on joist ${worstJoist.joistNumber} of ${worstJoist.fieldName}. ${whole}`, doNow }
+const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)
+
+function loadedWhy({ ratedTotalLb, ...contents }: JudgedContents, system: UnitSystem): string {
+  const rated = ratedTotalLb === null ? '' : ` of ${formatWeight(ratedTotalLb, system)} rated`
+  return `Stored here: ${stored({ ratedTotalLb, ...contents }, system)}${rated}.`
+}
+
+function doNowOf({ state, heavyInMiddle }: JudgedContents): string | null {
+  if (state === 'over') return UNLOAD_FIRST
+  if (heavyInMiddle.length > 0) return 'Move what is denser than the rating out of the middle half of the span.'
+  return state === 'near' ? 'Add nothing more before you weigh what was guessed.' : null
+}
+
+/** Where nothing can be worked out, or something stands where it cannot be judged. */
+function unjudgedVerdict(contents: JudgedContents, system: UnitSystem): ContentsVerdict {
+  const word = CONTENT_STATE_WORDS[contents.state]
+  const whole = loadedWhy(contents, system)
+  if (contents.outside.length > 0) {
+    const count = contents.outside.length
+    return {
+      word, says: ': something stands outside the measured joists.', number: null,
+      why: `${count === 1 ? 'One item is' : `${count} items are`} entered where no joist was measured, so the load there cannot be judged. ${whole}`,
+      doNow: 'Add nothing. Correct where it stands, or measure the joists under it.',
+    }
   }
-  return { word, says: ': the attic carries', number: utilisation === null ? null : `${formatShare(utilisation)} of its rating`, why: whole, doNow }
+  const isJoisted = contents.rating?.joistCheck !== undefined || contents.fields.length > 0
+  return {
+    word, says: isJoisted ? ': the joists are not measured.' : ': this framing is never calculated.', number: null,
+    why: `So the load cannot be held against the rating of ${formatLoad(contents.rating?.ratedPsf ?? 0, system)}. ${whole}`,
+    doNow: isJoisted ? 'Add nothing more before the joists are measured.' : 'Hold every load against the paper on file, and ask its writer before anything more goes up.',
+  }
+}
+
+function loadedVerdict(contents: JudgedContents, system: UnitSystem): ContentsVerdict {
+  const { worstJoist, utilisation, state } = contents
+  const word = CONTENT_STATE_WORDS[state]
+  const isJudged = utilisation !== null && Number.isFinite(utilisation) && contents.outside.length === 0 && (state !== 'over' || utilisation > 1)
+  if (!isJudged) return unjudgedVerdict(contents, system)
+  const why = loadedWhy(contents, system)
+  const doNow = doNowOf(contents)
+  const number = `${formatShare(utilisation)} of ${worstJoist && worstJoist.utilisation >= utilisation ? 'its' : 'the'} rating`
+  if (worstJoist && worstJoist.utilisation >= utilisation) {
+    const { joistNumber, fieldName, limit } = worstJoist
+    return { word, says: `: joist ${joistNumber} carries`, number, why: `${capital(PLAN_LIMIT_WORDS[limit])} decides, on joist ${joistNumber} of ${fieldName}. ${why}`, doNow }
+  }
+  return { word, says: ': the attic carries', number, why, doNow }
 }
 
 /** The verdict of an attic in words. */
 export function contentsVerdict(contents: JudgedContents, system: UnitSystem = 'us'): ContentsVerdict {
   const word = CONTENT_STATE_WORDS[contents.state]
   const isLoaded = contents.itemCount > 0
+  const number = isLoaded ? formatWeight(contents.totalLb, system) : null
   switch (contents.state) {
     case 'unsurveyed': return {
-      word, says: isLoaded ? ', and loaded with' : ': nobody has looked at the joists yet.', number: isLoaded ? formatWeight(contents.totalLb, system) : null,
+      word, number, says: isLoaded ? ', and loaded with' : ': nobody has looked at the joists yet.',
       why: 'Without a survey nobody knows what this attic may hold.', doNow: isLoaded ? 'Stop adding and survey the attic.' : 'Survey the attic before anything goes up.',
     }
     case 'hold': return {
-      word, says: isLoaded ? 'while loaded with' : ': nothing may be stored until it is inspected.', number: isLoaded ? formatWeight(contents.totalLb, system) : null,
-      why: 'Members were seen that may not carry what they should.', doNow: isLoaded ? 'Unload it, then have it inspected.' : 'Have it inspected.',
+      word, number, says: isLoaded ? 'while loaded with' : ': nothing may be stored until it is inspected.',
+      why: 'Members were seen that may not carry what they should.', doNow: isLoaded ? `${UNLOAD_FIRST} Then have the attic inspected.` : 'Have it inspected.',
     }
     case 'no-storage': return {
-      word, says: isLoaded ? 'is allowed here, yet it holds' : 'is allowed here.', number: isLoaded ? formatWeight(contents.totalLb, system) : null,
-      why: 'The rating for stored goods is 0.', doNow: isLoaded ? 'Take everything out.' : null,
+      word, number, says: isLoaded ? 'is allowed here, yet it holds' : 'is allowed here.',
+      why: `The rating for stored goods is ${formatLoad(0, system)}.`, doNow: isLoaded ? 'Take everything out.' : null,
     }
     case 'empty': return { word, says: ': nothing is stored here.', number: null, why: `It is rated ${formatLoad(contents.rating?.ratedPsf ?? 0, system)}.`, doNow: null }
     default: return loadedVerdict(contents, system)

@@ -1,4 +1,5 @@
-import type { AtticOfUnit, MarkOfUnit, SectionParts, ItemOfUnit } from '../../types/home'
+import type { AtticOfUnit, MarkOfUnit, SectionParts } from '../../types/home'
+import type { NamedContentsItem } from '../../types/item'
 import type { Activity } from '../../types/mark'
 import { countWords } from '../messages/activityMessages'
 import { MARK_KIND_WORDS } from '../messages/markMessages'
@@ -89,7 +90,7 @@ function placeLoads(attics: readonly AtticOfUnit[], verdicts: ReadonlyMap<string
   }, system))
 }
 
-function loadPart(attic: AtticOfUnit, item: ItemOfUnit, verdict: ItemVerdict | undefined, place: { positionShare: number, widthShare: number }, system: UnitSystem): SectionLoadPart {
+function loadPart(attic: AtticOfUnit, item: NamedContentsItem, verdict: ItemVerdict | undefined, place: { positionShare: number, widthShare: number }, system: UnitSystem): SectionLoadPart {
   const weightLb = item.quantity * item.typicalLb
   return {
     id: item.id, label: item.name, weightLb, weightText: formatWeight(weightLb, system), ...place,

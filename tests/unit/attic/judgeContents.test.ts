@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import type { AtticSurvey, JoistField } from '../../../shared/types/attic'
+import type { ContentsItem } from '../../../shared/types/item'
 import { emptyJoistField, emptySurvey } from '../../../shared/utils/attic/emptySurvey'
-import { judgeContents, type ContentsItem } from '../../../shared/utils/attic/judgeContents'
+import { judgeContents } from '../../../shared/utils/attic/judgeContents'
 import { contentsVerdict } from '../../../shared/utils/messages/contentsMessages'
 
 const field: JoistField = { ...emptyJoistField('North'), species: 'Douglas fir-larch', grade: 'No.2', size: '2x10', spacingIn: 16, spanFt: 12, joistCount: 13, topEdgeBraced: true }

@@ -8,6 +8,6 @@ export default apiRoute({
   on: { attic: 'atticId' },
   handle: async ({ event, db, actor, attic }) => {
     const { input, file } = await readDocument(event)
-    return keepDocument(db, actor, attic, input, { ...file, store: usePhotoStore().put })
+    return keepDocument(db, usePhotoStore(), actor, attic, input, file)
   },
 })
