@@ -30,7 +30,7 @@ export const asAtticDocument = (row: DocumentRow): AtticDocument => ({
 })
 
 /** What stood in the attic after each step, by the day it happened: a step entered late counts from its own day. */
-export const runningTotalLb = sql<number>`sum(delta_lb) over (partition by attic_id order by happened_on, recorded_at, e.id)`
+export const runningTotalLb = sql<number>`sum(e.delta_lb) over (partition by e.attic_id order by e.happened_on, e.recorded_at, e.id)`
 
 /** The load history, newest first. */
 export const findLoadEvents = (db: Db, atticId: string) =>
