@@ -7,5 +7,8 @@ import { dayIn } from '../../utils/clock'
 export default apiRoute({
   can: 'see mark',
   query: MarkListQuery,
-  handle: ({ db, actor, query }) => listMarks(db, { organisationId: actor.organisationId, units: visibleUnits(actor), today: dayIn(actor.timeZone) }, query),
+  handle: async ({ db, actor, query }) => {
+    const today = dayIn(actor.timeZone)
+    return { ...await listMarks(db, { organisationId: actor.organisationId, units: visibleUnits(actor), today }, query), today }
+  },
 })

@@ -44,19 +44,31 @@ async function checkFacts(trx: Trx, actor: Actor, mark: FollowedMark, facts: Fac
 const FROM = { repaired: ['open'], reopened: ['repaired', 'closed'], closed: ['open', 'repaired'] } as const
 const TO = { repaired: 'repaired', reopened: 'open', closed: 'closed' } as const
 
-/** A repair starts a new segment, so that no trend runs across it. Repair and closing settle what was reported. */
+const openReports = (trx: Trx, markId: string) => trx.selectFrom('observation').select(['id', 'dangerSigns']).where('markId', '=', markId).where('correctedAt', 'is', null).execute()
+
+const hasStandingDanger = async (trx: Trx, markId: string) => (await openReports(trx, markId)).some(report => report.dangerSigns.length > 0)
+
+/** A filled crack does not tell that a danger is over: reports of danger stay until somebody says so on the report itself. */
+async function settlePlainReports(trx: Trx, markId: string) {
+  const ids = (await openReports(trx, markId)).filter(report => report.dangerSigns.length === 0).map(report => report.id)
+  if (ids.length === 0) return
+  const at = nowInstant()
+  await trx.updateTable('observation').set(eb => ({ correctedAt: at, startedAt: eb.fn.coalesce('startedAt', eb.val(at)) })).where('id', 'in', ids).execute()
+}
+
+/** A repair starts a new segment, so that no trend runs across it. Repair and closing settle what was reported, danger excepted. */
 async function changeState(trx: Trx, actor: Actor, id: string, version: number, change: NonNullable<MarkEditValue['change']>) {
   const before = await trx.selectFrom('mark').selectAll().where('id', '=', id).forUpdate().executeTakeFirst()
   if (!before) throw notFound()
   if (before.version !== version) throw clash(before)
   if (!(FROM[change.to] as readonly string[]).includes(before.state)) throw problem(409, 'state-does-not-allow', `This mark is ${before.state}, so it cannot be ${change.to}.`)
   if (change.happenedOn > dayIn(actor.timeZone)) throw unsound({ 'change.happenedOn': 'That day is still to come.' })
+  if (change.to === 'closed' && await hasStandingDanger(trx, id)) {
+    throw problem(409, 'danger-stands', 'A danger sign was reported here and nobody has put it right yet. Say on that report what was found and done; then the mark can be closed.')
+  }
   const segment = change.to === 'repaired' ? before.segment + 1 : before.segment
   const after = await trx.updateTable('mark').set({ state: TO[change.to], segment, version: sql`version + 1` }).where('id', '=', id).returningAll().executeTakeFirstOrThrow()
-  if (change.to !== 'reopened') {
-    await trx.updateTable('observation').set(eb => ({ correctedAt: nowInstant(), startedAt: eb.fn.coalesce('startedAt', eb.val(nowInstant())) }))
-      .where('markId', '=', id).where('correctedAt', 'is', null).execute()
-  }
+  if (change.to !== 'reopened') await settlePlainReports(trx, id)
   await appendRecord(trx, actor, {
     organisationId: before.organisationId, unitId: before.unitId, subjectKind: 'mark', subjectId: id, action: `mark ${change.to}`,
     before: { state: before.state, segment: before.segment }, after: { state: after.state, segment, happenedOn: change.happenedOn, reason: change.reason },

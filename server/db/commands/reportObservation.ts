@@ -14,9 +14,10 @@ import { insertReading } from './insertReading'
 import { judgeMark } from './judgeMark'
 import { lockUnit } from './lockUnit'
 import { openMark, reopenMark, type FollowedMark } from './openMark'
+import { refuseArchived } from './refuseArchived'
 import { tellOfRepeatedReport } from './tellOfRepeatedReport'
 
-interface ReportedUnit { id: string, organisationId: string }
+interface ReportedUnit { id: string, organisationId: string, archivedAt: string | null }
 
 /**
  * A report of something on a ceiling: observation, mark (new, or one that is followed already), first reading, photos,
@@ -36,6 +37,7 @@ export async function reportObservation(db: Db, actor: Actor, unit: ReportedUnit
 }
 
 async function writeReport(trx: Trx, actor: Actor, unit: ReportedUnit, clientKey: string, body: ObservationValue): Promise<string> {
+  refuseArchived(unit, 'unit')
   const answers = answersOf(body)
   const measured = firstReading(answers)
   if (measured?.kind === 'refused') throw unsound({ [SIZE_FIELDS[answers.kind]]: refusedReadingSentence(answers.kind, measured.why) })

@@ -96,7 +96,7 @@ describe('editing a mark', () => {
   })
 
   it('walks through repaired, reopened and closed, each with day and reason in the record', async () => {
-    const mark = await openMark({ dangerSigns: ['fast-widening'] })
+    const mark = await openMark()
     const change = (to: string, version: number) => edit(mark.id, { version, change: { to, happenedOn: home.today, reason: `because ${to}` } })
     expect((await change('reopened', 1)).body.data.code).toBe('state-does-not-allow')
     expect((await change('repaired', 1)).body).toMatchObject({ state: 'repaired', segment: 2, version: 2 })
@@ -109,6 +109,19 @@ describe('editing a mark', () => {
     const report = await home.db.selectFrom('observation').select(['startedAt', 'correctedAt']).where('markId', '=', mark.id).executeTakeFirstOrThrow()
     expect(report).toEqual({ startedAt: expect.any(String), correctedAt: expect.any(String) })
     expect(await home.db.selectFrom('finding').select('id').where('subjectId', '=', mark.id).where('clearedAt', 'is', null).execute()).toEqual([])
+  })
+
+  it('keeps a danger report standing through a repair, and does not close over it', async () => {
+    const mark = await openMark({ dangerSigns: ['fast-widening'] })
+    const change = (to: string, version: number) => edit(mark.id, { version, change: { to, happenedOn: home.today, reason: 'Filled' } })
+    const standing = () => home.db.selectFrom('finding').select('id').where('subjectId', '=', mark.id).where('rule', '=', 'danger-sign').where('clearedAt', 'is', null).execute()
+    expect((await change('repaired', 1)).status).toBe(200)
+    expect(await standing()).toHaveLength(1)
+    expect((await change('closed', 2)).body.data.code).toBe('danger-stands')
+    const report = await home.db.selectFrom('observation').select('id').where('markId', '=', mark.id).executeTakeFirstOrThrow()
+    await home.owner.patch(`/api/observations/${report.id}`, { step: 'corrected', note: 'An engineer looked and found it sound' })
+    expect(await standing()).toHaveLength(0)
+    expect((await change('closed', 2)).status).toBe(200)
   })
 
   it.each<[string, () => object, string]>([

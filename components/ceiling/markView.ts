@@ -1,0 +1,61 @@
+import type { MarkChartData } from './markChartSeries'
+import { activityTone } from './activityTone'
+import type { MarkTone } from '../house/sectionTypes'
+import type { MarkPage } from '#shared/types/markPage'
+import { ACTIVITY_WORDS, rateWords, trendSentence } from '#shared/utils/messages/activityMessages'
+import { widthClass } from '#shared/utils/movement/widthClass'
+import { DIRECTION_WORDS, MARK_KIND_WORDS, MARK_PLACE_WORDS, MARK_SHAPE_WORDS, STAIN_STATE_WORDS, widthClassSentence } from '#shared/utils/messages/markMessages'
+import { readingWords } from '#shared/utils/messages/readingMessages'
+import { formatDay } from '#shared/utils/days'
+import type { UnitSystem } from '#shared/utils/units'
+
+/** The readings that have a number, repairs as breaks, and the load above, as the chart and its table take them. */
+export function chartDataOf({ readings, mark, trend, loadSteps }: Pick<MarkPage, 'readings' | 'mark' | 'trend' | 'loadSteps'>): MarkChartData {
+  return {
+    readings: readings.flatMap(({ takenOn, value, sigma, segment }) => value !== null && sigma !== null ? [{ takenOn, value, sigma, segment }] : []),
+    trend: trend.kind === 'measured' ? trend : null,
+    repairs: repairsOf(readings, mark.segment),
+    loadSteps: loadSteps.map(step => ({ on: step.on, weightLb: step.totalLb })),
+  }
+}
+
+/** A repair stands at the first reading of the segment it began; the newest may have no reading yet. */
+function repairsOf(readings: MarkPage['readings'], newest: number): { on: string, label: string }[] {
+  return Array.from({ length: newest - 1 }, (_, i) => readings.find(reading => reading.segment === i + 2)?.takenOn)
+    .flatMap(on => on === undefined ? [] : [{ on, label: 'Repair' }])
+}
+
+export interface MarkVerdictWords { word: string, tone: MarkTone, says: string, number?: string, why: string, doNow?: string }
+
+/** One word, one number, one sentence why, one thing to do. */
+export function markVerdict({ mark, trend, today }: Pick<MarkPage, 'mark' | 'trend' | 'today'>, system: UnitSystem): MarkVerdictWords {
+  const due = mark.nextReadingOn
+  const doNow = mark.state === 'closed' || !due ? undefined : due < today ? `A reading was due on ${formatDay(due)}. Take it, or say that it cannot be taken.` : `Next reading ${formatDay(due)}.`
+  const why = trendSentence(trend, mark.kind, system)
+  if (mark.state === 'closed') return { word: 'Closed', tone: 'unknown', says: ': this mark is no longer followed.', why }
+  if (mark.state === 'repaired') return { word: 'Repaired', tone: 'unknown', says: ': readings start anew. What was there before stays on record.', why, doNow }
+  const head = { word: ACTIVITY_WORDS[mark.activity], tone: activityTone(mark.activity), why, doNow }
+  if (trend.kind !== 'measured') return { ...head, says: ': we cannot tell yet whether it moves.' }
+  if (trend.activity === 'dormant') return { ...head, says: ': it has kept still for a year or more.' }
+  return { ...head, says: ': it changes by about', number: `${rateWords(mark.kind, trend.slopePerYear, system)}.` }
+}
+
+/** The class of a crack's width with its caveat; nothing for other kinds. */
+export const widthClassWords = ({ kind, lastValue }: Pick<MarkPage['mark'], 'kind' | 'lastValue'>): string | null =>
+  kind === 'crack' && lastValue !== null ? widthClassSentence(widthClass(lastValue)) : null
+
+/** The ruled box of facts at the head of a mark's page; what nobody said is left out. */
+export function markFacts({ mark, room, unit, property, attic }: Pick<MarkPage, 'mark' | 'room' | 'unit' | 'property' | 'attic'>, system: UnitSystem): { label: string, value: string, main?: boolean }[] {
+  return [
+    { label: MARK_KIND_WORDS[mark.kind], value: `${mark.number}: ${mark.label}`, main: true },
+    { label: 'Home', value: `${property.name}, ${unit.name}` },
+    { label: 'Room', value: room.name },
+    { label: 'Last reading', value: mark.lastValue === null ? 'not measured' : readingWords(mark.kind, mark.lastValue, system) },
+    { label: 'First seen', value: formatDay(mark.firstSeenOn) },
+    { label: 'Above it', value: attic?.name ?? 'no attic entered' },
+    ...mark.shape ? [{ label: 'Most like', value: MARK_SHAPE_WORDS[mark.shape] }] : [],
+    ...mark.place ? [{ label: 'Where', value: MARK_PLACE_WORDS[mark.place] }] : [],
+    ...mark.direction && mark.direction !== 'not-known' ? [{ label: 'It runs', value: DIRECTION_WORDS[mark.direction] }] : [],
+    ...mark.stainState ? [{ label: 'Damp', value: STAIN_STATE_WORDS[mark.stainState] }] : [],
+  ]
+}
