@@ -30,7 +30,7 @@ export default defineNuxtConfig({
   serverDir: 'server',
   // Tests build into folders of their own, so that a running program keeps its files.
   buildDir: process.env.LATHKEY_BUILD_DIR || '.nuxt',
-  ignore: ['.data/**', '.test/**', '.output/**', 'tests/**', 'fakes/**', 'scripts/**', 'coverage/**'],
+  ignore: ['.data/**', '.test/**', '.output/**', 'tests/**', 'fakes/**', 'scripts/**', 'bench/**', 'coverage/**'],
   compatibilityDate: '2026-11-01',
   nitro: {
     preset: 'node-server',

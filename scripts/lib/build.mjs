@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto'
 import { closeSync, existsSync, mkdirSync, openSync, readFileSync, readdirSync, statSync, writeFileSync } from 'node:fs'
-import { join, relative } from 'node:path'
+import { dirname, join, relative } from 'node:path'
 import { withLock } from './lock.mjs'
 import { Refusal } from './refusal.mjs'
 
@@ -61,8 +61,9 @@ export async function buildIfStale({ root, outputDir, buildDir, keeper, say }) {
 }
 
 async function runBuild({ root, outputDir, buildDir, keeper }) {
-  mkdirSync(buildDir, { recursive: true })
-  const logFile = join(buildDir, 'build.log')
+  // Beside the working folder, which the build empties.
+  const logFile = `${buildDir}.log`
+  mkdirSync(dirname(logFile), { recursive: true })
   const log = openSync(logFile, 'w')
   const code = await keeper.run(process.execPath, [join(root, 'node_modules/nuxt/bin/nuxt.mjs'), 'build'], {
     cwd: root, stdio: ['ignore', log, log],

@@ -1,0 +1,99 @@
+#!/usr/bin/env node
+import { execFile } from 'node:child_process'
+import { mkdirSync, writeFileSync } from 'node:fs'
+import { cpus, totalmem } from 'node:os'
+import { join, resolve } from 'node:path'
+import { fileURLToPath } from 'node:url'
+import { parseArgs, promisify } from 'node:util'
+import { chooseRoutes, openSession } from './lib/benchDemo.mjs'
+import { bringUpBench } from './lib/benchServers.mjs'
+import { timeStarts } from './lib/benchStart.mjs'
+import { domainTableOf, meetsTarget, tableOf } from './lib/benchTable.mjs'
+import { createKeeper, stopOnSignals } from './lib/keeper.mjs'
+import { Refusal } from './lib/refusal.mjs'
+import { makeTestFolder } from './lib/testFolder.mjs'
+
+const root = resolve(fileURLToPath(import.meta.url), '../..')
+const keeper = createKeeper()
+const say = line => console.log(line)
+const connections = 20
+const rounds = 4
+
+function readOptions() {
+  const { values } = parseArgs({ options: {
+    'write': { type: 'boolean', default: false },
+    'start': { type: 'boolean', default: false },
+    'seconds': { type: 'string', default: '8' },
+    'only': { type: 'string' },
+    'cpu-prof': { type: 'string' },
+  } })
+  const seconds = Number(values.seconds)
+  if (!(seconds >= rounds)) throw new Refusal(`--seconds has to be a number from ${rounds} on.`)
+  return { ...values, seconds }
+}
+
+async function measureRoutes({ folder, options }) {
+  const profile = options['cpu-prof']
+  const { address, referenceAddress, owner } = await bringUpBench({
+    root, folder, keeper, say, nodeOptions: profile ? ['--cpu-prof', `--cpu-prof-dir=${resolve(profile)}`] : [],
+  })
+  const cookie = await openSession(address, owner)
+  const routes = await chooseRoutes({ address, cookie })
+  const wanted = routes.filter(({ name }) => !options.only || name === options.only)
+  const references = {
+    json: { name: 'bare route, one select', kind: 'reference', url: `${referenceAddress}/api/one` },
+    page: { name: 'minimal page', kind: 'reference', url: `${referenceAddress}/` },
+  }
+  const targets = [references.json, references.page, ...wanted.map(({ name, path, kind }) => ({ name, kind, url: `${address}${path}`, headers: { cookie } }))]
+  const { measuresOf, pressInTurn } = await import('./lib/benchLoad.mjs')
+  say(`Measuring ${targets.length} routes, ${options.seconds} s each …`)
+  const loads = await pressInTurn(targets, { connections, seconds: options.seconds, rounds, onRound: round => say(`  round ${round} of ${rounds}`) })
+  const measured = new Map([...loads].map(([target, load]) => [target, measuresOf(load)]))
+  return targets.map((target) => {
+    const measures = measured.get(target)
+    const reference = measured.get(references[target.kind] ?? target)
+    return { ...target, measures, ratio: measures.perSecond / reference.perSecond }
+  })
+}
+
+async function measureDomain() {
+  const { stdout } = await promisify(execFile)(process.execPath, ['--import', 'tsx', join(root, 'bench/domain.ts')], { cwd: root })
+  return JSON.parse(stdout)
+}
+
+const describeMachine = () =>
+  `${cpus().length} × ${cpus()[0]?.model.trim() ?? 'unknown processor'}, ${Math.round(totalmem() / 2 ** 30)} GiB, Node ${process.version}, ${new Date().toISOString().slice(0, 10)}`
+
+async function runBench() {
+  const options = readOptions()
+  const folder = makeTestFolder(root, keeper)
+  const domain = await measureDomain()
+  const rows = await measureRoutes({ folder, options })
+  const starts = options.start ? await timeStarts({ root, folder, keeper }) : undefined
+  const missed = rows.filter(row => meetsTarget(row) === false)
+  const report = [
+    '# Measured', '', describeMachine(), '',
+    `${connections} connections, ${options.seconds} s a route in ${rounds} rounds by turns, on the demo; client, servers and database on the same machine. Ratio: requests a second held against the reference of the same run.`, '',
+    tableOf(rows), '', domainTableOf(domain),
+    ...(starts ? ['', `npm start: first ${starts.firstSeconds.toFixed(1)} s on an empty data folder, second ${starts.secondSeconds.toFixed(1)} s.`] : []),
+  ].join('\n')
+  say(`\n${report}\n`)
+  if (options.write) {
+    mkdirSync(join(root, 'tests/bench'), { recursive: true })
+    writeFileSync(join(root, 'tests/bench/latest.md'), `${report}\n`)
+  }
+  return missed.length === 0
+}
+
+stopOnSignals(keeper)
+let isGood = false
+try {
+  isGood = await runBench()
+}
+catch (error) {
+  if (!keeper.isStopping()) console.error(error instanceof Refusal ? `\n${error.message}` : error)
+}
+if (!keeper.isStopping()) {
+  await keeper.stopAll()
+  process.exit(isGood ? 0 : 1)
+}

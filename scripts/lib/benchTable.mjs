@@ -1,0 +1,47 @@
+/** Asked of each kind of answer on 2 cores with 20 connections; ours. */
+export const targets = {
+  json: { leastRatio: 0.4, mostP95Ms: 50, words: 'p95 < 50 ms, ≥ 0.40 × bare route' },
+  page: { leastRatio: 0.5, mostP95Ms: Infinity, words: '≥ 0.50 × minimal page' },
+}
+
+/**
+ * @typedef {{ perSecond: number, p50Ms?: number, p95Ms?: number, refused: number }} Measures
+ * @typedef {{ name: string, kind: 'json' | 'page' | 'reference', measures: Measures, ratio?: number }} Row
+ */
+
+/**
+ * Whether a row meets its target; a reference has none.
+ * @param {Row} row
+ */
+export function meetsTarget({ kind, measures, ratio }) {
+  if (kind === 'reference') return undefined
+  const { leastRatio, mostP95Ms } = targets[kind]
+  return measures.refused === 0 && ratio !== undefined && ratio >= leastRatio && measures.p95Ms !== undefined && measures.p95Ms < mostP95Ms
+}
+
+const ms = value => value === undefined ? '—' : value.toFixed(value < 10 ? 2 : 1)
+
+function lineOf(row) {
+  const { name, kind, measures, ratio } = row
+  const isMet = meetsTarget(row)
+  const verdict = isMet === undefined ? '' : isMet ? 'met' : measures.refused > 0 ? `**missed** (${measures.refused} refused)` : '**missed**'
+  return `| ${[name, Math.round(measures.perSecond), ms(measures.p50Ms), ms(measures.p95Ms), ratio?.toFixed(2) ?? '', kind === 'reference' ? 'reference' : targets[kind].words, verdict].join(' | ')} |`
+}
+
+/** @param {Row[]} rows @returns {string} a Markdown table */
+export function tableOf(rows) {
+  return [
+    '| route | requests/s | p50 ms | p95 ms | ratio | target | |',
+    '|---|---:|---:|---:|---:|---|---|',
+    ...rows.map(lineOf),
+  ].join('\n')
+}
+
+/** @param {{ name: string, p50Ms: number, p95Ms: number }[]} timings */
+export function domainTableOf(timings) {
+  return [
+    '| calculation alone | p50 ms | p95 ms |',
+    '|---|---:|---:|',
+    ...timings.map(({ name, p50Ms, p95Ms }) => `| ${name} | ${p50Ms.toFixed(3)} | ${p95Ms.toFixed(3)} |`),
+  ].join('\n')
+}
