@@ -1,31 +1,32 @@
 import autocannon from 'autocannon'
+import { processorMs, waitUntilQuiet } from './benchProcess.mjs'
 
 /**
- * @typedef {{ url: string, headers?: Record<string, string> }} Target
- * @typedef {{ times: number[], refused: number, seconds: number }} Load response times in ms, answers other than 200, time under load
+ * @typedef {{ url: string, headers?: Record<string, string>, pid?: number }} Target pid: of the server
+ * @typedef {{ times: number[], refused: number, seconds: number, processorMs: number }} Load
+ *   response times in ms, answers other than 200, time under load, the server's processor time
  */
 
 /** @returns {Load} */
-export const noLoad = () => ({ times: [], refused: 0, seconds: 0 })
+export const noLoad = () => ({ times: [], refused: 0, seconds: 0, processorMs: 0 })
 
 /**
- * Keeps the connections busy for some seconds and adds what it saw to `load`.
+ * Keeps the connections busy for some seconds and adds what it saw to `load`; answers once the server is at rest again.
  * @param {Target} target
  * @param {{ connections: number, seconds: number, load: Load }} options
  */
-export function pressOn(target, { connections, seconds, load }) {
-  return new Promise((resolve, reject) => {
-    const running = autocannon({ ...target, connections, duration: seconds, timeout: 20 }, (error, result) => {
-      if (error) return reject(error)
-      load.seconds += (result.finish - result.start) / 1000
-      load.refused += result.errors
-      return resolve(load)
-    })
-    running.on('response', (_client, statusCode, _bytes, ms) => {
-      if (statusCode === 200) load.times.push(ms)
-      else load.refused += 1
-    })
+export async function pressOn({ url, headers, pid }, { connections, seconds, load }) {
+  const before = processorMs(pid)
+  const running = autocannon({ url, headers, connections, duration: seconds, timeout: 20 })
+  running.on('response', (_client, statusCode, _bytes, ms) => {
+    if (statusCode === 200) load.times.push(ms)
+    else load.refused += 1
   })
+  const result = await running
+  load.seconds += (result.finish - result.start) / 1000
+  load.refused += result.errors
+  load.processorMs += (processorMs(pid) ?? 0) - (before ?? 0)
+  await waitUntilQuiet(pid)
 }
 
 /**
@@ -52,7 +53,10 @@ export function percentile(times, share) {
 }
 
 /** @param {Load} load */
-export function measuresOf({ times, refused, seconds }) {
-  if (times.length === 0) return { perSecond: 0, p50Ms: undefined, p95Ms: undefined, refused }
-  return { perSecond: times.length / seconds, p50Ms: percentile(times, 0.5), p95Ms: percentile(times, 0.95), refused }
+export function measuresOf({ times, refused, seconds, processorMs }) {
+  if (times.length === 0) return { perSecond: 0, p50Ms: undefined, p95Ms: undefined, processorMs: undefined, refused }
+  return {
+    perSecond: times.length / seconds, p50Ms: percentile(times, 0.5), p95Ms: percentile(times, 0.95), refused,
+    processorMs: processorMs > 0 ? processorMs / (times.length + refused) : undefined,
+  }
 }

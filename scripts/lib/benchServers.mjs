@@ -50,14 +50,18 @@ export async function bringUpBench({ root, folder, nodeOptions, keeper, say }) {
   await seedWhenEmpty({ root, keeper, env })
   const organisationId = await settleDatabase(cluster.adminUrl, cluster.appUrl)
   const address = addressOf(host, port)
-  await bringUpServer({ command: [...nodeOptions, entry], cwd: root, env, address, keeper, timeoutMs: 45_000 })
+  const server = await bringUpServer({ command: [...nodeOptions, entry], cwd: root, env, address, keeper, timeoutMs: 45_000 })
   const referencePort = await findFreePort()
   const referenceAddress = addressOf(host, referencePort)
   const referenceEnv = {
     PATH: process.env.PATH, NODE_ENV: 'production', HOST: host, PORT: String(referencePort), DATABASE_URL: cluster.appUrl, REFERENCE_ORGANISATION_ID: organisationId,
   }
-  await bringUpServer({ command: [referenceEntry], cwd: root, env: referenceEnv, address: referenceAddress, keeper, timeoutMs: 45_000 })
-  return { address, referenceAddress, owner: ownerOf(demoSignIns(settings.dataDir)) }
+  const reference = await bringUpServer({ command: [referenceEntry], cwd: root, env: referenceEnv, address: referenceAddress, keeper, timeoutMs: 45_000 })
+  return {
+    program: { address, pid: server.child.pid },
+    reference: { address: referenceAddress, pid: reference.child.pid },
+    owner: ownerOf(demoSignIns(settings.dataDir)),
+  }
 }
 
 function ownerOf(signIns) {

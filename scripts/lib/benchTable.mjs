@@ -5,7 +5,7 @@ export const targets = {
 }
 
 /**
- * @typedef {{ perSecond: number, p50Ms?: number, p95Ms?: number, refused: number }} Measures
+ * @typedef {{ perSecond: number, p50Ms?: number, p95Ms?: number, processorMs?: number, refused: number }} Measures
  * @typedef {{ name: string, kind: 'json' | 'page' | 'reference', measures: Measures, ratio?: number }} Row
  */
 
@@ -25,14 +25,14 @@ function lineOf(row) {
   const { name, kind, measures, ratio } = row
   const isMet = meetsTarget(row)
   const verdict = isMet === undefined ? '' : isMet ? 'met' : measures.refused > 0 ? `**missed** (${measures.refused} refused)` : '**missed**'
-  return `| ${[name, Math.round(measures.perSecond), ms(measures.p50Ms), ms(measures.p95Ms), ratio?.toFixed(2) ?? '', kind === 'reference' ? 'reference' : targets[kind].words, verdict].join(' | ')} |`
+  return `| ${[name, Math.round(measures.perSecond), ms(measures.p50Ms), ms(measures.p95Ms), ms(measures.processorMs), ratio?.toFixed(2) ?? '', kind === 'reference' ? 'reference' : targets[kind].words, verdict].join(' | ')} |`
 }
 
 /** @param {Row[]} rows @returns {string} a Markdown table */
 export function tableOf(rows) {
   return [
-    '| route | requests/s | p50 ms | p95 ms | ratio | target | |',
-    '|---|---:|---:|---:|---:|---|---|',
+    '| route | requests/s | p50 ms | p95 ms | processor ms | ratio | target | |',
+    '|---|---:|---:|---:|---:|---:|---|---|',
     ...rows.map(lineOf),
   ].join('\n')
 }

@@ -2,6 +2,7 @@ import { createServer, type Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { afterEach, beforeEach, expect, test } from 'vitest'
 import { measuresOf, percentile, pressInTurn } from '../../../scripts/lib/benchLoad.mjs'
+import { processorMs } from '../../../scripts/lib/benchProcess.mjs'
 import { domainTableOf, meetsTarget, tableOf } from '../../../scripts/lib/benchTable.mjs'
 import { chooseRoutes, openSession } from '../../../scripts/lib/benchDemo.mjs'
 
@@ -37,8 +38,8 @@ test('percentiles are by nearest rank, whatever the order', () => {
 })
 
 test('times of all rounds together give the measures', () => {
-  expect(measuresOf({ times: [1, 2, 3, 4], refused: 1, seconds: 2 })).toEqual({ perSecond: 2, p50Ms: 2, p95Ms: 4, refused: 1 })
-  expect(measuresOf({ times: [], refused: 3, seconds: 2 })).toEqual({ perSecond: 0, p50Ms: undefined, p95Ms: undefined, refused: 3 })
+  expect(measuresOf({ times: [1, 2, 3, 4], refused: 1, seconds: 2, processorMs: 20 })).toEqual({ perSecond: 2, p50Ms: 2, p95Ms: 4, refused: 1, processorMs: 4 })
+  expect(measuresOf({ times: [], refused: 3, seconds: 2, processorMs: 0 })).toMatchObject({ perSecond: 0, p50Ms: undefined, p95Ms: undefined, refused: 3 })
 })
 
 test('targets are asked in turn, and only answers of 200 are timed', async () => {
@@ -65,7 +66,7 @@ test('a session is the cookie alone, without its attributes', async () => {
   expect(await openSession(url, { email: 'oona@plumbline.example', password: 'nine quiet rafters' })).toBe('session=sealed')
 })
 
-const measures = (change = {}) => ({ perSecond: 4_000, p50Ms: 4, p95Ms: 9, refused: 0, ...change })
+const measures = (change = {}) => ({ perSecond: 4_000, p50Ms: 4, p95Ms: 9, processorMs: 0.25, refused: 0, ...change })
 
 test.each([
   ['a quick JSON route', { kind: 'json', ratio: 0.4, measures: measures() }, true],
@@ -74,7 +75,7 @@ test.each([
   ['a route that refused once', { kind: 'json', ratio: 0.9, measures: measures({ refused: 1 }) }, false],
   ['a page at half the minimal page', { kind: 'page', ratio: 0.5, measures: measures({ p95Ms: 90 }) }, true],
   ['a page below half', { kind: 'page', ratio: 0.49, measures: measures() }, false],
-  ['a route that answered nothing', { kind: 'page', ratio: 0, measures: measuresOf({ times: [], refused: 9, seconds: 1 }) }, false],
+  ['a route that answered nothing', { kind: 'page', ratio: 0, measures: measuresOf({ times: [], refused: 9, seconds: 1, processorMs: 0 }) }, false],
 ] as const)('%s', (_name, row, isMet) => {
   expect(meetsTarget({ name: 'route', ...row })).toBe(isMet)
 })
@@ -85,9 +86,16 @@ test('the table gives each route its numbers, its target and whether it is met',
     { name: '/api/me', kind: 'json', ratio: 0.5, measures: measures() },
     { name: '/overview', kind: 'page', ratio: 0.3, measures: measures({ perSecond: 93.4, p95Ms: 123.45, refused: 2 }) },
   ]).split('\n')
-  expect(table[2]).toBe('| bare route | 8000 | 4.00 | 9.00 | 1.00 | reference |  |')
-  expect(table[3]).toBe('| /api/me | 4000 | 4.00 | 9.00 | 0.50 | p95 < 50 ms, ≥ 0.40 × bare route | met |')
-  expect(table[4]).toBe('| /overview | 93 | 4.00 | 123.5 | 0.30 | ≥ 0.50 × minimal page | **missed** (2 refused) |')
+  expect(table[2]).toBe('| bare route | 8000 | 4.00 | 9.00 | 0.25 | 1.00 | reference |  |')
+  expect(table[3]).toBe('| /api/me | 4000 | 4.00 | 9.00 | 0.25 | 0.50 | p95 < 50 ms, ≥ 0.40 × bare route | met |')
+  expect(table[4]).toBe('| /overview | 93 | 4.00 | 123.5 | 0.25 | 0.30 | ≥ 0.50 × minimal page | **missed** (2 refused) |')
+})
+
+test('processor time of a process only grows, and one that is not there has none', () => {
+  const before = processorMs(process.pid)
+  expect(before).toBeGreaterThan(0)
+  expect(processorMs(process.pid)).toBeGreaterThanOrEqual(before ?? Infinity)
+  expect(processorMs(undefined)).toBeUndefined()
 })
 
 test('calculations alone have a table of their own', () => {
