@@ -9,12 +9,34 @@ declare module '#auth-utils' {
   interface UserSession { organisationId?: string }
 }
 
+const MOST_KEPT = 5_000
+const KEPT_MS = 60_000
+
+/**
+ * Unsealing takes several times as long as a whole quick route, and a page asks several routes with one cookie. The same
+ * sealed text always holds the same identity, so it is kept for a minute; whether it still counts is asked of the database each time.
+ */
+const unsealed = new Map<string, { identity: SessionIdentity, until: number }>()
+
+function keepUnsealed(sealed: string, identity: SessionIdentity) {
+  // A map remembers the order of its keys: the first is the one kept longest.
+  if (unsealed.size >= MOST_KEPT) unsealed.delete(unsealed.keys().next().value!)
+  unsealed.set(sealed, { identity, until: Date.now() + KEPT_MS })
+}
+
 /** Who the sealed cookie says this is. The epoch is held against the database by findActor. */
 export async function sessionIdentity(event: H3Event): Promise<SessionIdentity | undefined> {
-  // Reading a session that is not there would make one and set a cookie.
-  if (!getCookie(event, useRuntimeConfig(event).session.name ?? 'nuxt-session')) return undefined
+  // Reading a session that is not there would make one and set a cookie. The configuration of the process, not a copy for this event.
+  const sealed = getCookie(event, useRuntimeConfig().session.name ?? 'nuxt-session')
+  if (!sealed) return undefined
+  const kept = unsealed.get(sealed)
+  if (kept && kept.until > Date.now()) return kept.identity
+  unsealed.delete(sealed)
   const { user, organisationId } = await getUserSession(event)
-  return user ? { userId: user.id, epoch: user.epoch, organisationId } : undefined
+  if (!user) return undefined
+  const identity = { userId: user.id, epoch: user.epoch, organisationId }
+  keepUnsealed(sealed, identity)
+  return identity
 }
 
 /** The account of a live session, whatever its memberships; for the public routes. */
