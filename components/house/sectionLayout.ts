@@ -3,6 +3,7 @@ import { fontPx, keyLabel, labelByStroke, labelOverBlock, lineHeightPx, overlap 
 import { joinNearest, spread } from './sectionSpread'
 import type { Box, LoadTone, MarkTone, SectionBlock, SectionContent, SectionDrawing, SectionFrame, SectionLabel, SectionLoad, SectionMark, SectionStroke } from './sectionTypes'
 import { fitText, textWidth } from './textWidth'
+import { formatNumber } from '~/shared/utils/units'
 
 const loadRank: Record<LoadTone, number> = { within: 0, unknown: 1, near: 2, over: 3 }
 const markRank: Record<MarkTone, number> = { unknown: 0, dormant: 1, watch: 2, active: 3 }
@@ -52,7 +53,7 @@ function joinedWeight(a: SectionLoad, b: SectionLoad, weightLb: number): string 
   const shown = /^([\d.,]+)\s*(\D+)$/.exec(a.weightText)
   if (!shown || a.weightLb <= 0) return `${a.weightText} + ${b.weightText}`
   const perLb = Number(shown[1]!.replaceAll(',', '')) / a.weightLb
-  return `${Math.round(weightLb * perLb).toLocaleString('en-US')} ${shown[2]}`
+  return `${formatNumber(weightLb * perLb)} ${shown[2]}`
 }
 
 function placeLoads(frame: SectionFrame, loads: readonly SectionLoad[], size: 'strip' | 'thumb'): PlacedLoad[] {

@@ -1,4 +1,5 @@
 import type { InjectionKey, MaybeRef } from 'vue'
+import { clockInZone } from '~/shared/utils/dayInZone'
 import { formatDay, isDay } from '~/shared/utils/days'
 
 /** The time zone of the organisation, provided once by the frame around the page. */
@@ -10,13 +11,8 @@ export const timeZoneKey: InjectionKey<MaybeRef<string | undefined>> = Symbol('t
  */
 export function instantText(instant: Date, options: { timeZone?: string, withTime?: boolean } = {}): string | null {
   if (Number.isNaN(instant.getTime())) return null
-  const parts = new Intl.DateTimeFormat('en-CA', {
-    timeZone: options.timeZone ?? 'UTC', hourCycle: 'h23',
-    year: 'numeric', month: '2-digit', day: '2-digit', hour: '2-digit', minute: '2-digit',
-  }).formatToParts(instant)
-  const part = (type: Intl.DateTimeFormatPartTypes) => parts.find(p => p.type === type)?.value ?? ''
-  const day = formatDay(`${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`)
-  return options.withTime ? `${day}, ${part('hour')}:${part('minute')}${options.timeZone ? '' : ' UTC'}` : day
+  const { day, time } = clockInZone(options.timeZone ?? 'UTC', instant)
+  return options.withTime ? `${formatDay(day)}, ${time}${options.timeZone ? '' : ' UTC'}` : formatDay(day)
 }
 
 /** A day or an instant in words, with the form a machine reads; null when it is neither. */

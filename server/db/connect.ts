@@ -1,5 +1,6 @@
 import { CamelCasePlugin, Kysely, PostgresDialect, type Transaction } from 'kysely'
 import pg from 'pg'
+import { preparedPool } from './preparedPool'
 import type { Database } from './schema'
 
 const DATE = 1082
@@ -32,7 +33,7 @@ export function connect(url: string, options: { max?: number } = {}): Connection
   })
   pool.on('error', () => { /* an idle client lost its server; the pool has dropped it and the next query tells the caller */ })
   const db = new Kysely<Database>({
-    dialect: new PostgresDialect({ pool }),
+    dialect: new PostgresDialect({ pool: preparedPool(pool) }),
     plugins: [new CamelCasePlugin({ maintainNestedObjectKeys: true })],
   })
   return { db, pool, close: () => db.destroy() }

@@ -1,3 +1,5 @@
+import { dayInZone } from '../../shared/utils/dayInZone'
+
 /**
  * The only place that reads the time. LATHKEY_CLOCK_OFFSET_MS moves it for tests and rehearsals;
  * nothing else in the server may call Date.now() or new Date() without an argument.
@@ -12,5 +14,5 @@ export function nowInstant(): string {
 
 /** The calendar day 'YYYY-MM-DD' at an instant in an IANA time zone. */
 export function dayIn(timeZone: string, at: Date = now()): string {
-  return new Intl.DateTimeFormat('en-CA', { timeZone, year: 'numeric', month: '2-digit', day: '2-digit' }).format(at)
+  return dayInZone(timeZone, at)
 }

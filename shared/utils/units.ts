@@ -25,9 +25,13 @@ export const lbPerFt3ToKgPerM3 = (lbPerFt3: number): number => lbPerFt3 * KG_PER
 /** A number and its unit never part at the end of a line. */
 export const NO_BREAK_SPACE = '\u00A0'
 
+/** Making a formatter takes a hundred times as long as using it. */
+const numberFormats: Intl.NumberFormat[] = []
+const numberFormat = (decimals: number) => numberFormats[decimals] ??= new Intl.NumberFormat('en-US', { maximumFractionDigits: decimals })
+
 /** Grouped, with at most so many decimals, and no minus before a zero. */
 export function formatNumber(value: number, decimals = 0): string {
-  const text = value.toLocaleString('en-US', { maximumFractionDigits: decimals })
+  const text = numberFormat(decimals).format(value)
   return text === '-0' ? '0' : text.replace('-', '−')
 }
 
