@@ -3,6 +3,7 @@ import type { UnitsOfMeasure } from '../../shared/types/people'
 import { formatDay } from '../../shared/utils/days'
 import { ADVICE_SENTENCES, findingSentence, findingTitle, SEVERITY_WORDS } from '../../shared/utils/messages/findingMessages'
 import { ESTIMATE_CAVEAT, LEAVE_ROOM_SIGNS, RESPONSE_TIMES_CAVEAT } from '../../shared/utils/messages/safety'
+import { reportNumber } from '../../shared/utils/report/reportNumber'
 import { appUrl } from './appUrl'
 import type { MailContent } from './mailDesign'
 
@@ -60,7 +61,7 @@ export function newMarkMail({ place, findings, mailClass, system, mark, report }
   return {
     subject: `${mailClass === 'safety' ? 'Act now: ' : ''}New mark in ${mark.roomName} · ${homeOf(place)}`,
     heading: `New mark reported: ${mark.label}`,
-    paragraphs: [`${report.reporterName} reported it in ${mark.roomName} at ${homeOf(place)}. Report ${report.number}, mark ${mark.number}.`, ...adviceOf(findings)],
+    paragraphs: [`${report.reporterName} reported it in ${mark.roomName} at ${homeOf(place)}. Report ${reportNumber(report.number)}, mark ${mark.number}.`, ...adviceOf(findings)],
     items: findings.map(entry => asItem(entry, system)),
     action: { label: 'See the mark and its photos', href: appUrl(`/marks/${mark.id}`) },
     footer: footerOf(place, mailClass),

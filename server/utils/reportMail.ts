@@ -1,6 +1,7 @@
 import type { DangerSign } from '../../shared/types/mark'
 import { DANGER_SIGN_WORDS } from '../../shared/utils/messages/markMessages'
 import { ESTIMATE_CAVEAT, LEAVE_ROOM, LEAVE_ROOM_SIGNS } from '../../shared/utils/messages/safety'
+import { reportNumber } from '../../shared/utils/report/reportNumber'
 import { appUrl } from './appUrl'
 import { homeOf, type MailedPlace } from './findingMail'
 import type { MailContent } from './mailDesign'
@@ -18,7 +19,7 @@ export function repeatedReportMail({ place, mark, report }: RepeatedReport): Mai
     subject: `${danger ? 'Act now: ' : ''}Reported again: ${mark.label} · ${homeOf(place)}`,
     heading: `Reported again: ${mark.label}`,
     paragraphs: [
-      `${report.reporterName} reported mark ${mark.number} at ${homeOf(place)} again. Report ${report.number}.`,
+      `${report.reporterName} reported mark ${mark.number} at ${homeOf(place)} again. Report ${reportNumber(report.number)}.`,
       ...(danger ? [`Danger signs: ${report.dangerSigns.map(sign => DANGER_SIGN_WORDS[sign]).join('; ')}.`, LEAVE_ROOM, LEAVE_ROOM_SIGNS] : []),
     ],
     action: { label: 'See what was reported', href: appUrl(`/reports/${report.id}`) },

@@ -5,6 +5,7 @@ import type { PhotoRef } from '../../../shared/types/photo'
 import type { Receipt } from '../../../shared/types/receipt'
 import { addDays } from '../../../shared/utils/days'
 import { CARD_MM, COINS_MM } from '../../../shared/utils/movement/widthComparisons'
+import { reportNumber } from '../../../shared/utils/report/reportNumber'
 import { drawnPhoto, photoForm, plantCeilingHome, type CeilingHome } from '../../support/ceilingHome'
 import { startServer, type TestServer } from '../../support/server'
 
@@ -62,7 +63,7 @@ describe('reporting something on a ceiling', () => {
   it('mails the owner', async () => {
     const { body } = await report(crack({ roomId: home.hallId }))
     const mail = await server.mail.waitForMessage(home.ownerEmail, { subject: /Hall/ })
-    expect(mail.text.replace(/\s+/g, ' ')).toContain(`Report ${body.number}, mark ${body.mark.number}`)
+    expect(mail.text.replace(/\s+/g, ' ')).toContain(`Report ${reportNumber(body.number)}, mark ${body.mark.number}`)
   })
 
   it('answers the first receipt again when the same report is sent twice, even at once', async () => {
@@ -106,7 +107,7 @@ describe('reporting something on a ceiling', () => {
     const readings = await home.db.selectFrom('reading').select(['segment']).where('markId', '=', first.mark.id).orderBy('receivedAt').execute()
     expect(readings.map(reading => reading.segment)).toEqual([1, 2])
     const mail = await server.mail.waitForMessage(home.ownerEmail, { subject: /Reported again/ })
-    expect(mail.text.replace(/\s+/g, ' ')).toContain(`Report ${again.body.number}`)
+    expect(mail.text.replace(/\s+/g, ' ')).toContain(`Report ${reportNumber(again.body.number)}`)
   })
 
   it.each<[string, () => object | Promise<object>, string]>([
