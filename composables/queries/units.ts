@@ -4,13 +4,9 @@ import { useServerChange, useServerQuery } from '~/composables/useServerQuery'
 import type { AtticCreateValue, UnitEditValue } from '#shared/schemas/home'
 import type { RoomCreateValue, RoomEditValue } from '#shared/schemas/room'
 import type { TenancyCreateValue, TenancyEditValue } from '#shared/schemas/tenancy'
-import type { Page, RoomFacts, TenancyFacts, UnitCard, UnitFacts, UnitPage } from '#shared/types/home'
+import type { Page, RoomFacts, TenancyFacts, UnitCard, UnitFacts } from '#shared/types/home'
 
 export interface UnitsFilter { search?: string, after?: string, sections?: 'yes', [more: string]: string | undefined }
-
-export const useUnit = (unitId: MaybeRefOrGetter<string>) => useServerQuery<UnitPage>({
-  key: () => ['units', toValue(unitId)], path: () => `/api/units/${toValue(unitId)}`, essential: true,
-})
 
 /** The units the asker may see, by property and name. */
 export const useUnitList = (filter: MaybeRefOrGetter<UnitsFilter>, enabled: MaybeRefOrGetter<boolean> = true) => useServerQuery<Page<UnitCard>>({

@@ -1,11 +1,17 @@
+import { v4 } from 'uuid'
 import { readProblem } from '~/composables/formProblem'
-import { keepPhotos } from '~/composables/report/keptPhotos'
-import { readablePhoto } from '~/composables/report/readablePhoto'
-import { uploadPhoto } from '~/composables/report/uploadPhoto'
+import type { KeptPhotos } from '~/composables/report/keptPhotos'
 import { MAX_PHOTOS_PER_REPORT, photoPath } from '~/shared/types/photo'
 import type { DraftPhoto } from '~/shared/types/reportDraft'
 import { useReportDraft } from '~/stores/reportDraft'
-import { v4 } from 'uuid'
+
+/** Needed once there is a picture: they come after the page, with the later questions. */
+const atWork = {
+  keeping: () => import('~/composables/report/keptPhotos'),
+  reading: () => import('~/composables/report/readablePhoto'),
+  sending: () => import('~/composables/report/uploadPhoto'),
+}
+export const fetchPhotoWork = () => Promise.allSettled(Object.values(atWork).map(load => load()))
 
 const LOST = 'This picture is no longer on this phone. Please add it again.'
 /** Statuses that say something about the picture itself; all others may pass. */
@@ -20,7 +26,8 @@ function database(): IDBFactory | undefined {
 /** The photos of one draft: kept on this phone, sent as soon as there is a signal. */
 export function useReportPhotos(unitId: string, draftId: () => string) {
   const store = useReportDraft()
-  const kept = keepPhotos(database())
+  let opened: Promise<KeptPhotos> | undefined
+  const kept = () => opened ??= atWork.keeping().then(({ keepPhotos }) => keepPhotos(database()))
   const shares = reactive<Record<string, number>>({})
   const previews = reactive<Record<string, string>>({})
   let line: Promise<unknown> = Promise.resolve()
@@ -33,10 +40,10 @@ export function useReportPhotos(unitId: string, draftId: () => string) {
   async function add(files: readonly File[], view: DraftPhoto['view']) {
     for (const file of files.slice(0, room.value)) {
       const localId = v4()
-      const readable = await readablePhoto(file)
+      const readable = await atWork.reading().then(({ readablePhoto }) => readablePhoto(file))
       const refused = readable.kind === 'refused'
       if (!refused) {
-        await kept.put(localId, readable.picture)
+        await (await kept()).put(localId, readable.picture)
         previews[localId] = URL.createObjectURL(readable.picture)
       }
       store.change(draftId(), { photos: [...photos.value, { localId, view, name: file.name, state: refused ? 'refused' : 'kept', photoId: null, problem: refused ? readable.why : null }] })
@@ -54,18 +61,19 @@ export function useReportPhotos(unitId: string, draftId: () => string) {
       if (previews[localId]?.startsWith('blob:')) URL.revokeObjectURL(previews[localId])
       Reflect.deleteProperty(previews, localId)
     }
-    await kept.remove(localIds)
+    await (await kept()).remove(localIds)
   }
 
   async function upload(localId: string): Promise<boolean> {
     if (find(localId)?.state !== 'kept') return true
-    const picture = await kept.get(localId)
+    const picture = await (await kept()).get(localId)
     if (!picture) {
       mark(localId, { state: 'refused', problem: LOST })
       return true
     }
     try {
       shares[localId] = 0
+      const { uploadPhoto } = await atWork.sending()
       const { id } = await uploadPhoto(unitId, picture, find(localId)!.view, share => shares[localId] = share)
       if (find(localId)) mark(localId, { state: 'uploaded', photoId: id, problem: null })
       return true
@@ -97,12 +105,12 @@ export function useReportPhotos(unitId: string, draftId: () => string) {
 
   async function restore() {
     for (const { localId, photoId, state } of photos.value) {
-      const picture = await kept.get(localId)
+      const picture = await (await kept()).get(localId)
       if (picture) previews[localId] = URL.createObjectURL(picture)
       else if (photoId) previews[localId] = photoPath(photoId, 'thumb')
       else if (state === 'kept') mark(localId, { state: 'refused', problem: LOST })
     }
-    await kept.sweep(store.photoIdsInUse())
+    await (await kept()).sweep(store.photoIdsInUse())
     void uploadAll()
   }
 
