@@ -40,6 +40,7 @@ export const useReportDraft = defineStore('reportDraft', () => {
   }
   function changePhoto(id: string, localId: string, changes: Partial<DraftPhoto>) {
     const photos = drafts.value[id]?.photos ?? []
+    if (!photos.some(photo => photo.localId === localId)) return
     change(id, { photos: photos.map(photo => photo.localId === localId ? { ...photo, ...changes } : photo) })
   }
   function drop(id: string) {

@@ -24,5 +24,10 @@ const WORDS: Record<Exclude<ReportQuestion, 'size'>, QuestionWords> = {
   send: { heading: 'Look it over and send' },
 }
 
-export const questionWords = (question: ReportQuestion, kind: MarkKind | null): QuestionWords =>
-  question === 'size' ? SIZES[kind ?? 'crack'] : WORDS[question]
+/** Nobody is sent back under a dangerous ceiling for a photo. */
+const PHOTOS_IN_DANGER: QuestionWords = { heading: 'Have you taken photos already?', lead: 'Only those you have on this phone.' }
+
+export function questionWords(question: ReportQuestion, kind: MarkKind | null, isDanger: boolean): QuestionWords {
+  if (question === 'photos' && isDanger) return PHOTOS_IN_DANGER
+  return question === 'size' ? SIZES[kind ?? 'crack'] : WORDS[question]
+}

@@ -55,6 +55,14 @@ describe('the draft of a report', () => {
     expect(store.photoIdsInUse()).toEqual(['p1', 'p2'])
   })
 
+  it('is not brought back by a photo that was on its way when it was dropped', () => {
+    const store = openPage()
+    store.change(id, { photos: [photo] })
+    store.drop(id)
+    store.changePhoto(id, 'p1', { state: 'uploaded', photoId: 'server' })
+    expect(store.drafts).toEqual({})
+  })
+
   it('is forgotten after a month, and what is unreadable is as if it were not there', () => {
     vi.useFakeTimers({ now: new Date('2027-01-01T00:00:00Z') })
     openPage().change(id, {})
