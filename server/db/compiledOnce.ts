@@ -15,7 +15,7 @@ function slotsFor<G>(): G {
  * A statement that Kysely builds once: for the longer ones building takes most of a request's time.
  * `build` may use each of `given` only as a value in the statement; what changes the statement's shape comes in `shape`.
  */
-export function compiledOnce<G extends Record<string, unknown>, R, S = undefined>(build: (db: Db, given: G, shape: S) => Compilable<R>) {
+export function compiledOnce<G extends object, R, S = undefined>(build: (db: Db, given: G, shape: S) => Compilable<R>) {
   const compiled = new Map<string, CompiledQuery<R>>()
 
   function statementFor(db: Db, shape: S): CompiledQuery<R> {
@@ -27,7 +27,7 @@ export function compiledOnce<G extends Record<string, unknown>, R, S = undefined
 
   async function rows(db: Db, given: G, ...[shape]: S extends undefined ? [] : [shape: S]): Promise<R[]> {
     const statement = statementFor(db, shape as S)
-    const parameters = statement.parameters.map(value => value instanceof Slot ? given[value.name] : value)
+    const parameters = statement.parameters.map(value => value instanceof Slot ? given[value.name as keyof G] : value)
     return (await db.executeQuery<R>({ ...statement, parameters })).rows
   }
 

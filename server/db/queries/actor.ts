@@ -1,4 +1,5 @@
 import { sql } from 'kysely'
+import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
 import type { Role } from '../../../shared/types/people'
 import { dayIn } from '../../utils/clock'
@@ -16,19 +17,25 @@ export interface Actor {
 
 export interface SessionIdentity { userId: string, epoch: number, organisationId?: string }
 
+interface ActorGiven { userId: string, epoch: number, organisationId: string | undefined, preferredId: string | null }
+
+/** Asked at every request. */
+const actorRow = compiledOnce((db, given: ActorGiven, shape: { isOrganisationKnown: boolean }) => db.selectFrom('appUser as u')
+  .innerJoin('membership as m', 'm.userId', 'u.id')
+  .innerJoin('organisation as o', 'o.id', 'm.organisationId')
+  .select(['u.id as userId', 'u.name', 'u.email', 'm.organisationId', 'm.role', 'o.timeZone'])
+  .where('u.id', '=', given.userId).where('u.sessionEpoch', '=', given.epoch).where('m.endedAt', 'is', null)
+  .$if(shape.isOrganisationKnown, query => query.where('m.organisationId', '=', given.organisationId!))
+  .orderBy(sql`m.organisation_id is not distinct from ${given.preferredId}::uuid`, 'desc')
+  .orderBy('m.createdAt').limit(1))
+
 /**
  * The asker as a member of an organisation; undefined when the session has ended elsewhere or they are no member.
  * Without an organisation the one of the session is preferred, then the oldest membership.
  */
 export async function findActor(db: Db, identity: SessionIdentity, organisationId?: string): Promise<Actor | undefined> {
-  const row = await db.selectFrom('appUser as u')
-    .innerJoin('membership as m', 'm.userId', 'u.id')
-    .innerJoin('organisation as o', 'o.id', 'm.organisationId')
-    .select(['u.id as userId', 'u.name', 'u.email', 'm.organisationId', 'm.role', 'o.timeZone'])
-    .where('u.id', '=', identity.userId).where('u.sessionEpoch', '=', identity.epoch).where('m.endedAt', 'is', null)
-    .$if(organisationId !== undefined, query => query.where('m.organisationId', '=', organisationId!))
-    .orderBy(sql`m.organisation_id is not distinct from ${identity.organisationId ?? null}::uuid`, 'desc')
-    .orderBy('m.createdAt').limit(1).executeTakeFirst()
+  const given = { userId: identity.userId, epoch: identity.epoch, organisationId, preferredId: identity.organisationId ?? null }
+  const row = await actorRow.first(db, given, { isOrganisationKnown: organisationId !== undefined })
   if (!row) return undefined
   const whole = row.role === 'owner' || row.role === 'manager'
   return { ...row, unitIds: whole ? [] : await findUnitIds(db, row.organisationId, row.userId, row.role, dayIn(row.timeZone)) }

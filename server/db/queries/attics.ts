@@ -1,26 +1,35 @@
 import { sql } from 'kysely'
+import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
 import type { AtticDocument } from '../../../shared/types/attic'
 import type { AtticListRow } from '../../../shared/types/atticDetail'
 import type { Page } from '../../../shared/types/home'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 
-/** The survey that holds now: the last one entered. */
-export const findLatestSurvey = (db: Db, atticId: string) =>
+const latestSurvey = compiledOnce((db, { atticId }: { atticId: string }) =>
   db.selectFrom('atticSurvey').selectAll().where('atticId', '=', atticId)
-    .orderBy('createdAt', 'desc').orderBy('id', 'desc').limit(1).executeTakeFirst()
+    .orderBy('createdAt', 'desc').orderBy('id', 'desc').limit(1))
 
-export const findSurveys = (db: Db, atticId: string) =>
+/** The survey that holds now: the last one entered. */
+export const findLatestSurvey = (db: Db, atticId: string) => latestSurvey.first(db, { atticId })
+
+const surveysOf = compiledOnce((db, { atticId }: { atticId: string }) =>
   db.selectFrom('atticSurvey as s').innerJoin('appUser as u', 'u.id', 's.surveyedBy')
     .select(['s.id', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', 's.answers', 's.createdAt', 'u.name as surveyedByName'])
-    .where('s.atticId', '=', atticId).orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(50).execute()
+    .where('s.atticId', '=', atticId).orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(50))
 
-export const findItemsIn = (db: Db, atticId: string) =>
+export const findSurveys = (db: Db, atticId: string) => surveysOf.rows(db, { atticId })
+
+const itemsIn = compiledOnce((db, { atticId }: { atticId: string }) =>
   db.selectFrom('atticItem').selectAll().where('atticId', '=', atticId).where('removedOn', 'is', null)
-    .orderBy('createdAt').orderBy('id').execute()
+    .orderBy('createdAt').orderBy('id'))
 
-export const findDocuments = (db: Db, atticId: string) =>
-  db.selectFrom('atticDocument').selectAll().where('atticId', '=', atticId).where('withdrawnAt', 'is', null).orderBy('createdAt').execute()
+export const findItemsIn = (db: Db, atticId: string) => itemsIn.rows(db, { atticId })
+
+const documentsOf = compiledOnce((db, { atticId }: { atticId: string }) =>
+  db.selectFrom('atticDocument').selectAll().where('atticId', '=', atticId).where('withdrawnAt', 'is', null).orderBy('createdAt'))
+
+export const findDocuments = (db: Db, atticId: string) => documentsOf.rows(db, { atticId })
 
 type DocumentRow = Awaited<ReturnType<typeof findDocuments>>[number]
 
@@ -32,11 +41,13 @@ export const asAtticDocument = (row: DocumentRow): AtticDocument => ({
 /** What stood in the attic after each step, by the day it happened: a step entered late counts from its own day. */
 export const runningTotalLb = sql<number>`sum(e.delta_lb) over (partition by e.attic_id order by e.happened_on, e.recorded_at, e.id)`
 
-/** The load history, newest first. */
-export const findLoadEvents = (db: Db, atticId: string) =>
+const loadEventsOf = compiledOnce((db, { atticId }: { atticId: string }) =>
   db.selectFrom('loadEvent as e').innerJoin('atticItem as i', 'i.id', 'e.itemId').innerJoin('appUser as u', 'u.id', 'e.recordedBy')
     .select(['e.id', 'e.kind', 'e.happenedOn', 'e.deltaLb', runningTotalLb.as('totalAfterLb'), 'e.recordedAt', 'i.name as itemName', 'u.name as recordedByName'])
-    .where('e.atticId', '=', atticId).orderBy('e.happenedOn', 'desc').orderBy('e.recordedAt', 'desc').orderBy('e.id', 'desc').limit(500).execute()
+    .where('e.atticId', '=', atticId).orderBy('e.happenedOn', 'desc').orderBy('e.recordedAt', 'desc').orderBy('e.id', 'desc').limit(500))
+
+/** The load history, newest first. */
+export const findLoadEvents = (db: Db, atticId: string) => loadEventsOf.rows(db, { atticId })
 
 export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
   const row = await db.selectFrom('atticItem').select(sql<string | null>`sum(quantity * typical_lb)`.as('lb'))

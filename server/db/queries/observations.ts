@@ -1,4 +1,5 @@
 import { sql } from 'kysely'
+import { compiledOnce } from '../compiledOnce'
 import type { Db, Trx } from '../connect'
 import type { DangerSign, ObservationAnswers, ReadingMethod } from '../../../shared/types/mark'
 import type { ReportRow } from '../../../shared/types/markPage'
@@ -50,10 +51,13 @@ async function findReportReading(db: Db | Trx, markId: string, observationId: st
 const listReportPhotos = (db: Db | Trx, observationId: string) =>
   db.selectFrom('photo').select(photoRefColumns).where('observationId', '=', observationId).orderBy('uploadedAt').execute()
 
+const reportsOfMark = compiledOnce((db, { markId }: { markId: string }) =>
+  db.selectFrom('observation as o').innerJoin('appUser as a', 'a.id', 'o.reportedBy')
+    .select(['o.id', 'o.number', 'o.receivedAt', 'a.name as reportedBy', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt'])
+    .where('o.markId', '=', markId).orderBy('o.receivedAt', 'desc').limit(100))
+
 /** What people said of a mark, newest first. */
 export async function listReportsOfMark(db: Db, markId: string): Promise<ReportRow[]> {
-  const rows = await db.selectFrom('observation as o').innerJoin('appUser as a', 'a.id', 'o.reportedBy')
-    .select(['o.id', 'o.number', 'o.receivedAt', 'a.name as reportedBy', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt'])
-    .where('o.markId', '=', markId).orderBy('o.receivedAt', 'desc').limit(100).execute()
+  const rows = await reportsOfMark.rows(db, { markId })
   return rows.map(row => ({ ...row, answers: row.answers as ObservationAnswers, dangerSigns: row.dangerSigns as DangerSign[] }))
 }

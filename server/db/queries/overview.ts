@@ -1,4 +1,5 @@
 import { sql } from 'kysely'
+import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
 import type { AtticCounts, OverviewChange, OverviewDecision, OverviewDue } from '../../../shared/types/overview'
 import type { Activity } from '../../../shared/types/mark'
@@ -10,19 +11,21 @@ const MOST_DECISIONS = 12
 const MOST_CHANGES = 8
 const MOST_UPCOMING = 30
 
+const decisionRows = compiledOnce((db, given: { organisationId: string }) => db.selectFrom('unitStatus as us')
+  .innerJoin('finding as f', 'f.id', 'us.topFindingId')
+  .innerJoin('unit as u', 'u.id', 'us.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
+  .select(eb => [
+    'us.unitId', 'u.name as unitName', 'p.name as propertyName', 'us.openFindings', 'f.severity',
+    'f.id', 'f.rule', 'f.evidence', 'f.adviceCode', 'f.openedAt', 'f.subjectKind', 'f.subjectId',
+    roomsOf(db, eb.ref('us.unitId')).as('rooms'), atticsOf(db, eb.ref('us.unitId')).as('attics'), marksOf(db, eb.ref('us.unitId')).as('marks'),
+  ])
+  .where('us.organisationId', '=', given.organisationId).where('us.worstSeverity', 'in', ['urgent', 'attention']).where('u.archivedAt', 'is', null)
+  .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy(sql`array_position(${[...RISK_ORDER]}::text[], f.rule)`).orderBy('f.openedAt').orderBy('us.unitId')
+  .limit(MOST_DECISIONS))
+
 /** Homes with something that waits for a person: worst first, by what could hurt somebody, then longest open. */
 export async function findDecisions(db: Db, organisationId: string): Promise<OverviewDecision[]> {
-  const rows = await db.selectFrom('unitStatus as us')
-    .innerJoin('finding as f', 'f.id', 'us.topFindingId')
-    .innerJoin('unit as u', 'u.id', 'us.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
-    .select(eb => [
-      'us.unitId', 'u.name as unitName', 'p.name as propertyName', 'us.openFindings', 'f.severity',
-      'f.id', 'f.rule', 'f.evidence', 'f.adviceCode', 'f.openedAt', 'f.subjectKind', 'f.subjectId',
-      roomsOf(db, eb.ref('us.unitId')).as('rooms'), atticsOf(db, eb.ref('us.unitId')).as('attics'), marksOf(db, eb.ref('us.unitId')).as('marks'),
-    ])
-    .where('us.organisationId', '=', organisationId).where('us.worstSeverity', 'in', ['urgent', 'attention']).where('u.archivedAt', 'is', null)
-    .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy(sql`array_position(${[...RISK_ORDER]}::text[], f.rule)`).orderBy('f.openedAt').orderBy('us.unitId')
-    .limit(MOST_DECISIONS).execute()
+  const rows = await decisionRows.rows(db, { organisationId })
   return rows.map(({ unitId, unitName, propertyName, openFindings, severity, rooms, attics, marks, evidence, ...finding }) => ({
     unitId, unitName, propertyName, openFindings, severity,
     finding: { ...finding, evidence: evidence as Record<string, unknown> },
@@ -71,21 +74,24 @@ export async function findChanges(db: Db, { organisationId, userId }: Asker, sin
   return rows
 }
 
-/** Open due items up to a day, the late ones too. */
-export function findUpcoming(db: Db, organisationId: string, untilOn: string): Promise<OverviewDue[]> {
-  return db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
+const upcomingRows = compiledOnce((db, given: { organisationId: string, untilOn: string }) =>
+  db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
     .select(['d.kind', 'd.subjectId', 'd.unitId', 'u.name as unitName', 'p.name as propertyName', 'd.dueOn'])
-    .where('d.organisationId', '=', organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', untilOn).where('u.archivedAt', 'is', null)
-    .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING).execute()
-}
+    .where('d.organisationId', '=', given.organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', given.untilOn)
+    .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING))
+
+/** Open due items up to a day, the late ones too. */
+export const findUpcoming = (db: Db, organisationId: string, untilOn: string): Promise<OverviewDue[]> => upcomingRows.rows(db, { organisationId, untilOn })
 
 /** Ours: one visit, however often the page is loaded within these hours. */
 const ONE_VISIT_MS = 8 * 3_600_000
 
+const lookedRow = compiledOnce((db, given: { organisationId: string, userId: string }) => db.selectFrom('membership').select(['lastLookedAt', 'lookedBeforeAt'])
+  .where('organisationId', '=', given.organisationId).where('userId', '=', given.userId))
+
 /** When the asker last looked before this visit; null at the first one. */
 export async function findLastLooked(db: Db, organisationId: string, userId: string, at: string): Promise<string | null> {
-  const row = await db.selectFrom('membership').select(['lastLookedAt', 'lookedBeforeAt'])
-    .where('organisationId', '=', organisationId).where('userId', '=', userId).executeTakeFirst()
+  const row = await lookedRow.first(db, { organisationId, userId })
   if (!row?.lastLookedAt) return null
   return Date.parse(at) - Date.parse(row.lastLookedAt) < ONE_VISIT_MS ? row.lookedBeforeAt : row.lastLookedAt
 }

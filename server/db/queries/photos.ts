@@ -1,3 +1,4 @@
+import { compiledOnce } from '../compiledOnce'
 import type { Db, Trx } from '../connect'
 import type { PhotoRef } from '../../../shared/types/photo'
 
@@ -25,7 +26,10 @@ export const lockLoosePhotos = (trx: Trx, uploadedBy: string, unitId: string, id
   loosePhotos(trx, uploadedBy).select([...photoRefColumns, 'sha256'])
     .where('unitId', '=', unitId).where('id', 'in', ids).forUpdate().execute()
 
-export const listPhotosOfMark = (db: Db, markId: string): Promise<(PhotoRef & { readingId: string | null, observationId: string | null, uploadedBy: string })[]> =>
+const photosOfMark = compiledOnce((db, { markId }: { markId: string }) =>
   db.selectFrom('photo as p').innerJoin('appUser as u', 'u.id', 'p.uploadedBy')
     .select(['p.id', 'p.view', 'p.widthPx', 'p.heightPx', 'p.cameraTime', 'p.uploadedAt', 'p.readingId', 'p.observationId', 'u.name as uploadedBy'])
-    .where('p.markId', '=', markId).orderBy('p.uploadedAt', 'desc').limit(200).execute()
+    .where('p.markId', '=', markId).orderBy('p.uploadedAt', 'desc').limit(200))
+
+export const listPhotosOfMark = (db: Db, markId: string): Promise<(PhotoRef & { readingId: string | null, observationId: string | null, uploadedBy: string })[]> =>
+  photosOfMark.rows(db, { markId })

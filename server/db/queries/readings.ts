@@ -1,4 +1,5 @@
 import { sql } from 'kysely'
+import { compiledOnce } from '../compiledOnce'
 import type { Db, Trx } from '../connect'
 import type { ReadingAnswer, ReadingRow } from '../../../shared/types/markPage'
 import { suddenRises } from '../../../shared/utils/movement/sudden'
@@ -16,11 +17,14 @@ export async function listSegmentValues(db: Db | Trx, markId: string, segment: n
   return rows.map(row => row.value!)
 }
 
+const readingsOf = compiledOnce((db, { markId }: { markId: string }) =>
+  db.selectFrom('reading as r').innerJoin('appUser as u', 'u.id', 'r.takenBy')
+    .select(['r.id', 'r.takenOn', 'r.receivedAt', 'u.name as takenBy', 'r.segment', 'r.method', 'r.value', 'r.sigma', 'r.low', 'r.high', 'r.lengthMm', 'r.stainState', 'r.couldNotMeasureReason', 'r.note', 'r.detail'])
+    .where('r.markId', '=', markId).orderBy('r.takenOn').orderBy('r.receivedAt').limit(2000))
+
 /** Every reading of a mark, oldest first; what was tucked into `detail` is laid open. */
 export async function listReadings(db: Db, markId: string): Promise<ReadingRow[]> {
-  const rows = await db.selectFrom('reading as r').innerJoin('appUser as u', 'u.id', 'r.takenBy')
-    .select(['r.id', 'r.takenOn', 'r.receivedAt', 'u.name as takenBy', 'r.segment', 'r.method', 'r.value', 'r.sigma', 'r.low', 'r.high', 'r.lengthMm', 'r.stainState', 'r.couldNotMeasureReason', 'r.note', 'r.detail'])
-    .where('r.markId', '=', markId).orderBy('r.takenOn').orderBy('r.receivedAt').limit(2000).execute()
+  const rows = await readingsOf.rows(db, { markId })
   return rows.map(({ detail, ...row }) => {
     const { spanMm = null, tip = null, reportId = null } = detail as ReadingDetail
     return { ...row, spanMm, tip, reportId }
