@@ -77,7 +77,7 @@ export async function findChanges(db: Db, { organisationId, userId }: Asker, sin
 const upcomingRows = compiledOnce((db, given: { organisationId: string, untilOn: string }) =>
   db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
     .select(['d.kind', 'd.subjectId', 'd.unitId', 'u.name as unitName', 'p.name as propertyName', 'd.dueOn'])
-    .where('d.organisationId', '=', given.organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', given.untilOn)
+    .where('d.organisationId', '=', given.organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', given.untilOn).where('u.archivedAt', 'is', null)
     .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING))
 
 /** Open due items up to a day, the late ones too. */
