@@ -45,7 +45,7 @@ export function withdrawDocument(db: Db, actor: RecordActor, document: { id: str
     await lockUnit(trx, document.organisationId, document.unitId)
     const withdrawnAt = nowInstant()
     const { numUpdatedRows } = await trx.updateTable('atticDocument').set({ withdrawnAt }).where('id', '=', document.id).where('withdrawnAt', 'is', null).executeTakeFirst()
-    if (numUpdatedRows === 0n) throw problem(409, 'withdrawn', 'This paper was withdrawn before.')
+    if (Number(numUpdatedRows) === 0) throw problem(409, 'withdrawn', 'This paper was withdrawn before.')
     await appendRecord(trx, actor, {
       organisationId: document.organisationId, unitId: document.unitId, subjectKind: 'attic', subjectId: document.atticId, action: 'document withdrawn', after: { documentId: document.id, withdrawnAt },
     })
