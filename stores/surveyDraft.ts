@@ -1,28 +1,11 @@
 import { defineStore } from 'pinia'
 import type { AtticSurvey } from '~/shared/types/attic'
+import { emptySurvey } from '~/shared/utils/attic/emptySurvey'
+import { keptDrafts } from './keptDrafts'
 
-const STORE_KEY = 'lathkey.survey-drafts'
+/** A draft of an older version may lack an answer: it then counts as not given. */
+const readSurvey = (value: object): AtticSurvey | null =>
+  Array.isArray((value as Partial<AtticSurvey>).joistFields) ? { ...emptySurvey(''), ...value } : null
 
 /** Surveys begun on this browser and not yet kept: they outlive a reload and a lost signal. */
-export const useSurveyDraft = defineStore('surveyDraft', () => {
-  const drafts = ref<Record<string, AtticSurvey>>({})
-
-  function load() {
-    try { drafts.value = JSON.parse(localStorage.getItem(STORE_KEY) ?? '{}') as Record<string, AtticSurvey> }
-    catch { drafts.value = {} }
-  }
-  function save() {
-    // A full or forbidden store must not stop the survey itself.
-    try { localStorage.setItem(STORE_KEY, JSON.stringify(drafts.value)) }
-    catch { /* the draft lives on in memory */ }
-  }
-  function keep(atticId: string, survey: AtticSurvey) {
-    drafts.value = { ...drafts.value, [atticId]: JSON.parse(JSON.stringify(survey)) as AtticSurvey }
-    save()
-  }
-  function drop(atticId: string) {
-    drafts.value = Object.fromEntries(Object.entries(drafts.value).filter(([id]) => id !== atticId))
-    save()
-  }
-  return { drafts, load, keep, drop }
-})
+export const useSurveyDraft = defineStore('surveyDraft', () => keptDrafts('lathkey.survey-drafts', readSurvey))

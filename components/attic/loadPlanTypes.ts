@@ -15,7 +15,8 @@ export interface LoadPlanItem {
   state: LoadTone
 }
 
-export interface LoadPlanJoist { utilisation: number, state: LoadTone }
+/** `utilisation` is null while nothing is rated: there is nothing to hold the load against. */
+export interface LoadPlanJoist { utilisation: number | null, state: LoadTone }
 
 /** The bearing walls at x = 0 and x = span: 'south wall', 'hall wall'. */
 export interface LoadPlanWalls { start: string, end: string }

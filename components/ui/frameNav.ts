@@ -2,7 +2,7 @@ export interface FrameEntry { label: string, to: string }
 
 /** The rooms of the staff frame, each with the ability that opens it. */
 const entries: readonly (FrameEntry & { needs: string })[] = [
-  { label: 'Overview', to: '/', needs: 'see portfolio' },
+  { label: 'Overview', to: '/overview', needs: 'see portfolio' },
   { label: 'Findings', to: '/findings', needs: 'see finding' },
   { label: 'Homes', to: '/homes', needs: 'see finding' },
   { label: 'Attics', to: '/attics', needs: 'see finding' },

@@ -1,5 +1,6 @@
 import type { AtticDetail, AtticListRow } from '~/shared/types/atticDetail'
 import type { AtticSurvey } from '~/shared/types/attic'
+import type { AtticEditValue } from '~/shared/schemas/attic'
 import type { AtticItemEditValue, AtticItemMovesValue, AtticItemValue } from '~/shared/schemas/atticItem'
 
 export const atticKey = (atticId: string) => ['attics', atticId]
@@ -25,6 +26,12 @@ export const useConfirmInventory = (atticId: string) => post<{ confirmedOn: stri
 export const useRemoveItem = () =>
   post<{ itemId: string, removedOn: string, version: number }>(({ itemId }) => `/api/items/${itemId}/removal`, ({ removedOn, version }) => ({ removedOn, version }))
 export const useWithdrawDocument = () => post<{ documentId: string }>(({ documentId }) => `/api/documents/${documentId}/withdrawal`, () => ({}))
+
+export const useEditAttic = (atticId: string) => useServerChange<AtticEditValue, unknown>({
+  stale: STALE, send: (request, edit) => request(`/api/attics/${atticId}`, { method: 'PATCH', body: edit }),
+})
+export const useArchiveAttic = (atticId: string) => post<{ version: number }>(() => `/api/attics/${atticId}/archive`)
+export const useRestoreAttic = (atticId: string) => post<{ version: number }>(() => `/api/attics/${atticId}/restore`)
 
 export const useEditItem = () => useServerChange<{ itemId: string, edit: AtticItemEditValue }, unknown>({
   stale: STALE, send: (request, { itemId, edit }) => request(`/api/items/${itemId}`, { method: 'PATCH', body: edit }),

@@ -4,6 +4,8 @@ import { day, longText, pageLimit, shortText, version } from './fields'
 
 export const AtticEdit = z.strictObject({ name: shortText('What do you call this attic?'), notes: longText(), version })
 
+export type AtticEditValue = z.output<typeof AtticEdit>
+
 /** The words that go with an uploaded paper; the file itself travels beside them. */
 export const AtticDocumentInput = z.strictObject({
   kind: z.enum(DOCUMENT_KINDS, { error: 'What kind of paper is it?' }),

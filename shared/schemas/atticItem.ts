@@ -52,6 +52,8 @@ export const AtticItemRemoval = z.strictObject({ removedOn: day('When was it tak
 export const InventoryConfirmation = z.strictObject({ confirmedOn: day('When did you look?') })
 
 export type AtticItemValue = z.output<typeof AtticItemInput>
+/** What a person says of an item, without the days. */
+export type ItemFacts = Omit<AtticItemValue, 'placedOn'>
 export type AtticItemEditValue = z.output<typeof AtticItemEdit>
 export type AtticItemMovesValue = z.output<typeof AtticItemMoves>
 export type AtticItemRemovalValue = z.output<typeof AtticItemRemoval>

@@ -1,6 +1,7 @@
-import type { Severity } from './finding'
+import type { Finding, Severity } from './finding'
 import type { SectionParts } from './home'
 import type { Activity } from './mark'
+import type { DueKind } from '../utils/upkeep/dueItems'
 
 export interface OverviewDecision {
   unitId: string
@@ -8,13 +9,13 @@ export interface OverviewDecision {
   propertyName: string
   severity: Severity
   openFindings: number
-  finding: { id: string, rule: string, evidence: Record<string, unknown>, adviceCode: string, openedAt: string, subjectKind: string, subjectId: string }
+  finding: Finding & { id: string, openedAt: string }
   parts: SectionParts
 }
 
 export type AtticCounts = Record<'within' | 'near' | 'over' | 'hold' | 'unsurveyed', number>
 
-export interface OverviewDue { kind: string, subjectId: string, unitId: string, unitName: string, propertyName: string, dueOn: string }
+export interface OverviewDue { kind: DueKind, subjectId: string, unitId: string, unitName: string, propertyName: string, dueOn: string }
 export interface OverviewChange { unitId: string, unitName: string, propertyName: string, actions: { action: string, count: number }[], lastAt: string }
 
 /** What GET /api/overview answers. */

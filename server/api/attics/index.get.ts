@@ -3,7 +3,7 @@ import { listAttics } from '../../db/queries/attics'
 import { apiRoute } from '../../utils/apiRoute'
 
 export default apiRoute({
-  can: 'see portfolio',
+  can: 'see attic',
   query: AtticListQuery,
-  handle: ({ db, actor, query }) => listAttics(db, actor.organisationId, query),
+  handle: ({ db, actor, query }) => listAttics(db, actor, query),
 })

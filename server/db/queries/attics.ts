@@ -4,6 +4,7 @@ import type { Db } from '../connect'
 import type { AtticDocument } from '../../../shared/types/attic'
 import type { AtticListRow } from '../../../shared/types/atticDetail'
 import type { Page } from '../../../shared/types/home'
+import { visibleUnits, type Actor } from './actor'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 
 const latestSurvey = compiledOnce((db, { atticId }: { atticId: string }) =>
@@ -57,9 +58,10 @@ export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
 
 export interface AtticListFilter { search?: string, after?: string, limit: number }
 
-/** Attics of the organisation by name, with their home and the latest survey; keyset-paged on (name, id). */
-export async function listAttics(db: Db, organisationId: string, { search, after, limit }: AtticListFilter): Promise<Page<AtticListRow>> {
+/** The attics the asker may see by name, with their home and the latest survey; keyset-paged on (name, id). */
+export async function listAttics(db: Db, actor: Actor, { search, after, limit }: AtticListFilter): Promise<Page<AtticListRow>> {
   const from = readCursor(after, ['text', 'id'])
+  const visible = visibleUnits(actor)
   const pattern = search ? likeAnywhere(search) : undefined
   const rows = await db.selectFrom('attic as a')
     .innerJoin('unit as u', 'u.id', 'a.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
@@ -70,7 +72,8 @@ export async function listAttics(db: Db, organisationId: string, { search, after
     .leftJoin('atticStatus as now', 'now.atticId', 'a.id')
     .select(['a.id', 'a.name', 'a.unitId', 'u.name as unitName', 'p.name as propertyName', 'a.inventoryConfirmedOn', 'latest.surveyedOn',
       'now.ratedPsf', 'now.loadState', 'now.utilisation', sql<number>`stored.stored_lb`.as('storedLb'), sql<number>`stored.item_count`.as('itemCount')])
-    .where('a.organisationId', '=', organisationId).where('a.archivedAt', 'is', null)
+    .where('a.organisationId', '=', actor.organisationId).where('a.archivedAt', 'is', null)
+    .$if(visible !== 'all', query => query.where(eb => eb('a.unitId', '=', eb.fn.any(eb.val(visible as string[])))))
     .$if(pattern !== undefined, query => query.where(eb => eb.or([eb('a.name', 'ilike', pattern!), eb('u.name', 'ilike', pattern!), eb('p.name', 'ilike', pattern!)])))
     .$if(from !== undefined, query => query.where(sql<boolean>`(a.name, a.id) > (${from![0]}, ${from![1]}::uuid)`))
     .orderBy('a.name').orderBy('a.id').limit(limit + 1).execute()

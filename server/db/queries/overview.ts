@@ -1,7 +1,7 @@
 import { sql } from 'kysely'
 import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
-import type { AtticCounts, OverviewChange, OverviewDecision, OverviewDue } from '../../../shared/types/overview'
+import type { AtticCounts, OverviewChange, OverviewDecision } from '../../../shared/types/overview'
 import type { Activity } from '../../../shared/types/mark'
 import { RISK_ORDER } from '../../../shared/utils/upkeep/riskOrder'
 import { atticsOf, marksOf, roomsOf } from './unitParts'
@@ -9,7 +9,6 @@ import { atticsOf, marksOf, roomsOf } from './unitParts'
 /** Homes shown as waiting for a decision; the rest is counted and listed on the findings page. */
 const MOST_DECISIONS = 12
 const MOST_CHANGES = 8
-const MOST_UPCOMING = 30
 
 const decisionRows = compiledOnce((db, given: { organisationId: string }) => db.selectFrom('unitStatus as us')
   .innerJoin('finding as f', 'f.id', 'us.topFindingId')
@@ -26,9 +25,10 @@ const decisionRows = compiledOnce((db, given: { organisationId: string }) => db.
 /** Homes with something that waits for a person: worst first, by what could hurt somebody, then longest open. */
 export async function findDecisions(db: Db, organisationId: string): Promise<OverviewDecision[]> {
   const rows = await decisionRows.rows(db, { organisationId })
-  return rows.map(({ unitId, unitName, propertyName, openFindings, severity, rooms, attics, marks, evidence, ...finding }) => ({
+  return rows.map(({ unitId, unitName, propertyName, openFindings, severity, rooms, attics, marks, subjectKind, subjectId, ...finding }) => ({
     unitId, unitName, propertyName, openFindings, severity,
-    finding: { ...finding, evidence: evidence as Record<string, unknown> },
+    // The rule decides what its evidence holds: both are written by keepFindings from one Finding.
+    finding: { ...finding, severity, subject: { kind: subjectKind, id: subjectId } } as OverviewDecision['finding'],
     parts: { rooms: rooms ?? [], attics: attics ?? [], marks: marks ?? [] },
   }))
 }
@@ -73,15 +73,6 @@ export async function findChanges(db: Db, { organisationId, userId }: Asker, sin
     join unit u on u.id = t.unit_id join property p on p.id = u.property_id order by t.sort_at desc`.execute(db)
   return rows
 }
-
-const upcomingRows = compiledOnce((db, given: { organisationId: string, untilOn: string }) =>
-  db.selectFrom('dueItem as d').innerJoin('unit as u', 'u.id', 'd.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
-    .select(['d.kind', 'd.subjectId', 'd.unitId', 'u.name as unitName', 'p.name as propertyName', 'd.dueOn'])
-    .where('d.organisationId', '=', given.organisationId).where('d.settledAt', 'is', null).where('d.dueOn', '<=', given.untilOn).where('u.archivedAt', 'is', null)
-    .orderBy('d.dueOn').orderBy('d.id').limit(MOST_UPCOMING))
-
-/** Open due items up to a day, the late ones too. */
-export const findUpcoming = (db: Db, organisationId: string, untilOn: string): Promise<OverviewDue[]> => upcomingRows.rows(db, { organisationId, untilOn })
 
 /** Ours: one visit, however often the page is loaded within these hours. */
 const ONE_VISIT_MS = 8 * 3_600_000

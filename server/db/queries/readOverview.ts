@@ -3,7 +3,8 @@ import type { Overview } from '../../../shared/types/overview'
 import { addDays } from '../../../shared/utils/days'
 import { dayIn, nowInstant } from '../../utils/clock'
 import type { Actor } from './actor'
-import { countPortfolio, findChanges, findDecisions, findLastLooked, findUpcoming } from './overview'
+import { countPortfolio, findChanges, findDecisions, findLastLooked } from './overview'
+import { findUpcoming } from './upcoming'
 
 const UPCOMING_DAYS = 14
 

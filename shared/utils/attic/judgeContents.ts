@@ -9,15 +9,13 @@ import { judgeLoadPlan } from '../structure/judgeLoadPlan'
 import { loadFieldOf } from '../structure/loadField'
 import { loadStateOf } from '../structure/loadState'
 import { rateAttic } from '../structure/rating'
+import { CHANCE_LIMIT } from '../upkeep/findAtticFindings'
 
 export interface Contents {
   survey: AtticSurvey | null
   documents: readonly AtticDocument[]
   items: readonly ContentsItem[]
 }
-
-/** Ours: above this chance of being over its rating an attic is near, whatever the typical total says. */
-const NEAR_CHANCE = 0.1
 
 /**
  * An attic's contents against its rating: the total with its band, the load plan of each field and one verdict. The server,
@@ -56,14 +54,15 @@ function outsideOf(fields: readonly JudgedField[], items: readonly ContentsItem[
   return [...new Set([...refused, ...strayed])]
 }
 
-const placed = (item: ContentsItem): PlacedItem => ({
+/** An item as the load plan reads it: the whole pile's weight over its rectangle. */
+export const placedItem = (item: Omit<ContentsItem, 'fieldNumber' | 'weightSource' | 'lowLb' | 'highLb'>): PlacedItem => ({
   id: item.id, weightLb: item.quantity * item.typicalLb, xFt: item.xFt, yFt: item.yFt, lengthFt: item.lengthFt, widthFt: item.widthFt,
 })
 
 function judgeField(survey: AtticSurvey, rating: AtticRating, index: number, items: readonly ContentsItem[]): JudgedField {
   const surveyed = survey.joistFields[index]!
   const answer = loadFieldOf(survey, surveyed, rating.ratedPsf)
-  const here = items.filter(item => item.fieldNumber === index + 1).map(placed)
+  const here = items.filter(item => item.fieldNumber === index + 1).map(placedItem)
   const plan = answer.kind === 'field'
     ? judgeLoadPlan(answer.field, here, { member: answer.memberAssumed ? undefined : answer.member, strongbacksCount: answer.strongbacksCount })
     : null
@@ -98,6 +97,6 @@ function stateOf({ rating, items, fields, utilisation, chance }: Standing): Cont
   if (outsideOf(fields, items).length > 0 || fields.some(field => field.plan?.kind === 'refused')) return 'over'
   const state = loadStateOf(utilisation ?? 0)
   const unjudged = utilisation === null || fields.some(field => field.plan === null)
-  const uncertain = (chance ?? 0) > NEAR_CHANCE || unjudged
+  const uncertain = (chance ?? 0) > CHANCE_LIMIT || unjudged
   return state === 'within' && uncertain ? 'near' : state
 }

@@ -1,4 +1,4 @@
-import type { Access, CeilingFinish, Condition, Deck, Framing, Grade, InsulationMaterial, NotchPlace, Species } from '../../types/attic'
+import type { Access, CeilingFinish, Condition, Deck, Framing, Grade, InsulationMaterial, NotchEdge, NotchPlace, Species } from '../../types/attic'
 
 /** The answers of a survey as a person reads them, in the order they are offered. */
 export interface Wording<T> { value: T, label: string, description?: string }
@@ -76,5 +76,11 @@ export const NOTCH_PLACE_WORDS: readonly Wording<NotchPlace>[] = [
   { value: 'end', label: 'At the end, on the wall' },
   { value: 'outer-third', label: 'In an outer third' },
   { value: 'middle-third', label: 'In the middle third' },
+  { value: 'unknown', label: 'Not sure' },
+]
+
+export const NOTCH_EDGE_WORDS: readonly Wording<NotchEdge>[] = [
+  { value: 'top', label: 'Top edge' },
+  { value: 'bottom', label: 'Bottom edge' },
   { value: 'unknown', label: 'Not sure' },
 ]

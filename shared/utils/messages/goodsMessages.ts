@@ -46,3 +46,12 @@ export function chanceSentence(chance: number): string {
   if (chance < 0.005) return 'The chance of being over the rating is below 1 %.'
   return `The chance of being over the rating is about ${formatShare(chance)}.`
 }
+
+/** After a weighing: how far the guess was off, of one piece. */
+export function guessSentence(guess: { name: string, typicalLb: number, lowLb: number, highLb: number }, weighedLb: number, system: UnitSystem = 'us'): string {
+  const off = weighedLb / guess.typicalLb - 1
+  const weighed = `${guess.name} weighs ${formatWeight(weighedLb, system)}; ${formatWeight(guess.typicalLb, system)} was taken before`
+  if (Math.abs(off) < 0.05) return `${weighed}. That was right.`
+  const inside = weighedLb >= guess.lowLb && weighedLb <= guess.highLb ? 'still inside the range' : 'outside the range'
+  return `${weighed}: ${formatShare(Math.abs(off))} too ${off > 0 ? 'little' : 'much'}, ${inside}.`
+}

@@ -1,4 +1,5 @@
 import type { AdviceCode, FindingSubjectKind } from '../../types/finding'
+import type { DueKind } from '../upkeep/dueItems'
 
 export interface NextStep { label: string, to: string }
 
@@ -24,5 +25,17 @@ export function nextStep(adviceCode: AdviceCode, { subjectKind, subjectId, unitI
     case 'unload-then-engineer': case 'look-then-engineer': case 'find-the-leak': return { label: 'Plan the job', to: `/jobs/new?unit=${unitId}&finding=${findingId}` }
     case 'finish-job': return subjectKind === 'job' ? { label: 'Open the job', to: `/jobs/${subjectId}` } : { label: 'See the jobs', to: '/upkeep' }
     case 'find-contact': return { label: 'See the home’s people', to: `/units/${unitId}` }
+  }
+}
+
+/** Where what is due can be done. */
+export function dueAddress(kind: DueKind, subjectId: string): string {
+  switch (kind) {
+    case 'reading': return `/marks/${subjectId}/reading`
+    case 'inventory': return attic(subjectId)
+    case 'inspection': return attic(subjectId, '/survey')
+    case 'job': return `/jobs/${subjectId}`
+    case 'look-again': return `/findings/${subjectId}`
+    case 'invitation': return '/people'
   }
 }

@@ -45,7 +45,6 @@ const reads: [string, Asking][] = [
   ['GET /documents/:id', as => as.get(`/api/documents/${documentId}`)],
 ]
 const ofPortfolio: [string, Asking][] = [
-  ['GET /attics', as => as.get('/api/attics')],
   ['GET /overview', as => as.get('/api/overview')],
   ['POST /overview/looked', as => as.post('/api/overview/looked')],
 ]
@@ -64,6 +63,12 @@ describe('who may do what in an attic', () => {
   it.each(ofPortfolio)('%s: for staff only', async (_name, ask) => {
     const askers = [home.nobody, home.tenant, home.engineer, home.trades, home.owner]
     expect(await Promise.all(askers.map(async as => (await ask(as)).status))).toEqual([401, 403, 403, 403, 200])
+  })
+
+  it('GET /attics lists those of one\'s own homes; trades have none to see', async () => {
+    const askers = [home.nobody, home.trades, home.neighbour, home.tenant, home.engineer, home.owner]
+    const answers = await Promise.all(askers.map(as => as.get<{ rows?: { unitId: string }[] }>('/api/attics')))
+    expect(answers.map(({ status, body }) => [status, body.rows?.length])).toEqual([[401, undefined], [403, undefined], [200, 0], [200, 2], [200, 2], [200, 2]])
   })
 
   it.each(['/api/attics/', '/api/documents/'])('%s with an id that is nobody\'s, or no id at all, is 404', async (path) => {
