@@ -1,4 +1,4 @@
-import { stateWords } from '../house/sectionWords'
+import { loadWords } from '../house/sectionWords'
 import { joistsUnder, nearerWall } from './loadPlanGeometry'
 import type { LoadPlanField, LoadPlanItem, LoadPlanWalls } from './loadPlanTypes'
 
@@ -18,5 +18,5 @@ export function wallWords(field: LoadPlanField, walls: LoadPlanWalls, item: Load
 
 /** Everything the drawing shows of one item, as its name for those who do not see it. */
 export function itemWords(field: LoadPlanField, walls: LoadPlanWalls, item: LoadPlanItem, format: Formatters): string {
-  return `${item.name}, ${format.weight(item.weightLb)}, ${stateWords[item.state]}: ${wallWords(field, walls, item, format)}, on ${joistWords(field, item)}`
+  return `${item.name}, ${format.weight(item.weightLb)}, ${loadWords[item.state]}: ${wallWords(field, walls, item, format)}, on ${joistWords(field, item)}`
 }

@@ -1,18 +1,10 @@
 import { describe, expect, it } from 'vitest'
-import type { AtticSurvey, JoistField } from '../../../shared/types/attic'
+import type { AtticSurvey } from '../../../shared/types/attic'
 import type { ContentsItem } from '../../../shared/types/item'
-import { emptyJoistField, emptySurvey } from '../../../shared/utils/attic/emptySurvey'
 import { judgeContents } from '../../../shared/utils/attic/judgeContents'
+import { field, item, survey } from './attics'
 import { contentsVerdict } from '../../../shared/utils/messages/contentsMessages'
 
-const field: JoistField = { ...emptyJoistField('North'), species: 'Douglas fir-larch', grade: 'No.2', size: '2x10', spacingIn: 16, spanFt: 12, joistCount: 13, topEdgeBraced: true }
-const survey = (change: Partial<AtticSurvey> = {}): AtticSurvey => ({
-  ...emptySurvey('2026-11-01'), framing: 'rafters-and-joists', access: 'pull-down-ladder', openingWidthIn: 24, openingLengthIn: 54, clearHeightIn: 60, habitable: false,
-  ceilingFinish: 'gypsum-half-inch', insulation: { material: 'fiberglass', depthIn: 6 }, deck: 'full', conditions: [], joistFields: [field], ...change,
-})
-const item = (change: Partial<ContentsItem> = {}): ContentsItem => ({
-  id: 'a', fieldNumber: 1, quantity: 1, lowLb: 50, typicalLb: 50, highLb: 50, weightSource: 'weighed', xFt: 0, yFt: 4, lengthFt: 2, widthFt: 2, ...change,
-})
 const judge = (surveyed: AtticSurvey | null, items: ContentsItem[] = []) => judgeContents({ survey: surveyed, documents: [], items })
 
 describe('contents of an attic against its rating', () => {
@@ -40,7 +32,7 @@ describe('contents of an attic against its rating', () => {
     expect(judged.state).toBe('over')
     expect(judged.worstJoist!.utilisation).toBeGreaterThan(1)
     expect(judged.heavyInMiddle).toEqual(['a'])
-    expect(contentsVerdict(judged)).toMatchObject({ word: 'Over', doNow: expect.stringContaining('bearing walls') })
+    expect(contentsVerdict(judged)).toMatchObject({ word: 'Over', unloadFirst: true, doNow: null })
   })
 
   it('relieves the moment when the same weight is moved to the bearing wall', () => {
@@ -63,5 +55,16 @@ describe('contents of an attic against its rating', () => {
 
   it('treats a thing entered outside the measured field as over until its place is mended', () => {
     expect(judge(survey(), [item({ xFt: 11.5 })]).state).toBe('over')
+  })
+
+  it('names the things that stand outside, also over joists the survey does not have', () => {
+    expect(judge(survey(), [item(), item({ id: 'b', xFt: 11.5 }), item({ id: 'c', fieldNumber: 2 })])).toMatchObject({ state: 'over', outside: ['b', 'c'] })
+    expect(judge(survey({ joistFields: [] }), [item({ fieldNumber: 2 })]).outside).toEqual([])
+  })
+
+  it('is near while one of two fields is not measured, however little it carries', () => {
+    const judged = judge(survey({ joistFields: [field, { ...field, name: 'South', spanFt: null }] }), [item({ typicalLb: 1, lowLb: 1, highLb: 1 })])
+    // An unmeasured field holds the whole attic to 10 psf (ours).
+    expect(judged).toMatchObject({ state: 'near', ratedTotalLb: null, rating: { ratedPsf: 10, basis: 'unverified' } })
   })
 })

@@ -1,0 +1,25 @@
+import { mount, RouterLinkStub } from '@vue/test-utils'
+import type { Component } from 'vue'
+import AtticVerdict from '../../../components/attic/AtticVerdict.vue'
+import UiButton from '../../../components/ui/UiButton.vue'
+import UiChoice from '../../../components/ui/UiChoice.vue'
+import UiDay from '../../../components/ui/UiDay.vue'
+import UiDisclosure from '../../../components/ui/UiDisclosure.vue'
+import UiEmpty from '../../../components/ui/UiEmpty.vue'
+import UiField from '../../../components/ui/UiField.vue'
+import UiNumber from '../../../components/ui/UiNumber.vue'
+import UiSafety from '../../../components/ui/UiSafety.vue'
+import UiSelect from '../../../components/ui/UiSelect.vue'
+import UiStateWord from '../../../components/ui/UiStateWord.vue'
+import UiTable from '../../../components/ui/UiTable.vue'
+import UiVerdict from '../../../components/ui/UiVerdict.vue'
+
+const components = { AtticVerdict, UiButton, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
+
+/** Mounts a component of the attic with the pieces Nuxt would have found for it. */
+export function mountAttic(component: unknown, props: Record<string, unknown>) {
+  return mount(component as Component, { attachTo: document.body, props, global: { components, stubs: { NuxtLink: RouterLinkStub } } } as Parameters<typeof mount>[1])
+}
+
+/** What a person reads, in one line. */
+export const textOf = (wrapper: { text: () => string }) => wrapper.text().replace(/\s+/g, ' ')
