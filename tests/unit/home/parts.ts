@@ -1,11 +1,12 @@
-import type { AtticOfUnit, ItemOfUnit, MarkOfUnit, RoomFacts, SectionParts } from '../../../shared/types/home'
+import type { AtticOfUnit, MarkOfUnit, RoomFacts, SectionParts } from '../../../shared/types/home'
+import type { NamedContentsItem } from '../../../shared/types/item'
 import type { AtticSurvey } from '../../../shared/types/attic'
 
 export const room = (id: string, changes: Partial<RoomFacts> = {}): RoomFacts => ({
   id, name: id, isBedroom: false, lengthFt: 12, widthFt: 10, ceilingHeightIn: 96, ceilingFinish: 'unknown', sort: 0, version: 1, ...changes,
 })
 
-export const item = (id: string, changes: Partial<ItemOfUnit> = {}): ItemOfUnit => ({
+export const item = (id: string, changes: Partial<NamedContentsItem> = {}): NamedContentsItem => ({
   id, name: id, quantity: 1, lowLb: 40, typicalLb: 50, highLb: 60, weightSource: 'estimate', fieldNumber: 1, xFt: 0, yFt: 0, lengthFt: 2, widthFt: 2, ...changes,
 })
 
