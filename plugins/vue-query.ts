@@ -2,10 +2,11 @@ import { dehydrate, hydrate, QueryClient, VueQueryPlugin, type DehydratedState }
 
 /** One client a request on the server, one a browser; what the server fetched travels with the page. */
 export default defineNuxtPlugin((nuxtApp) => {
-  const state = useState<DehydratedState | null>('vue-query', () => null)
+  const state = useState('vue-query', () => shallowRef<DehydratedState | null>(null))
   const queryClient = new QueryClient({
     defaultOptions: {
-      queries: { staleTime: 30_000, retry: (failures, error) => import.meta.client && failures < 2 && isWorthRetrying(error) },
+      // Answers are replaced whole, never changed in place: making each of their objects reactive took a large part of rendering.
+      queries: { shallow: true, staleTime: 30_000, retry: (failures, error) => import.meta.client && failures < 2 && isWorthRetrying(error) },
     },
   })
   nuxtApp.vueApp.use(VueQueryPlugin, { queryClient })
