@@ -49,7 +49,7 @@ export const PROPERTIES: DemoProperty[] = [
   {
     name: 'Millpond Cottage', addressLines: ['Millpond Road 2', 'Reedham Falls, Example State'], yearBuilt: 1926,
     units: [{
-      name: 'cottage', finish: 'plaster-on-lath', tenant: 'ruben', tenantName: 'Ruben Achterberg', rooms: [room('Parlour', 15, 14), bedroom('Loft room', 12, 11)],
+      name: 'cottage', engineer: 'ines', finish: 'plaster-on-lath', tenant: 'ruben', tenantName: 'Ruben Achterberg', rooms: [room('Parlour', 15, 14), bedroom('Loft room', 12, 11)],
       attic: {
         name: 'Roof space', survey: openAttic([NOTCHED], { conditions: ['notched'], ceilingFinish: 'plaster-on-lath' }), confirmedDaysAgo: 420,
         items: [{ find: 'Suitcase', quantity: 4, xFt: 2, yFt: 2, daysAgo: 500 }, { find: 'Small carton', quantity: 8, xFt: 5, yFt: 5, daysAgo: 470 }],

@@ -5,6 +5,8 @@ import { createTenancy } from '../../server/db/commands/createTenancy'
 import { createUnit } from '../../server/db/commands/createUnit'
 import { surveyAttic } from '../../server/db/commands/surveyAttic'
 import { things, type Thing } from '../../server/db/queries/things'
+import { nowInstant } from '../../server/utils/clock'
+import { newId } from '../../server/utils/newId'
 import { suggestFootprint } from '../../shared/utils/goods/footprint'
 import { searchCatalogue } from '../../shared/utils/goods/itemCatalogue'
 import { PropertyCreate, UnitCreate } from '../../shared/schemas/home'
@@ -33,9 +35,15 @@ export async function plantProperty({ db, cast, today }: Plot, demo: DemoPropert
     const unit = (await things.unit(db, made.id))!
     const rooms = await db.selectFrom('room').select('id').where('unitId', '=', unit.id).orderBy('sort').execute()
     await plantTenancy({ db, cast, today }, unit, unitDemo)
+    if (unitDemo.engineer) await admitEngineer({ db, cast, today }, unit, unitDemo.engineer)
     planted.push({ unit, roomIds: rooms.map(room => room.id), demo: unitDemo })
   }
   return planted
+}
+
+async function admitEngineer({ db, cast }: Plot, unit: Thing<'unit'>, engineer: string) {
+  const { userId, organisationId } = cast[engineer]!
+  await db.insertInto('unitAccess').values({ id: newId(), organisationId, unitId: unit.id, userId, untilOn: null, createdAt: nowInstant() }).execute()
 }
 
 async function plantTenancy({ db, cast, today }: Plot, unit: Thing<'unit'>, demo: DemoUnit) {

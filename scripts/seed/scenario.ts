@@ -45,7 +45,7 @@ export interface DemoMark {
 
 export interface DemoItem { find: string, quantity: number, xFt: number, yFt: number, daysAgo: number, weighedLb?: number, tenantOwns?: true, removedDaysAgo?: number }
 export interface DemoAttic { name: string, survey: AtticSurvey | null, items: DemoItem[], confirmedDaysAgo?: number, surveyAgainDaysAgo?: number }
-export interface DemoUnit { name: string, rooms: { name: string, isBedroom?: true, lengthFt: number, widthFt: number }[], attic?: DemoAttic, marks: DemoMark[], tenant?: string, tenantName?: string, finish?: CeilingFinish }
+export interface DemoUnit { name: string, rooms: { name: string, isBedroom?: true, lengthFt: number, widthFt: number }[], attic?: DemoAttic, marks: DemoMark[], tenant?: string, tenantName?: string, engineer?: string, finish?: CeilingFinish }
 export interface DemoProperty { name: string, addressLines: string[], yearBuilt: number, units: DemoUnit[] }
 
 const joists = (name: string, measures: Partial<JoistField>): JoistField => ({ ...emptyJoistField(name), ...measures })

@@ -68,6 +68,8 @@ export const AtticSurveyInput = z.strictObject({
   insulation: z.strictObject({ material: z.enum(INSULATION_MATERIALS), depthIn: z.number().min(0, 'Not less than 0.').max(60, 'That is more than 60 in.').nullable() }),
   deck: z.enum(DECKS),
   conditions: z.array(z.enum(CONDITIONS)).max(CONDITIONS.length).nullable(),
+  // Comes back with a survey that was read and sent again; the server alone decides it.
+  earlierHold: z.unknown().optional().transform(() => undefined),
   joistFields: z.array(JoistFieldInput).max(20, 'At most 20 groups of joists.'),
 }).superRefine((survey, context) => {
   if (survey.framing !== 'rafters-and-joists' && survey.joistFields.length > 0) {

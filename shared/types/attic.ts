@@ -116,6 +116,8 @@ export interface AtticSurvey {
   /** Empty: somebody looked and found none. Null: nobody has looked. */
   conditions: Condition[] | null
   joistFields: JoistField[]
+  /** Set by the server, never by a form: an earlier survey found damage. Papers decide whether the hold stands. */
+  earlierHold?: { foundOn: string } | null
 }
 
 export const DOCUMENT_KINDS = ['engineer-letter', 'permit', 'truss-drawing', 'inspection-record'] as const

@@ -21,7 +21,7 @@ export type HoleProblem
     | { code: 'hole-near-another', distanceIn: number, limitIn: number, fieldName: string }
     | { code: 'hole-not-measured', fieldName: string | null }
 
-export type HoldReason = { code: 'condition', condition: Condition } | NotchProblem | HoleProblem
+export type HoldReason = { code: 'condition', condition: Condition } | { code: 'earlier-hold', foundOn: string } | NotchProblem | HoleProblem
 
 export type ClassReason
   = | { code: 'habitable', psf: number }

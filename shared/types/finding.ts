@@ -5,7 +5,7 @@ export const SEVERITIES = ['notice', 'attention', 'urgent'] as const
 export type Severity = typeof SEVERITIES[number]
 
 export const FINDING_RULES = [
-  'attic-load', 'attic-may-exceed', 'joist-over', 'heavy-item-in-middle', 'contents-under-hold',
+  'attic-load', 'attic-may-exceed', 'joist-over', 'item-outside-joists', 'heavy-item-in-middle', 'contents-under-hold',
   'contents-without-survey', 'contents-without-storage', 'refused-item', 'inventory-stale',
   'new-mark', 'new-mark-under-load', 'mark-active', 'mark-sudden', 'width-class-up', 'nail-pops-growing', 'nail-pops-in-line',
   'sag-over-limit', 'sag-growing', 'stain-wet', 'danger-sign', 'reading-overdue',
@@ -19,7 +19,7 @@ export interface FindingSubject { kind: FindingSubjectKind, id: string }
 
 /** What to do, as a code; sentences in shared/utils/messages/. */
 export const ADVICE_CODES = [
-  'stop-adding-and-unload', 'stop-adding', 'weigh-or-count', 'move-to-bearing-walls', 'keep-empty-until-inspected',
+  'stop-adding-and-unload', 'stop-adding', 'weigh-or-count', 'move-to-bearing-walls', 'mend-place', 'keep-empty-until-inspected',
   'survey-attic', 'empty-attic', 'take-out', 'confirm-inventory', 'watch-and-check-above', 'unload-then-engineer',
   'leave-room-and-call', 'look-then-engineer', 'find-the-leak', 'take-reading', 'inspect', 'finish-job', 'find-contact',
 ] as const
@@ -30,6 +30,7 @@ export interface FindingEvidence {
   'attic-load': { state: 'near' | 'over', totalLb: number, ratedTotalLb: number, ratedPsf: number, utilisation: number, chanceOfExceeding: number }
   'attic-may-exceed': { totalLb: number, highLb: number, ratedTotalLb: number, chanceOfExceeding: number }
   'joist-over': { fieldId: string, joistNumber: number, utilisation: number, joistsOver: number }
+  'item-outside-joists': { itemId: string, label: string, itemCount: number }
   'heavy-item-in-middle': { itemId: string, label: string, pressurePsf: number, ratedPsf: number, itemCount: number }
   'contents-under-hold': { totalLb: number, holdReasons: string[] }
   'contents-without-survey': { totalLb: number, itemCount: number }

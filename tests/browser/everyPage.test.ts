@@ -15,7 +15,7 @@ const both = (path: string): Sample[] => [{ who: 'maren', path }, { who: 'tomas'
 /** Every page file with who opens it where. `:name` is filled with an id of the demo. A new page must be added here. */
 const PAGES: Record<string, Sample[]> = {
   'account.vue': [...both('/account'), { who: 'bram', path: '/account' }],
-  'attics/[atticId]/index.vue': [...both('/attics/:attic')],
+  'attics/[atticId]/index.vue': [...both('/attics/:attic'), { who: 'ines', path: '/attics/:cottageAttic' }],
   'attics/[atticId]/items/new.vue': one('maren', '/attics/:attic/items/new'),
   'attics/[atticId]/items/[itemId].vue': one('maren', '/attics/:attic/items/:item'),
   'attics/[atticId]/load-plan.vue': one('maren', '/attics/:attic/load-plan'),
@@ -49,7 +49,7 @@ const PAGES: Record<string, Sample[]> = {
   'sign-in.vue': one('nobody', '/sign-in'),
   'sign-up.vue': one('nobody', '/sign-up'),
   'units/[unitId]/edit.vue': one('maren', '/units/:unit/edit'),
-  'units/[unitId]/index.vue': one('maren', '/units/:unit'),
+  'units/[unitId]/index.vue': [{ who: 'maren', path: '/units/:unit' }, { who: 'ines', path: '/units/:cottage' }],
   'units/[unitId]/record.vue': one('maren', '/units/:unit/record'),
   'upkeep.vue': [{ who: 'maren', path: '/upkeep' }, { who: 'bram', path: '/upkeep' }],
 }

@@ -12,7 +12,7 @@ const root = resolve(import.meta.dirname, '../..')
 export interface DemoServer extends TestServer {
   as: (who: 'maren' | 'otis' | 'tomas' | 'wanda' | 'bram' | 'ines') => Promise<Client>
   /** Ids of the demo that pages are addressed by. */
-  ids: Record<'property' | 'unit' | 'attic' | 'item' | 'mark' | 'finding' | 'job' | 'observation', string>
+  ids: Record<'property' | 'unit' | 'cottage' | 'cottageAttic' | 'attic' | 'item' | 'mark' | 'finding' | 'job' | 'observation', string>
 }
 
 const ADDRESSES = { maren: 'maren@quillbrook.example', otis: 'otis@quillbrook.example', tomas: 'tomas@tenants.example', wanda: 'wanda@tenants.example', bram: 'bram@plaster.example', ines: 'ines@structures.example' } as const
@@ -34,8 +34,10 @@ async function findIds(url: string): Promise<DemoServer['ids']> {
     const one = async (table: 'attic' | 'atticItem' | 'job' | 'observation' | 'finding') =>
       (await db.selectFrom(table).select('id').where('unitId', '=', unit.id).orderBy('id').limit(1).executeTakeFirstOrThrow()).id
     const mark = await db.selectFrom('mark').select('id').where('unitId', '=', unit.id).where('activity', '=', 'active').executeTakeFirstOrThrow()
+    const cottage = await db.selectFrom('unit').select('id').where('name', '=', 'cottage').executeTakeFirstOrThrow()
+    const cottageAttic = await db.selectFrom('attic').select('id').where('unitId', '=', cottage.id).executeTakeFirstOrThrow()
     return {
-      property: unit.propertyId, unit: unit.id, attic: await one('attic'), item: await one('atticItem'),
+      cottage: cottage.id, cottageAttic: cottageAttic.id, property: unit.propertyId, unit: unit.id, attic: await one('attic'), item: await one('atticItem'),
       mark: mark.id, finding: await one('finding'), job: await one('job'), observation: await one('observation'),
     }
   }

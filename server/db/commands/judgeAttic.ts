@@ -57,7 +57,7 @@ async function judgementOf(trx: Trx, attic: JudgedAttic): Promise<{ judgement: A
     contents,
     judgement: {
       atticId: attic.id, today: dayIn(attic.timeZone), items: rows.map(asAtticItem), rating: contents.rating,
-      load: loadOf(contents), ratedTotalLb: contents.ratedTotalLb,
+      load: loadOf(contents), outside: contents.outside, ratedTotalLb: contents.ratedTotalLb,
       confirmedOn: attic.inventoryConfirmedOn,
       inspectedOn: [...inspections, ...(survey ? [survey.surveyedOn] : [])].sort().at(-1) ?? null,
     },

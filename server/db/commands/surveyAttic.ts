@@ -1,7 +1,7 @@
 import type { Db } from '../connect'
 import type { AtticSurvey } from '../../../shared/types/attic'
 import { formatDay } from '../../../shared/utils/days'
-import { rateAttic } from '../../../shared/utils/structure/rating'
+import { damageOnRecord, rateAttic } from '../../../shared/utils/structure/rating'
 import { asAtticDocument, findDocuments, findLatestSurvey } from '../queries/attics'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
@@ -11,14 +11,18 @@ import { judgeAttic } from './judgeAttic'
 import { lockAttic, type AtticRef } from './lockAttic'
 import { refuseFuture } from './refuseFuture'
 
-/** Keeps a survey with the rating it gave on the day; earlier surveys stay. Everything above the ceiling is judged anew. */
-export function surveyAttic(db: Db, actor: RecordActor & { userId: string, timeZone: string }, attic: AtticRef, survey: AtticSurvey) {
-  refuseFuture('surveyedOn', survey.surveyedOn, actor)
+/**
+ * Keeps a survey with the rating it gave on the day; earlier surveys stay. Everything above the ceiling is judged anew.
+ * A hold outlives a survey that sees no damage: only a paper lifts it.
+ */
+export function surveyAttic(db: Db, actor: RecordActor & { userId: string, timeZone: string }, attic: AtticRef, entered: AtticSurvey) {
+  refuseFuture('surveyedOn', entered.surveyedOn, actor)
   return db.transaction().execute(async (trx) => {
     await lockAttic(trx, attic)
     const latest = await findLatestSurvey(trx, attic.id)
-    if (latest && survey.surveyedOn < latest.surveyedOn) throw unsound({ surveyedOn: `The attic was surveyed on ${formatDay(latest.surveyedOn)}. An older survey cannot take its place.` })
+    if (latest && entered.surveyedOn < latest.surveyedOn) throw unsound({ surveyedOn: `The attic was surveyed on ${formatDay(latest.surveyedOn)}. An older survey cannot take its place.` })
     const documents = (await findDocuments(trx, attic.id)).map(asAtticDocument)
+    const survey = { ...entered, earlierHold: latest ? damageOnRecord(latest.answers) : null }
     const rating = rateAttic(survey, documents)
     const row = await trx.insertInto('atticSurvey').values({
       id: newId(), organisationId: attic.organisationId, unitId: attic.unitId, atticId: attic.id,

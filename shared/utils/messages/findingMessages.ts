@@ -11,6 +11,7 @@ export const FINDING_TITLES: Record<FindingRule, string> = {
   'attic-load': 'Attic near or over its rating',
   'attic-may-exceed': 'Attic may exceed its rating',
   'joist-over': 'A joist carries too much',
+  'item-outside-joists': 'Stored outside the measured joists',
   'heavy-item-in-middle': 'Heavy item in the middle of the span',
   'contents-under-hold': 'Things stored while the rating is on hold',
   'contents-without-survey': 'Things stored in an attic nobody has surveyed',
@@ -54,10 +55,11 @@ const CONTACT_REASONS = {
 } as const
 
 const ATTIC_SENTENCES: Pick<{ [R in FindingRule]: Sentence<R> },
-  'attic-load' | 'attic-may-exceed' | 'joist-over' | 'heavy-item-in-middle' | 'contents-under-hold' | 'contents-without-survey'
+  'attic-load' | 'attic-may-exceed' | 'joist-over' | 'item-outside-joists' | 'heavy-item-in-middle' | 'contents-under-hold' | 'contents-without-survey'
   | 'contents-without-storage' | 'refused-item' | 'inventory-stale' | 'inspection-overdue'> = {
   'attic-load': (e, s) => `${formatWeight(e.totalLb, s)} of ${formatWeight(e.ratedTotalLb, s)} rated (${formatLoad(e.ratedPsf, s)}): ${formatShare(e.utilisation)}, ${e.state} the rating.`,
   'attic-may-exceed': (e, s) => `${formatWeight(e.totalLb, s)} of ${formatWeight(e.ratedTotalLb, s)} rated, but the weights are uncertain: it may be ${formatWeight(e.highLb, s)}. Chance of being over: ${formatShare(e.chanceOfExceeding)}.`,
+  'item-outside-joists': e => `${e.label} is entered where the survey has no joists, so nobody can say what it does to the ceiling. ${countWords(e.itemCount, 'item')} like this.`,
   'joist-over': e => `Joist ${e.joistNumber} is at ${formatShare(e.utilisation)} of what the rating allows. ${countWords(e.joistsOver, 'joist')} over in all.`,
   'heavy-item-in-middle': (e, s) => `${e.label} presses ${formatLoad(e.pressurePsf, s)} in the middle half of the span; the rating is ${formatLoad(e.ratedPsf, s)}. ${countWords(e.itemCount, 'item')} like this.`,
   'contents-under-hold': (e, s) => `${formatWeight(e.totalLb, s)} is up there while the rating is on hold.`,
@@ -93,6 +95,7 @@ export const ADVICE_SENTENCES: Record<AdviceCode, string> = {
   'stop-adding-and-unload': UNLOAD_FIRST,
   'stop-adding': 'Stop adding. Put nothing more up before something comes out.',
   'weigh-or-count': 'Weigh the big boxes, or look inside them: books, paper, tools, tile and liquids weigh most.',
+  'mend-place': 'Enter where it really stands, or measure the joists there. Until then take it as too much.',
   'move-to-bearing-walls': 'Move it over or beside a bearing wall, or out of the attic.',
   'keep-empty-until-inspected': 'Add nothing. Take things out where that is safe, and have the attic inspected.',
   'survey-attic': 'Survey the attic. Until then nothing more should go up.',

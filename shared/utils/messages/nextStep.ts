@@ -13,7 +13,7 @@ export function nextStep(adviceCode: AdviceCode, { subjectKind, subjectId, unitI
   const onAttic = (label: string, part = ''): NextStep => subjectKind === 'attic' ? { label, to: attic(subjectId, part) } : home
   const onMark = (label: string, part: string, otherwise: NextStep): NextStep => subjectKind === 'mark' ? { label, to: `/marks/${subjectId}${part}` } : otherwise
   switch (adviceCode) {
-    case 'stop-adding-and-unload': case 'stop-adding': case 'move-to-bearing-walls': return onAttic('Open the load plan', '/load-plan')
+    case 'stop-adding-and-unload': case 'stop-adding': case 'move-to-bearing-walls': case 'mend-place': return onAttic('Open the load plan', '/load-plan')
     case 'weigh-or-count': return onAttic('Weigh what was guessed')
     case 'survey-attic': return onAttic('Survey the attic', '/survey')
     case 'keep-empty-until-inspected': case 'empty-attic': case 'take-out': return onAttic('See what is stored')

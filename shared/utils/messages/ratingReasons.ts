@@ -1,5 +1,6 @@
 import type { ClassReason, HoldReason, RatingReason } from '../../types/atticRating'
 import type { Condition, DocumentKind } from '../../types/attic'
+import { formatDay } from '../days'
 
 /** Each reason and caution of a rating as one plain sentence. Numbers come from the reason; nothing is calculated here. */
 
@@ -30,6 +31,7 @@ const where = (fieldName: string | null) => fieldName ? ` (${fieldName})` : ''
 function holdSentence(reason: HoldReason): string {
   switch (reason.code) {
     case 'condition': return `A member is ${CONDITION_WORDS[reason.condition]}.`
+    case 'earlier-hold': return `Damage was seen on ${formatDay(reason.foundOn)}. A new survey does not end the hold: an inspection record or an engineer’s letter does.`
     case 'notch-too-deep': return `A notch is ${inches(reason.depthIn)} deep; at most ${inches(reason.limitIn)} is allowed${where(reason.fieldName)}.`
     case 'notch-too-long': return `A notch is ${inches(reason.lengthIn)} long; at most ${inches(reason.limitIn)} is allowed${where(reason.fieldName)}.`
     case 'notch-in-middle-third': return `A joist is notched in the middle third of its span${where(reason.fieldName)}.`
@@ -73,6 +75,6 @@ export function ratingReasonSentence(reason: RatingReason): string {
 export const LIMIT_WORDS = { bending: 'bending', deflection: 'sag', shear: 'shear', bearing: 'bearing on the wall' } as const
 
 const isHold = (reason: HoldReason | ClassReason): reason is HoldReason =>
-  reason.code === 'condition' || reason.code.startsWith('notch') || reason.code.startsWith('hole')
+  reason.code === 'condition' || reason.code === 'earlier-hold' || reason.code.startsWith('notch') || reason.code.startsWith('hole')
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)

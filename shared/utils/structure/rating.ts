@@ -78,6 +78,11 @@ function rateJoisted(survey: AtticSurvey, basis: CodeBasis): AtticRating {
   return { ...common, ratedPsf: 0, basis: 'class', reasons: code.reasons, cautions: [...general, ...belowAccess, ...joistCheck.filter(isCapacity).flatMap(answer => answer.assumptions)] }
 }
 
+/** The damage on record as of this survey, lifted by a paper or not: seen in it, or carried over from an earlier one. */
+export function damageOnRecord(survey: AtticSurvey): { foundOn: string } | null {
+  return holdReasons(survey).length > 0 ? { foundOn: survey.surveyedOn } : survey.earlierHold ?? null
+}
+
 /**
  * Load for stored goods, psf, and why: a hold first, then a paper on file, then framing, then the code's class held back
  * by what the joists can take. Trusses and unknown framing are never calculated. Reasons and cautions are codes with numbers.
@@ -86,8 +91,9 @@ export function rateAttic(survey: AtticSurvey, documents: AtticDocument[] = [], 
   const joisted = survey.framing === 'rafters-and-joists'
   const code = joisted ? codeClass(survey, basis) : null
   const common = { classPsf: code?.classPsf ?? null, atticClass: code?.atticClass ?? null }
-  const found = holdReasons(survey)
-  const hold = holdState(found, documents, survey.surveyedOn)
+  const seen = holdReasons(survey)
+  const found = seen.length === 0 && survey.earlierHold ? [{ code: 'earlier-hold' as const, foundOn: survey.earlierHold.foundOn }] : seen
+  const hold = holdState(found, documents, damageOnRecord(survey)?.foundOn ?? survey.surveyedOn)
   const cautions = [...surveyCautions(survey, found.length === 0), ...hold.cautions]
   if (hold.held) return { ...common, ratedPsf: 0, basis: 'hold', hold: true, reasons: found, cautions }
   const papers = documentedRating(documents, survey.framing)

@@ -30,6 +30,8 @@ export interface AtticJudgement {
   ratedTotalLb: number | null
   /** Items up there now. */
   items: readonly AtticItem[]
+  /** Ids of items entered where the survey has no joists: they cannot be judged there. */
+  outside?: readonly string[]
   confirmedOn: string | null
   inspectedOn: string | null
 }
@@ -93,6 +95,13 @@ function planFindings({ subject, rating, load, items }: Weighed): Finding[] {
   return findings
 }
 
+function outsideFindings({ subject, items, outside = [] }: Weighed): Finding[] {
+  const strayed = items.filter(item => outside.includes(item.id))
+  const first = strayed[0]
+  if (!first) return []
+  return [{ rule: 'item-outside-joists', subject, severity: 'attention', evidence: { itemId: first.id, label: first.label, itemCount: strayed.length }, adviceCode: 'mend-place' }]
+}
+
 function refusedFindings({ subject, items }: Weighed): Finding[] {
   const refused = items.flatMap(item => refusalsFor(item, null)
     .filter(refusal => refusal.level === 'refuse').map(({ reason }) => ({ item, reason })))
@@ -123,7 +132,7 @@ export function findAtticFindings(attic: AtticJudgement): Finding[] {
   if (attic.items.length === 0) return inspection
   const weighed: Weighed = { ...attic, subject: { kind: 'attic', id: attic.atticId }, total: inventoryTotal(attic.items) }
   return [
-    ...storageFindings(weighed), ...totalFindings(weighed), ...planFindings(weighed),
+    ...storageFindings(weighed), ...totalFindings(weighed), ...planFindings(weighed), ...outsideFindings(weighed),
     ...refusedFindings(weighed), ...staleFindings(weighed), ...inspection,
   ]
 }

@@ -119,6 +119,19 @@ describe('a hold', () => {
     return attic
   }
 
+  it('outlives a new survey that sees no damage, and ends with the paper', async () => {
+    const attic = await held()
+    await attic.survey({ surveyedOn: addDays(home.today, -5) })
+    await attic.survey()
+    expect((await attic.read()).contents.rating).toMatchObject({ hold: true, ratedPsf: 0, reasons: [{ code: 'earlier-hold', foundOn: addDays(home.today, -10) }] })
+    expect(await attic.rows.status()).toMatchObject({ loadState: 'hold' })
+    const { body } = await attic.paper(inspected(home.today))
+    await attic.survey()
+    expect((await attic.read()).contents.rating).toMatchObject({ hold: false, ratedPsf: 20 })
+    await home.owner.post(`/api/documents/${body.id}/withdrawal`)
+    expect((await attic.read()).contents.rating).toMatchObject({ hold: true })
+  })
+
   it('is lifted by an inspection record of the survey\'s day or later, and comes back when that is withdrawn', async () => {
     const attic = await held()
     const { body } = await attic.paper(inspected(addDays(home.today, -10)))

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { firstValues, THICKNESSES, withoutLeftovers } from '../../../components/ceiling/readingForm'
+import { firstValues, THICKNESSES, withoutLeftovers } from '../../../components/ceiling/readingValues'
 import { chartDataOf, markFacts, markVerdict, widthClassWords } from '../../../components/ceiling/markView'
 import { METHODS_BY_KIND, READING_METHODS } from '../../../shared/types/mark'
 import type { MarkFacts, ReadingRow } from '../../../shared/types/markPage'

@@ -8,6 +8,7 @@ const EXAMPLES: FindingEvidence = {
   'attic-load': { state: 'over', totalLb: 5500, ratedTotalLb: 4800, ratedPsf: 20, utilisation: 1.146, chanceOfExceeding: 0.93 },
   'attic-may-exceed': { totalLb: 3600, highLb: 5000, ratedTotalLb: 4800, chanceOfExceeding: 0.2 },
   'joist-over': { fieldId: 'Main', joistNumber: 4, utilisation: 1.3, joistsOver: 2 },
+  'item-outside-joists': { itemId: 'x', label: 'Books', itemCount: 1 },
   'heavy-item-in-middle': { itemId: 'x', label: 'Books', pressurePsf: 45, ratedPsf: 20, itemCount: 1 },
   'contents-under-hold': { totalLb: 40, holdReasons: ['condition'] },
   'contents-without-survey': { totalLb: 40, itemCount: 2 },

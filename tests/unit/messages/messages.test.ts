@@ -24,6 +24,7 @@ const EVERY: Finding[] = [
   { rule: 'attic-load', subject: attic, severity: 'urgent', adviceCode: 'stop-adding-and-unload', evidence: { state: 'over', totalLb: 1240, ratedTotalLb: 1000, ratedPsf: 20, utilisation: 1.24, chanceOfExceeding: 0.9 } },
   { rule: 'attic-may-exceed', subject: attic, severity: 'notice', adviceCode: 'weigh-or-count', evidence: { totalLb: 700, highLb: 1100, ratedTotalLb: 1000, chanceOfExceeding: 0.12 } },
   { rule: 'joist-over', subject: attic, severity: 'urgent', adviceCode: 'stop-adding-and-unload', evidence: { fieldId: 'f', joistNumber: 4, utilisation: 1.31, joistsOver: 1 } },
+  { rule: 'item-outside-joists', subject: attic, severity: 'attention', adviceCode: 'mend-place', evidence: { itemId: 'i', label: 'Books', itemCount: 1 } },
   { rule: 'heavy-item-in-middle', subject: attic, severity: 'attention', adviceCode: 'move-to-bearing-walls', evidence: { itemId: 'i', label: 'Books', pressurePsf: 45, ratedPsf: 20, itemCount: 2 } },
   { rule: 'contents-under-hold', subject: attic, severity: 'urgent', adviceCode: 'keep-empty-until-inspected', evidence: { totalLb: 80, holdReasons: ['condition'] } },
   { rule: 'contents-without-survey', subject: attic, severity: 'attention', adviceCode: 'survey-attic', evidence: { totalLb: 80, itemCount: 2 } },

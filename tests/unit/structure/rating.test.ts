@@ -161,6 +161,14 @@ describe('a hold', () => {
     expect(rating.reasons).toEqual([reason])
   })
 
+  it('found by an earlier survey stands in a survey that sees no damage, until a paper of that day or later lifts it', () => {
+    const later = { surveyedOn: '2026-10-01', conditions: [], earlierHold: { foundOn: '2026-06-01' } }
+    expect(rate(later)).toMatchObject({ ratedPsf: 0, basis: 'hold', hold: true, reasons: [{ code: 'earlier-hold', foundOn: '2026-06-01' }] })
+    const record = (writtenOn: string) => paper({ kind: 'inspection-record', ratedPsf: null, liftsHold: true, writtenOn })
+    expect(rate(later, [record('2026-05-31')]).hold).toBe(true)
+    expect(rate(later, [record('2026-06-01')]).hold).toBe(false)
+  })
+
   it('a notch in the bottom edge of a joist 4 in thick or more', () => {
     const rating = rate({ joistFields: [joistField({ breadthIn: 3.5, depthIn: 7.25, notches: [notch({ edge: 'bottom' })] })] })
     expect(rating.reasons).toEqual([{ code: 'notch-in-bottom-of-thick-joist', breadthIn: 3.5, limitIn: 3.5, fieldName: 'north' }])

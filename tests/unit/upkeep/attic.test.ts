@@ -28,6 +28,12 @@ describe('Findings of an attic', () => {
     expect(findAtticFindings(attic())).toEqual([])
   })
 
+  it('name what is entered outside the measured joists, whose load nobody can judge', () => {
+    expect(findAtticFindings(attic({ outside: ['i1'] }))).toEqual([{
+      rule: 'item-outside-joists', subject: { kind: 'attic', id: 'a1' }, severity: 'attention', evidence: { itemId: 'i1', label: 'Box', itemCount: 1 }, adviceCode: 'mend-place',
+    }])
+  })
+
   it('are none for an empty attic, even unsurveyed or on hold', () => {
     expect(rules(attic({ items: [], rating: null }))).toEqual([])
     expect(rules(attic({ items: [], rating: { ...rated, hold: true } }))).toEqual([])
