@@ -2,8 +2,19 @@ import { useQueryClient } from '@tanstack/vue-query'
 import { meKey } from '~/composables/queries/session'
 import type { Me } from '~/shared/types/people'
 
-/** For pages that tenants and staff share: those who see the portfolio get the desk's frame, the others the phone's. */
-export default defineNuxtRouteMiddleware(() => {
-  const me = useQueryClient().getQueryData<Me>(meKey)
-  setPageLayout(me?.abilities.includes('see portfolio') ? 'default' : 'phone')
+declare module '#app' {
+  interface PageMeta {
+    /** The ability without which this page is of no use. */
+    can?: string
+  }
+}
+
+/**
+ * For pages that tenants and staff share: those who may read the record (staff, engineers) get the desk's frame, the others
+ * the phone's. A page that needs an ability refuses those without it.
+ */
+export default defineNuxtRouteMiddleware((to) => {
+  const abilities = useQueryClient().getQueryData<Me>(meKey)?.abilities ?? []
+  if (to.meta.can && !abilities.includes(to.meta.can)) return abortNavigation(createError({ statusCode: 403, fatal: true }))
+  setPageLayout(abilities.includes('see record') ? 'default' : 'phone')
 })
