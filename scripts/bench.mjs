@@ -44,14 +44,14 @@ async function measureRoutes({ folder, options }) {
     json: { name: 'bare route, one select', kind: 'reference', pid: reference.pid, url: `${reference.address}/api/one` },
     page: { name: 'minimal page', kind: 'reference', pid: reference.pid, url: `${reference.address}/` },
   }
-  const targets = [references.json, references.page, ...wanted.map(({ name, path, kind }) => ({ name, kind, pid: program.pid, url: `${program.address}${path}`, headers: { cookie } }))]
+  const targets = [references.json, references.page, ...wanted.map(({ path, headers, ...route }) => ({ ...route, pid: program.pid, url: `${program.address}${path}`, headers: { cookie, ...headers } }))]
   const { measuresOf, pressInTurn } = await import('./lib/benchLoad.mjs')
   say(`Measuring ${targets.length} routes, ${options.seconds} s each …`)
   const loads = await pressInTurn(targets, { connections, seconds: options.seconds, rounds, onRound: round => say(`  round ${round} of ${rounds}`) })
   const measured = new Map([...loads].map(([target, load]) => [target, measuresOf(load)]))
   return targets.map((target) => {
     const measures = measured.get(target)
-    return { ...target, measures, ratio: measures.perSecond / measured.get(references[target.kind] ?? target).perSecond }
+    return { ...target, measures, ratio: measures.perSecond / measured.get(references[target.against] ?? target).perSecond }
   })
 }
 
@@ -72,7 +72,7 @@ async function runBench() {
   const missed = rows.filter(row => meetsTarget(row) === false)
   const report = [
     '# Measured', '', describeMachine(), '',
-    `${connections} connections, ${options.seconds} s a route in ${rounds} rounds by turns, on the demo; client, servers and database on the same machine. Ratio: requests a second held against the reference of the same run. Processor: the server's own time an answer, without the database's.`, '',
+    `${connections} connections, ${options.seconds} s a route in ${rounds} rounds by turns, on the demo; client, servers and database on the same machine. Ratio: requests a second held against the reference of the same run. Processor: the server's own time an answer, without the database's. Made anew: asked so that no kept answer is used, as after a change.`, '',
     tableOf(rows), '', domainTableOf(domain),
     ...(starts ? ['', `npm start: first ${starts.firstSeconds.toFixed(1)} s on an empty data folder, second ${starts.secondSeconds.toFixed(1)} s.`] : []),
   ].join('\n')

@@ -26,7 +26,8 @@ async function findLongest({ address, cookie, list, one }) {
 /**
  * What is measured: the program's answers to an owner, on the fullest unit, attic and mark of the demo.
  * @param {{ address: string, cookie: string }} options
- * @returns {Promise<{ name: string, path: string, kind: 'json' | 'page' }[]>}
+ * Each twice: as people ask it, and made anew each time, as after a change (no-cache, RFC 9111 §5.2.1.4).
+ * @returns {Promise<{ name: string, path: string, kind: 'json' | 'page' | 'anew', against: 'json' | 'page', headers: Record<string, string> }[]>}
  */
 export async function chooseRoutes({ address, cookie }) {
   const longest = (list, one) => findLongest({ address, cookie, list, one })
@@ -38,8 +39,12 @@ export async function chooseRoutes({ address, cookie }) {
     ['/api/units/:id', `/api/units/${unitId}`], ['/api/attics/:id', `/api/attics/${atticId}`], ['/api/marks/:id', `/api/marks/${markId}`],
   ]
   const pages = [['/sign-in'], ['/overview'], ['/units/:id', `/units/${unitId}`], ['/attics/:id', `/attics/${atticId}`]]
-  return [
-    ...json.map(([name, path = name]) => ({ name, path, kind: 'json' })),
-    ...pages.map(([name, path = name]) => ({ name, path, kind: 'page' })),
+  const asked = [
+    ...json.map(([name, path = name]) => ({ name, path, against: 'json' })),
+    ...pages.map(([name, path = name]) => ({ name, path, against: 'page' })),
   ]
+  return asked.flatMap(route => [
+    { ...route, kind: route.against, headers: {} },
+    { ...route, kind: 'anew', name: `${route.name}, made anew`, headers: { 'cache-control': 'no-cache' } },
+  ])
 }

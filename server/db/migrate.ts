@@ -1,5 +1,6 @@
 import { Migrator } from 'kysely'
 import { connect } from './connect'
+import { followChanges } from './followChanges'
 import { migrations } from './migrations/all'
 
 /** Brings the database to the newest schema. Needs the owning role; throws with the failed migration's name. */
@@ -12,6 +13,7 @@ export async function migrateToLatest(ownerUrl: string): Promise<string[]> {
       const failed = results.find(result => result.status === 'Error')?.migrationName ?? 'the first step'
       throw new Error(`Migration failed at ${failed}`, { cause: error })
     }
+    if (results.length > 0) await followChanges(db)
     return results.map(result => result.migrationName)
   }
   finally {

@@ -3,6 +3,7 @@ import type { z } from 'zod'
 import type { Db } from '../db/connect'
 import { findActor, isSessionLive, type Actor, type SessionIdentity } from '../db/queries/actor'
 import { things, type Thing, type ThingName } from '../db/queries/things'
+import { keptAnswer } from './keptAnswers'
 import { isId } from './newId'
 import { abilitiesOf, reachOf, withinReach, type Ability } from './policy'
 import { noMembership, notAllowed, notFound, notSignedIn, problem, problemFromDatabase } from './problems'
@@ -23,6 +24,8 @@ interface RouteOptions<K extends ThingName, B extends z.ZodType, Q extends z.Zod
   on?: { [P in K]: string }
   body?: B
   query?: Q
+  /** For reads that depend on nothing but the asker, the address, and rows of their organisations: made again only after a change. */
+  kept?: boolean
   handle: (context: RouteContext & { [P in K]: Thing<P> } & { body: z.output<B>, query: z.output<Q> }) => Promise<A> | A
 }
 
@@ -31,13 +34,16 @@ interface RouteOptions<K extends ThingName, B extends z.ZodType, Q extends z.Zod
  * Fixed order: signed in → belongs → allowed → input sound → work.
  */
 export function apiRoute<K extends ThingName = never, B extends z.ZodType = z.ZodNever, Q extends z.ZodType = z.ZodNever, A = unknown>(options: RouteOptions<K, B, Q, A>): EventHandler {
-  return guarded(async (event) => {
-    const db = useDb()
+  async function answer(event: H3Event, db: Db) {
     const { actor, found } = await admit(event, db, options)
     const query = options.query ? await readInput(options.query, getQuery(event)) : undefined
     const body = options.body ? await readInput(options.body, await readJson(event)) : undefined
     const clientKey = getHeader(event, 'idempotency-key')
     return options.handle({ event, db, actor, ...found, body, query, clientKey: isId(clientKey) ? clientKey : undefined } as Parameters<typeof options.handle>[0])
+  }
+  return guarded((event) => {
+    const db = useDb()
+    return options.kept ? keptAnswer(event, db, () => answer(event, db)) : answer(event, db)
   })
 }
 
@@ -87,6 +93,7 @@ function guarded<A>(handle: (event: H3Event) => Promise<A> | A): EventHandler {
   return defineEventHandler(async (event) => {
     try { return await handle(event) }
     catch (error) {
+      event.context.mayKeepPage = false
       const known = problemFromDatabase(error)
       if (known?.statusCode === 503) setResponseHeader(event, 'Retry-After', 5)
       const retry = (error as { data?: { retryAfterSeconds?: number } })?.data?.retryAfterSeconds

@@ -5,5 +5,6 @@ import { apiRoute } from '../../utils/apiRoute'
 export default apiRoute({
   can: 'see attic',
   query: AtticListQuery,
+  kept: true,
   handle: ({ db, actor, query }) => listAttics(db, actor, query),
 })

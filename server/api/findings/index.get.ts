@@ -5,5 +5,6 @@ import { apiRoute } from '../../utils/apiRoute'
 export default apiRoute({
   can: 'see finding',
   query: FindingsQuery,
+  kept: true,
   handle: ({ db, actor, query }) => listFindings(db, actor, query),
 })

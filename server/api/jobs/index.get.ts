@@ -5,5 +5,6 @@ import { apiRoute } from '../../utils/apiRoute'
 export default apiRoute({
   can: 'see job',
   query: JobsQuery,
+  kept: true,
   handle: ({ db, actor, query }) => listJobs(db, actor, query),
 })

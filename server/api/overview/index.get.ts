@@ -3,5 +3,6 @@ import { apiRoute } from '../../utils/apiRoute'
 
 export default apiRoute({
   can: 'see portfolio',
+  kept: true,
   handle: ({ db, actor }) => readOverview(db, actor),
 })

@@ -5,5 +5,6 @@ import { apiRoute } from '../../utils/apiRoute'
 export default apiRoute({
   can: 'see property',
   query: HomesQuery,
+  kept: true,
   handle: ({ db, actor, query }) => listProperties(db, actor, query),
 })

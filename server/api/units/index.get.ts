@@ -5,5 +5,6 @@ import { apiRoute } from '../../utils/apiRoute'
 export default apiRoute({
   can: 'see unit',
   query: UnitsQuery,
+  kept: true,
   handle: ({ db, actor, query }) => listUnits(db, actor, query),
 })

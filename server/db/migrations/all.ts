@@ -9,6 +9,7 @@ import * as mailAttempts from './0007MailAttempts'
 import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
+import * as followedChanges from './0013FollowedChanges'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -22,4 +23,5 @@ export const migrations: Record<string, Migration> = {
   '0008Judging': judging,
   '0009InvitationTerms': invitationTerms,
   '0012LookedBefore': lookedBefore,
+  '0013FollowedChanges': followedChanges,
 }

@@ -4,6 +4,7 @@ export interface RecordTables {
   recordChain: RecordChainTable
   recordEntry: RecordEntryTable
   recordCheckpoint: RecordCheckpointTable
+  organisationChange: OrganisationChangeTable
 }
 
 export interface RecordChainTable {
@@ -40,4 +41,12 @@ export interface RecordCheckpointTable {
   entries: number
   hash: string
   createdAt: Instant
+}
+
+/** Kept by triggers, read by queries/changes.ts. */
+export interface OrganisationChangeTable {
+  organisationId: string
+  writerGroup: number
+  changes: number
+  byTransaction: string
 }

@@ -60,6 +60,9 @@ test('the fullest unit, attic and mark of the demo are the ones measured', async
   expect(pathOf('/api/marks/:id')).toBe('/api/marks/m1')
   expect(pathOf('/units/:id')).toBe('/units/u2')
   expect(routes.filter(route => route.kind === 'page').map(route => route.name)).toEqual(['/sign-in', '/overview', '/units/:id', '/attics/:id'])
+  expect(routes.find(route => route.name === '/units/:id, made anew')).toEqual({
+    name: '/units/:id, made anew', kind: 'anew', against: 'page', path: '/units/u2', headers: { 'cache-control': 'no-cache' },
+  })
 })
 
 test('a session is the cookie alone, without its attributes', async () => {
@@ -78,6 +81,12 @@ test.each([
   ['a route that answered nothing', { kind: 'page', ratio: 0, measures: measuresOf({ times: [], refused: 9, seconds: 1, processorMs: 0 }) }, false],
 ] as const)('%s', (_name, row, isMet) => {
   expect(meetsTarget({ name: 'route', ...row })).toBe(isMet)
+})
+
+test('an answer made anew is measured, without a target', () => {
+  const row = { name: '/overview, made anew', kind: 'anew', ratio: 0.1, measures: measures() } as const
+  expect(meetsTarget(row)).toBeUndefined()
+  expect(tableOf([row]).split('\n')[2]).toBe('| /overview, made anew | 4000 | 4.00 | 9.00 | 0.25 | 0.10 |  |  |')
 })
 
 test('the table gives each route its numbers, its target and whether it is met', () => {

@@ -4,5 +4,6 @@ import { apiRoute, abilitiesFor } from '../../../utils/apiRoute'
 export default apiRoute({
   can: 'see attic',
   on: { attic: 'atticId' },
+  kept: true,
   handle: async ({ db, actor, attic }) => ({ ...await readAttic(db, attic), abilities: abilitiesFor(actor) }),
 })

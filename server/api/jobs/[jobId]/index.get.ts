@@ -4,5 +4,6 @@ import { apiRoute } from '../../../utils/apiRoute'
 export default apiRoute({
   can: 'see job',
   on: { job: 'jobId' },
+  kept: true,
   handle: ({ db, actor, job }) => findJobView(db, actor, job.id),
 })

@@ -6,5 +6,6 @@ export default apiRoute({
   can: 'see property',
   on: { property: 'propertyId' },
   query: PropertyQuery,
+  kept: true,
   handle: ({ db, actor, property, query }) => findPropertyPage(db, actor, property, query),
 })

@@ -1,0 +1,5 @@
+import { keepPage } from '../utils/keptPages'
+
+export default defineNitroPlugin((nitro) => {
+  nitro.hooks.hook('render:response', (response, { event }) => keepPage(event, response))
+})
