@@ -3,10 +3,8 @@ import {
   ACCESSES, CEILING_FINISHES, CONDITIONS, DECKS, FRAMINGS, GRADES, INSULATION_MATERIALS, NOTCH_EDGES, NOTCH_PLACES, SIZES, SPECIES,
   type AtticSurvey,
 } from '../types/attic'
+import { LONGEST_SPAN_FT } from '../utils/structure/checkLoadPlan'
 import { day, measure, measureOrUnknown, shortText } from './fields'
-
-/** Longer than any joist this program judges; the span tables of the code end at 26 ft. */
-const LONGEST_SPAN_FT = 40
 
 const Notch = z.strictObject({
   depthIn: measureOrUnknown('the depth of the notch in inches', 24),

@@ -112,7 +112,7 @@ export type JoistCapacityAnswer
   = | JoistCapacity
     | { kind: 'not-joists', fieldName: string, framing: Exclude<Framing, 'rafters-and-joists'> }
     | { kind: 'measures-missing', fieldName: string, missing: JoistMeasure[] }
-    | { kind: 'not-covered', fieldName: string, measure: 'breadthIn' | 'depthIn' | 'slenderness', value: number, limit: number }
+    | { kind: 'not-covered', fieldName: string, measure: 'breadthIn' | 'depthIn' | 'spanFt' | 'slenderness', value: number, limit: number }
 
 export interface AtticRating {
   /** Stored goods, psf. 0 = nothing may be stored. */

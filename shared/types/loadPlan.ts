@@ -44,7 +44,7 @@ export interface JoistMember {
 }
 
 export type LoadPlanProblemCode
-  = | 'not-positive' | 'negative' | 'not-whole' | 'too-few-joists' | 'too-many-joists' | 'outside-field' | 'outside-span'
+  = | 'not-positive' | 'negative' | 'not-whole' | 'too-few-joists' | 'too-many-joists' | 'span-too-long' | 'spacing-not-plausible' | 'outside-field' | 'outside-span'
 
 /** Why a plan cannot be calculated; `at` names the part and `measure` the entry to mend. */
 export interface LoadPlanProblem {

@@ -3,6 +3,10 @@ import type { LoadField, LoadPlanProblem, LoadPlanProblemCode, PlacedItem } from
 /** Room for rounding in entered feet: about a hundredth of a thousandth of an inch. */
 const ROUNDING_FT = 1e-6
 const MOST_JOISTS = 1000
+/** Longer than any joist this program judges; the span tables of the code end at 26 ft. Ours. */
+export const LONGEST_SPAN_FT = 40
+/** Feet or millimetres entered as inches land outside these; ours. */
+const PLAUSIBLE_SPACING_IN = { least: 4, most: 96 } as const
 
 type At = LoadPlanProblem['at']
 
@@ -31,7 +35,11 @@ export function fieldWidthFt(field: Pick<LoadField, 'spacingIn' | 'joistCount'>)
 function checkField(problems: Problems, field: LoadField): boolean {
   const at: At = { part: 'field' }
   const spanSound = problems.positive(at, 'spanFt', field.spanFt)
-  let sound = problems.positive(at, 'spacingIn', field.spacingIn) && spanSound
+    && (field.spanFt <= LONGEST_SPAN_FT || problems.add('span-too-long', at, 'spanFt', field.spanFt, LONGEST_SPAN_FT))
+  const { least, most } = PLAUSIBLE_SPACING_IN
+  const spacingSound = problems.positive(at, 'spacingIn', field.spacingIn)
+    && ((field.spacingIn >= least && field.spacingIn <= most) || problems.add('spacing-not-plausible', at, 'spacingIn', field.spacingIn, field.spacingIn < least ? least : most))
+  let sound = spanSound && spacingSound
   if (!Number.isInteger(field.joistCount)) sound = problems.add('not-whole', at, 'joistCount', field.joistCount)
   else if (field.joistCount < 2) sound = problems.add('too-few-joists', at, 'joistCount', field.joistCount, 2)
   else if (field.joistCount > MOST_JOISTS) sound = problems.add('too-many-joists', at, 'joistCount', field.joistCount, MOST_JOISTS)

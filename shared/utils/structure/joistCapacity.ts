@@ -1,6 +1,7 @@
 import type { AtticSurvey, JoistField, Species, StampedGrade } from '../../types/attic'
 import type { CapacityLimit, JoistAssumption, JoistCapacity, JoistCapacityAnswer, JoistMeasure } from '../../types/atticRating'
 import { GREATEST_SLENDERNESS, beamStability, effectiveLengthIn, needsTopEdgeHeld } from './beamStability'
+import { LONGEST_SPAN_FT } from './checkLoadPlan'
 import { deadLoad } from './deadLoad'
 import type { LumberValues } from './lumber'
 import { NO_STAMP, lumberValues, sectionProperties, sizeClassOf } from './lumber'
@@ -60,12 +61,13 @@ function knownJoist(field: JoistField): KnownJoist | Exclude<JoistCapacityAnswer
   if (!known(field.spacingIn)) missing.push('spacingIn')
   if (!known(field.spanFt)) missing.push('spanFt')
   if (!section || !known(field.spacingIn) || !known(field.spanFt)) return { kind: 'measures-missing', fieldName: field.name, missing }
-  const outside = (measure: 'breadthIn' | 'depthIn', value: number, limit: number): JoistCapacityAnswer & { kind: 'not-covered' } =>
+  const outside = (measure: 'breadthIn' | 'depthIn' | 'spanFt', value: number, limit: number): JoistCapacityAnswer & { kind: 'not-covered' } =>
     ({ kind: 'not-covered', fieldName: field.name, measure, value, limit })
   if (section.breadthIn > COVERED.greatestBreadthIn) return outside('breadthIn', section.breadthIn, COVERED.greatestBreadthIn)
   if (section.breadthIn < COVERED.leastBreadthIn) return outside('breadthIn', section.breadthIn, COVERED.leastBreadthIn)
   if (section.depthIn > COVERED.greatestDepthIn) return outside('depthIn', section.depthIn, COVERED.greatestDepthIn)
   if (section.depthIn < COVERED.leastDepthIn) return outside('depthIn', section.depthIn, COVERED.leastDepthIn)
+  if (field.spanFt > LONGEST_SPAN_FT) return outside('spanFt', field.spanFt, LONGEST_SPAN_FT)
   return { field, ...section, spacingIn: field.spacingIn, spanIn: field.spanFt * 12 }
 }
 

@@ -16,7 +16,7 @@ export interface JudgeOptions {
 }
 
 /** Denser than the rating with any part in the middle half of the span (practice). */
-export function isHeavyInMiddle(field: Pick<LoadField, 'spanFt' | 'ratedPsf'>, item: PlacedItem): boolean {
+export function isHeavyInMiddle(field: Pick<LoadField, 'spanFt' | 'ratedPsf'>, item: Omit<PlacedItem, 'id' | 'yFt'>): boolean {
   const inMiddle = item.xFt < 0.75 * field.spanFt && item.xFt + item.lengthFt > 0.25 * field.spanFt
   return inMiddle && pressurePsf(item.weightLb, item.lengthFt, item.widthFt) > field.ratedPsf * (1 + 1e-9)
 }

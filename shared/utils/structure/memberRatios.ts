@@ -27,10 +27,11 @@ export function endStrengthLb(field: Pick<LoadField, 'spanFt' | 'spacingIn'>, me
 }
 
 /** Shear and bearing against the joist's own strength, less the dead load, so that heavy things may stand at a bearing wall. */
-export function memberRatios(field: Pick<LoadField, 'spanFt' | 'spacingIn'>, member: JoistMember, trace: SpanTrace): { shearRatio: number, bearingRatio: number } {
+export function endRatios(field: Pick<LoadField, 'spanFt' | 'spacingIn'>, member: JoistMember, storedShearLb: number, reactionLb: number): { shearRatio: number, bearingRatio: number } {
   const { deadShearLb, deadBearingLb } = endStrengthLb(field, member)
-  return {
-    shearRatio: shareOf(shearLb(trace, member), member.shearLb, deadShearLb),
-    bearingRatio: shareOf(Math.max(...trace.reactionsLb), member.bearingLb, deadBearingLb),
-  }
+  return { shearRatio: shareOf(storedShearLb, member.shearLb, deadShearLb), bearingRatio: shareOf(reactionLb, member.bearingLb, deadBearingLb) }
+}
+
+export function memberRatios(field: Pick<LoadField, 'spanFt' | 'spacingIn'>, member: JoistMember, trace: SpanTrace): { shearRatio: number, bearingRatio: number } {
+  return endRatios(field, member, shearLb(trace, member), Math.max(...trace.reactionsLb))
 }

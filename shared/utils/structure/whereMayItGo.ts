@@ -1,13 +1,16 @@
-import type { LoadField, LoadPlanProblem, LoadState, PlacedItem } from '../../types/loadPlan'
+import type { JoistMember, LoadField, LoadPlanProblem, LoadState, PlacedItem } from '../../types/loadPlan'
 import { checkLoadPlan, fieldWidthFt } from './checkLoadPlan'
-import { itemShares, joistLoads, lineLoad } from './itemShares'
-import { governingLimit, isHeavyInMiddle } from './judgeLoadPlan'
+import { itemShares, joistLoads } from './itemShares'
+import type { JoistShare } from './itemShares'
+import { isHeavyInMiddle } from './judgeLoadPlan'
 import type { JudgeOptions } from './judgeLoadPlan'
 import { weakestMember } from './loadField'
-import { joistRatios, ratedEffects, ratedTotalLb } from './loadPlan'
+import { ratedEffects, ratedTotalLb, ratioOf } from './loadPlan'
+import type { RatedEffects } from './loadPlan'
 import { loadStateOf } from './loadState'
-import { memberRatios } from './memberRatios'
-import { traceSpan } from './spanTrace'
+import { endRatios, shearSectionFt } from './memberRatios'
+import { spanSweeper, sweepLoads } from './spanSweep'
+import type { SweepLoads } from './spanSweep'
 
 export const GRID_FT = 0.5
 /** How many places are suggested; ours. */
@@ -57,6 +60,31 @@ function bestOf(spots: Spot[], item: NewItem): Spot[] {
   return best
 }
 
+/** What the joists carry already, ready to be asked about one more load anywhere. */
+interface Standing { field: LoadField, member: JoistMember, rated: RatedEffects, loads: SweepLoads[], sweep: ReturnType<typeof spanSweeper> }
+
+function standing(field: LoadField, items: PlacedItem[], member: JoistMember): Standing {
+  const lists = joistLoads(field, items)
+  const most = lists.reduce((longest, list) => Math.max(longest, list.length), 0)
+  return {
+    field, member, rated: ratedEffects(field), loads: lists.map(list => sweepLoads(field.spanFt, list)),
+    sweep: spanSweeper(field.spanFt, shearSectionFt(member, field.spanFt), most),
+  }
+}
+
+/** The most used joist under an item that would stand here. */
+function utilisationAt({ field, member, rated, loads, sweep }: Standing, item: NewItem, xFt: number, shares: readonly JoistShare[]): number {
+  let most = 0
+  for (const { joist, share } of shares) {
+    const own = loads[joist]
+    if (!own) continue
+    const effects = sweep(own, { lbPerFt: item.weightLb * share / item.lengthFt, fromFt: xFt, toFt: Math.min(field.spanFt, xFt + item.lengthFt), pointLb: 0 })
+    const ends = endRatios(field, member, effects.shearLb, effects.reactionLb)
+    most = Math.max(most, ratioOf(effects.momentLbFt, rated.momentLbFt), ratioOf(effects.deflectionLbFt3, rated.deflectionLbFt3), ends.shearRatio, ends.bearingRatio)
+  }
+  return most
+}
+
 /**
  * Every place on a ½ ft grid where an item could stand, with the utilisation that would result. Sharing by strongbacks is
  * left out, on the safe side. Nothing is suggested when the total would pass the rated total.
@@ -66,21 +94,17 @@ export function whereMayItGo(field: LoadField, items: PlacedItem[], item: NewIte
   if (problems.some(problem => problem.code !== 'outside-field' || problem.at.part !== 'item' || problem.at.id !== 'new')) return { kind: 'refused', problems }
   if (problems.length > 0) return { kind: 'larger-than-field', spanFt: field.spanFt, fieldWidthFt: fieldWidthFt(field) }
   if (field.ratedPsf === 0) return { kind: 'nothing-allowed' }
-  const member = options.member ?? weakestMember()
-  const rated = ratedEffects(field)
-  const loads = joistLoads(field, items)
+  const now = standing(field, items, options.member ?? weakestMember())
   const spots: Spot[] = []
+  const across = gridFt(field.spanFt - item.lengthFt)
   for (const yFt of gridFt(fieldWidthFt(field) - item.widthFt)) {
     const shares = itemShares(field, { yFt, widthFt: item.widthFt })
-    for (const xFt of gridFt(field.spanFt - item.lengthFt)) {
-      const placed: PlacedItem = { ...item, id: 'new', xFt, yFt }
-      const utilisation = shares.reduce((most, { joist, share }) => {
-        const trace = traceSpan(field.spanFt, [...(loads[joist] ?? []), lineLoad(field, placed, share)])
-        return Math.max(most, governingLimit({ ...joistRatios(trace, rated), ...memberRatios(field, member, trace) }).utilisation)
-      }, 0)
+    const beside = items.filter(other => !apart(yFt, item.widthFt, other.yFt, other.widthFt))
+    for (const xFt of across) {
+      const utilisation = utilisationAt(now, item, xFt, shares)
       spots.push({
-        xFt, yFt, utilisation, state: loadStateOf(utilisation), heavyInMiddle: isHeavyInMiddle(field, placed),
-        free: !items.some(other => overlaps(placed, other)), fromWallFt: Math.min(xFt, field.spanFt - xFt - item.lengthFt),
+        xFt, yFt, utilisation, state: loadStateOf(utilisation), heavyInMiddle: isHeavyInMiddle(field, { ...item, xFt }),
+        free: beside.every(other => apart(xFt, item.lengthFt, other.xFt, other.lengthFt)), fromWallFt: Math.min(xFt, field.spanFt - xFt - item.lengthFt),
       })
     }
   }

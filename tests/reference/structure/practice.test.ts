@@ -1,9 +1,13 @@
 import { describe, expect, it } from 'vitest'
 import type { LoadField } from '../../../shared/types/loadPlan'
+import { distanceFromWall } from '../../../shared/utils/structure/distanceFromWall'
 import { joistLoads } from '../../../shared/utils/structure/itemShares'
 import { strongbackForces } from '../../../shared/utils/structure/grillage'
+import { judgeLoadPlan } from '../../../shared/utils/structure/judgeLoadPlan'
+import { loadFieldOf } from '../../../shared/utils/structure/loadField'
 import { loadPlan } from '../../../shared/utils/structure/loadPlan'
 import { traceSpan } from '../../../shared/utils/structure/spanTrace'
+import { joistField, survey } from '../../unit/structure/surveys'
 
 // Common practice, no source.
 describe('what people in this trade reckon', () => {
@@ -27,5 +31,26 @@ describe('what people in this trade reckon', () => {
     expect((kept[6] ?? 0) / 80).toBeLessThan(0.3)
     const [four] = [kept.slice(5, 9), kept.slice(4, 8)].map(part => part.reduce((sum, lb) => sum + lb, 0) / 80)
     expect(four).toBeGreaterThan(0.7)
+  })
+
+  // 80 lb bend a 20 ft span by 400 lb ft of the 2,000 lb ft that 20 psf over 24 in would.
+  it('80 lb in the middle of one 2x12 at 24 in over 20 ft is safe on that joist alone', () => {
+    const surveyed = joistField({ species: 'Spruce-pine-fir', grade: 'No.2', size: '2x12', spacingIn: 24, spanFt: 20, joistCount: 11, topEdgeBraced: true })
+    const answer = loadFieldOf(survey({ joistFields: [surveyed] }), surveyed, 20)
+    const { field: attic, member } = answer.kind === 'field' ? answer : expect.fail(answer.kind)
+    const plan = judgeLoadPlan(attic, [{ id: 'box', xFt: 9, yFt: 9.999, lengthFt: 2, widthFt: 0.002, weightLb: 80 }], { member })
+    const joists = plan.kind === 'judged' ? plan.joists : expect.fail(plan.kind)
+    expect(joists[5]).toMatchObject({ state: 'within' })
+    expect(joists[5]!.momentRatio).toBeCloseTo(0.19, 2)
+    expect(joists[5]!.withStrongbacks.momentRatio).toBe(joists[5]!.momentRatio)
+  })
+
+  it.each([[12, '2x8'], [16, '2x10'], [20, '2x12']] as const)('a stack may be several times heavier right at the bearing wall than in the middle of %s ft (%s)', (spanFt, size) => {
+    const surveyed = joistField({ size, spanFt, spacingIn: 16 })
+    const answer = loadFieldOf(survey({ joistFields: [surveyed] }), surveyed, 20)
+    const table = answer.kind === 'field' ? distanceFromWall(answer.field, answer.member) : expect.fail(answer.kind)
+    const rows = table.kind === 'table' ? table.rows : expect.fail(table.kind)
+    expect(rows[0]!.weightLb / rows.at(-1)!.weightLb).toBeGreaterThan(4)
+    expect(rows[1]!.weightLb / rows.at(-1)!.weightLb).toBeGreaterThan(2)
   })
 })

@@ -109,4 +109,9 @@ test('processor time of a process only grows, and one that is not there has none
 
 test('calculations alone have a table of their own', () => {
   expect(domainTableOf([{ name: 'trend', p50Ms: 1.23456, p95Ms: 2 }])).toContain('| trend | 1.235 | 2.000 |')
+  const [, , met, missed] = domainTableOf([
+    { name: 'plan', p50Ms: 2, p95Ms: 3, mostP50Ms: 4, plainP50Ms: 8 }, { name: 'map', p50Ms: 50, p95Ms: 60, mostP50Ms: 40, plainP50Ms: 500 },
+  ]).split('\n')
+  expect(met).toBe('| plan | 2.000 | 3.000 | 8.000 | 4.0 | p50 < 4 ms | met |')
+  expect(missed).toMatch(/ 10\.0 \| p50 < 40 ms \| \*\*missed\*\* \|$/)
 })

@@ -4,6 +4,7 @@ import type { LoadField, PlacedItem } from '../../../shared/types/loadPlan'
 import { checkLoadPlan } from '../../../shared/utils/structure/checkLoadPlan'
 import { itemShares, joistLoads } from '../../../shared/utils/structure/itemShares'
 import { LoadPlanRefused, loadPlan } from '../../../shared/utils/structure/loadPlan'
+import { deflectionLbFt3At, traceSpan } from '../../../shared/utils/structure/spanTrace'
 import { grillageByElements } from './finiteElements'
 
 const field: LoadField = { spanFt: 16, spacingIn: 24, joistCount: 9, ratedPsf: 20, joistEiLbIn2: 1.4e6 * 98.93, strongbacks: [] }
@@ -103,6 +104,19 @@ describe('a load plan', () => {
     }))
   })
 
+  it('superposes: along a joist the effects of two plans add up to those of both, and none outdoes their sum', () => {
+    fc.assert(fc.property(anyItems, anyItems, (first, second) => {
+      const [a, b, both] = [first, second, [...first, ...second]].map(list => loadPlan(field, list).joists)
+      const loads = [first, second, [...first, ...second]].map(list => joistLoads(field, list).map(each => traceSpan(16, each)))
+      both!.forEach((joist, index) => {
+        expect(joist.momentRatio).toBeLessThanOrEqual(a![index]!.momentRatio + b![index]!.momentRatio + 1e-9)
+        expect(joist.deflectionRatio).toBeLessThanOrEqual(a![index]!.deflectionRatio + b![index]!.deflectionRatio + 1e-9)
+        const [one, other, sum] = loads.map(traces => [3.3, 8, 12.9].map(xFt => deflectionLbFt3At(traces[index]!, xFt)))
+        sum!.forEach((sag, at) => expect(Math.abs(sag - one![at]! - other![at]!)).toBeLessThanOrEqual(1e-6 * Math.max(1, sag)))
+      })
+    }), { numRuns: 40 })
+  })
+
   it('agrees with finite elements within 0.5 %', () => {
     fc.assert(fc.property(anyItems, (items) => {
       const { joists } = loadPlan(field, items)
@@ -178,6 +192,11 @@ describe('a plan that cannot be', () => {
     ['one joist', { joistCount: 1 }, {}, 'too-few-joists', 'joistCount'],
     ['half a joist', { joistCount: 4.5 }, {}, 'not-whole', 'joistCount'],
     ['joists without end', { joistCount: 1e6 }, {}, 'too-many-joists', 'joistCount'],
+    ['a span in inches', { spanFt: 168 }, {}, 'span-too-long', 'spanFt'],
+    ['a span past 40 ft', { spanFt: 40.01 }, {}, 'span-too-long', 'spanFt'],
+    ['a spacing in feet', { spacingIn: 2 }, {}, 'spacing-not-plausible', 'spacingIn'],
+    ['a spacing in millimetres', { spacingIn: 600 }, {}, 'spacing-not-plausible', 'spacingIn'],
+    ['no joists at all', { joistCount: 0 }, {}, 'too-few-joists', 'joistCount'],
     ['no spacing', { spacingIn: Number.NaN }, {}, 'not-positive', 'spacingIn'],
     ['a rating below nothing', { ratedPsf: -1 }, {}, 'negative', 'ratedPsf'],
     ['no stiffness', { joistEiLbIn2: 0 }, {}, 'not-positive', 'joistEiLbIn2'],

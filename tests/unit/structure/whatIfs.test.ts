@@ -110,6 +110,7 @@ describe('a person on a joist', () => {
     expect(person([]).personLb).toBe(250)
     expect(person([]).alone.momentRatio).toBeCloseTo(250 * 2 / rated, 10)
     expect(person([]).alone.deflectionRatio).toBeCloseTo(250 * 8 / 5 / rated, 10)
+    expect(person([]).alone).toMatchObject({ atFt: 7, share: person([]).alone.momentRatio })
   })
 
   it('on top of what is stored, the moment is that of the worst of many places', () => {
