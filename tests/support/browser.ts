@@ -78,8 +78,13 @@ export async function visit(page: Page, path: string) {
 const wcag22 = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']
 
 /** What axe finds against WCAG 2.2 A and AA, one line each; empty when clean. */
-export async function axeFindings(page: Page): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).withTags(wcag22).analyze()
+export const axeFindings = (page: Page) => findingsOf(new AxeBuilder({ page }).withTags(wcag22))
+
+/** The part of it that another colour scheme can change. */
+export const contrastFindings = (page: Page) => findingsOf(new AxeBuilder({ page }).withRules(['color-contrast', 'link-in-text-block']))
+
+async function findingsOf(axe: AxeBuilder): Promise<string[]> {
+  const { violations } = await axe.analyze()
   return violations.map(({ id, help, nodes }) => `${id}: ${help} — ${nodes.map(node => node.target.join(' ')).join(' | ')}`)
 }
 
