@@ -18,12 +18,11 @@ export interface TestDatabase {
   drop: () => Promise<void>
 }
 
-/** A fresh database with the newest schema and no rows. */
-export async function cloneDatabase(): Promise<TestDatabase> {
+/** A fresh database with the newest schema and no rows, or a copy of another one that nobody is connected to. */
+export async function cloneDatabase({ from = templateName, as: name = `test_${randomBytes(8).toString('hex')}` } = {}): Promise<TestDatabase> {
   const services = inject('testServices')
-  const name = `test_${randomBytes(8).toString('hex')}`
   await asAdmin(services.adminUrl, async (client) => {
-    await client.query(`create database ${name} template ${templateName} owner lathkey_owner`)
+    await client.query(`create database ${name} template ${from} owner lathkey_owner`)
     await grantOnDatabase(client, name)
   })
   const cutConnections = () => asAdmin(services.adminUrl, async (client) => {
