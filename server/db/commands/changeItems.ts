@@ -65,16 +65,22 @@ export function moveItems(db: Db, actor: Person, attic: AtticRef, { moves, happe
 export function removeItem(db: Db, actor: Person, item: ItemRow, { removedOn, version }: AtticItemRemovalValue) {
   refuseFuture('removedOn', removedOn, actor)
   return db.transaction().execute(async (trx) => {
-    const before = await lockItem(trx, item)
-    await refuseBeforeLastStep(trx, 'removedOn', removedOn, item.id)
-    const after = await editRow<ItemRow>(trx, actor, {
-      table: 'atticItem', id: item.id, version, patch: { removedOn },
-      record: { organisationId: item.organisationId, unitId: item.unitId, subjectKind: 'item', action: 'item taken out of the attic' },
-    })
-    await appendLoadEvent(trx, actor, { item, kind: 'out', happenedOn: removedOn, deltaLb: -weightLb(before) })
+    const after = await takeOut(trx, actor, item, { removedOn, version })
     await judgeAttic(trx, actor, item.atticId)
     return after
   })
+}
+
+/** The same for callers that judge the attic themselves. */
+export async function takeOut(trx: Trx, actor: Person, item: ItemRow, { removedOn, version }: AtticItemRemovalValue): Promise<ItemRow> {
+  const before = await lockItem(trx, item)
+  await refuseBeforeLastStep(trx, 'removedOn', removedOn, item.id)
+  const after = await editRow<ItemRow>(trx, actor, {
+    table: 'atticItem', id: item.id, version, patch: { removedOn },
+    record: { organisationId: item.organisationId, unitId: item.unitId, subjectKind: 'item', action: 'item taken out of the attic' },
+  })
+  await appendLoadEvent(trx, actor, { item, kind: 'out', happenedOn: removedOn, deltaLb: -weightLb(before) })
+  return after
 }
 
 /** "All still here": somebody looked and the list holds. */

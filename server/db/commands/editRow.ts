@@ -3,7 +3,7 @@ import type { Db, Trx } from '../connect'
 import { appendRecord, type RecordActor } from './appendRecord'
 import { clash, notFound } from '../../utils/problems'
 
-type EditableTable = 'property' | 'unit' | 'room' | 'tenancy' | 'attic' | 'atticItem' | 'mark' | 'job' | 'organisation'
+type EditableTable = 'property' | 'unit' | 'room' | 'tenancy' | 'attic' | 'atticItem' | 'mark' | 'job' | 'organisation' | 'unloadTrial'
 
 interface Edit {
   table: EditableTable

@@ -1,7 +1,6 @@
 import type { MarkTrend } from '../../../shared/utils/movement/trend'
 import { markTrend } from '../../../shared/utils/movement/trend'
 import { trendOptionsFor } from '../../../shared/utils/movement/trendOptions'
-import { DEFAULT_SEASON_ALLOWANCE_MM } from '../../../shared/utils/movement/activity'
 import { widthClass } from '../../../shared/utils/movement/widthClass'
 import { findMarkFindings, type JudgedReading, type MarkJudgement } from '../../../shared/utils/upkeep/findMarkFindings'
 import { nextReading } from '../../../shared/utils/upkeep/readingPlan'
@@ -73,16 +72,14 @@ async function judgementOf(trx: Trx, mark: JudgedMark, rows: Readings, reports: 
     stain: mark.stainState ? { state: mark.stainState, seenOn: dayIn(mark.timeZone, new Date(reports.at(-1)?.receivedAt ?? mark.createdAt)) } : null,
     loadAbove: mark.aboveLb === null ? null : { totalLb: mark.aboveLb, utilisation: mark.aboveUtilisation },
     ceilingSpanMm: sagSpanMm ?? (sides.length > 0 ? Math.min(...sides) * MM_PER_FT : null),
+    morePops: mark.morePops,
     plaster: /plaster/i.test(mark.ceilingFinish),
     nextReading: nextReading({ reportedOn, activity: trend.activity, lastEventOn, closed: false }, rows, today),
   }
 }
 
 function trendOf(mark: JudgedMark, readings: JudgedReading[], framing: string | null, wallType: WallType | null): MarkTrend {
-  const options = trendOptionsFor({ kind: mark.kind, place: mark.place as MarkPlace | null, wallType, framing })
-  // The organisation's own allowance stands in for our default; the larger one under trusses stays.
-  const seasonAllowance = options.seasonAllowance === DEFAULT_SEASON_ALLOWANCE_MM ? mark.seasonAllowanceMm : options.seasonAllowance
-  return markTrend(readings, { ...options, seasonAllowance })
+  return markTrend(readings, trendOptionsFor({ kind: mark.kind, place: mark.place as MarkPlace | null, wallType, framing }, mark))
 }
 
 async function storeJudgement(trx: Trx, mark: JudgedMark, { trend, readings, nextReading: next }: MarkJudgement, rows: Readings) {

@@ -10,6 +10,8 @@ import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
+import * as hindsight from './0030Hindsight'
+import * as unloadTrials from './0031UnloadTrials'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -24,4 +26,6 @@ export const migrations: Record<string, Migration> = {
   '0009InvitationTerms': invitationTerms,
   '0012LookedBefore': lookedBefore,
   '0013FollowedChanges': followedChanges,
+  '0030Hindsight': hindsight,
+  '0031UnloadTrials': unloadTrials,
 }

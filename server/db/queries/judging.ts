@@ -3,6 +3,7 @@ import type { DangerSign, ObservationAnswers } from '../../../shared/types/mark'
 import type { UnitsOfMeasure } from '../../../shared/types/people'
 import type { Db } from '../connect'
 import type { findItemsIn } from './attics'
+import { limitColumns } from './limits'
 
 /** What a judgement reads. Rows become the shapes the calculations know. */
 
@@ -26,7 +27,7 @@ export const findJudgedMark = (db: Db, markId: string) =>
   db.selectFrom('mark as m').innerJoin('organisation as o', 'o.id', 'm.organisationId').innerJoin('room as r', 'r.id', 'm.roomId')
     .leftJoin('atticStatus as s', 's.atticId', 'm.atticId')
     .selectAll('m')
-    .select(['o.timeZone', 'o.seasonAllowanceMm', 'r.name as roomName', 'r.ceilingFinish', 'r.lengthFt', 'r.widthFt', 's.storedLb as aboveLb', 's.utilisation as aboveUtilisation'])
+    .select([...limitColumns, 'o.timeZone', 'r.name as roomName', 'r.ceilingFinish', 'r.lengthFt', 'r.widthFt', 's.storedLb as aboveLb', 's.utilisation as aboveUtilisation'])
     .where('m.id', '=', markId).executeTakeFirst()
 
 export type JudgedMark = NonNullable<Awaited<ReturnType<typeof findJudgedMark>>>

@@ -2,7 +2,6 @@ import type { Db } from '../connect'
 import type { Actor } from './actor'
 import type { MarkFacts, MarkPage, ReadingRow } from '../../../shared/types/markPage'
 import type { WallType } from '../../../shared/types/mark'
-import { DEFAULT_SEASON_ALLOWANCE_MM } from '../../../shared/utils/movement/activity'
 import { cluesFor } from '../../../shared/utils/movement/causeClues'
 import { loadLinks } from '../../../shared/utils/movement/loadLink'
 import type { TrendReading } from '../../../shared/utils/movement/series'
@@ -50,8 +49,5 @@ const measuredIn = (readings: ReadingRow[], segment: number): TrendReading[] =>
   readings.flatMap(({ segment: own, takenOn, value, sigma }) => own === segment && value !== null && sigma !== null ? [{ takenOn, value, sigma }] : [])
 
 function trendOf(mark: MarkFacts, around: Surroundings, points: TrendReading[], wallType: WallType | null, framing: string | null): MarkTrend {
-  const options = trendOptionsFor({ kind: mark.kind, place: mark.place, wallType, framing })
-  // The organisation's own allowance stands in for our default; the larger one under trusses stays.
-  const seasonAllowance = options.seasonAllowance === DEFAULT_SEASON_ALLOWANCE_MM ? around.seasonAllowanceMm : options.seasonAllowance
-  return markTrend(points, { ...options, seasonAllowance })
+  return markTrend(points, trendOptionsFor({ kind: mark.kind, place: mark.place, wallType, framing }, around))
 }

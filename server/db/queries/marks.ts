@@ -6,6 +6,7 @@ import type { MarkFacts, MarkRow } from '../../../shared/types/markPage'
 import type { Page } from '../../../shared/types/home'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 import { runningTotalLb } from './attics'
+import { limitColumns } from './limits'
 
 /** Risk first: wet and moving above all, then what is watched, then what has too few readings; mended and closed last. */
 const RISK = sql<number>`(case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
@@ -71,9 +72,9 @@ export const findMarkFacts = (db: Db, id: string) => markFacts.first(db, { id })
 
 const markSurroundings = compiledOnce((db, { id }: { id: string }) =>
   db.selectFrom('mark as m').innerJoin('room as r', 'r.id', 'm.roomId').innerJoin('unit as u', 'u.id', 'm.unitId')
-    .innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('organisation as g', 'g.id', 'm.organisationId').leftJoin('attic as a', 'a.id', 'm.atticId')
+    .innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('organisation as o', 'o.id', 'm.organisationId').leftJoin('attic as a', 'a.id', 'm.atticId')
     .select(['r.id as roomId', 'r.name as roomName', 'r.lengthFt', 'r.widthFt', 'u.id as unitId', 'u.name as unitName', 'p.id as propertyId', 'p.name as propertyName', 'p.yearBuilt',
-      'a.id as atticId', 'a.name as atticName', 'g.timeZone', 'g.contactPhone', 'g.seasonAllowanceMm'])
+      'a.id as atticId', 'a.name as atticName', 'o.timeZone', 'o.contactPhone', ...limitColumns])
     .where('m.id', '=', id))
 
 export const findMarkSurroundings = (db: Db, id: string) => markSurroundings.first(db, { id })

@@ -6,6 +6,7 @@ import { suddenRises } from '../../../shared/utils/movement/sudden'
 import { seriesOf } from '../../../shared/utils/movement/series'
 import { trendOptionsFor } from '../../../shared/utils/movement/trendOptions'
 import type { ReadingDetail } from '../commands/insertReading'
+import { limitColumns } from './limits'
 
 export const findReadingByKey = (trx: Trx, takenBy: string, clientKey: string) =>
   trx.selectFrom('reading').select(['id', 'markId']).where('takenBy', '=', takenBy).where('clientKey', '=', clientKey).executeTakeFirst()
@@ -33,15 +34,16 @@ export async function listReadings(db: Db, markId: string): Promise<ReadingRow[]
 
 /** What the person who took this reading is told; null-valued where it could not be measured. */
 export async function findReadingAnswer(db: Db, id: string): Promise<ReadingAnswer | undefined> {
-  const row = await db.selectFrom('reading as r').innerJoin('mark as m', 'm.id', 'r.markId')
-    .select(['r.id', 'r.markId', 'r.takenOn', 'r.receivedAt', 'r.value', 'r.segment', 'r.detail', 'm.activity', 'm.nextReadingOn', 'm.kind'])
+  const row = await db.selectFrom('reading as r').innerJoin('mark as m', 'm.id', 'r.markId').innerJoin('organisation as o', 'o.id', 'r.organisationId')
+    .select([...limitColumns, 'r.id', 'r.markId', 'r.takenOn', 'r.receivedAt', 'r.value', 'r.segment', 'r.detail', 'm.activity', 'm.nextReadingOn', 'm.kind'])
     .where('r.id', '=', id).executeTakeFirst()
   if (!row) return undefined
-  const { segment, detail, kind, ...answer } = row
+  const { id: readingId, markId, takenOn, receivedAt, value, segment, detail, kind, activity, nextReadingOn } = row
+  const answer = { id: readingId, markId, takenOn, receivedAt, value, activity, nextReadingOn }
   const points = await db.selectFrom('reading').select(['takenOn', sql<number>`value`.as('value'), sql<number>`sigma`.as('sigma')])
     .where('markId', '=', row.markId).where('segment', '=', segment).where('value', 'is not', null).execute()
-  const { leastJump } = trendOptionsFor({ kind, place: null, wallType: null, framing: null })
-  const rise = suddenRises(seriesOf(points), leastJump).find(jump => jump.takenOn === row.takenOn)
+  const { leastJump, jumpSigmas } = trendOptionsFor({ kind, place: null, wallType: null, framing: null }, row)
+  const rise = suddenRises(seriesOf(points), leastJump, jumpSigmas).find(jump => jump.takenOn === row.takenOn)
   const { reportId } = detail as ReadingDetail
   const report = reportId
     ? await db.selectFrom('observation').select(['id', 'number', 'dangerSigns']).where('id', '=', reportId).$castTo<NonNullable<ReadingAnswer['report']>>().executeTakeFirst()

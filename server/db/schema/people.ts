@@ -22,6 +22,14 @@ export interface OrganisationTable {
   entryNoticeHours: Defaulted<number>
   reviewHour: Defaulted<number>
   seasonAllowanceMm: Defaulted<number>
+  trussAllowanceMm: Defaulted<number>
+  leastReadings: Defaulted<number>
+  leastDays: Defaulted<number>
+  pRising: Defaulted<number>
+  dormantWithinMmPerYear: Defaulted<number>
+  leastJumpMm: Defaulted<number>
+  jumpSigmas: Defaulted<number>
+  morePops: Defaulted<number>
   isDemo: Defaulted<boolean>
   lastNumber: Defaulted<number>
   createdAt: Instant

@@ -4,6 +4,7 @@ import type { Day, Defaulted, Instant, Json } from '../schema'
 export interface UpkeepTables {
   finding: FindingTable
   findingEvent: FindingEventTable
+  findingHindsight: FindingHindsightTable
   job: JobTable
   dueItem: DueItemTable
   message: MessageTable
@@ -42,6 +43,17 @@ export interface FindingEventTable {
   reason: string | null
   actorId: string | null
   happenedAt: Instant
+}
+
+/** Append-only: the newest one of a finding counts. */
+export interface FindingHindsightTable {
+  id: string
+  organisationId: string
+  findingId: string
+  outcome: 'right' | 'wrong'
+  reason: string
+  judgedBy: string
+  judgedAt: Instant
 }
 
 export interface JobTable {

@@ -4,15 +4,6 @@ import type { SeasonFit } from './seasonFit'
 import { TWELVE_MONTHS_DAYS } from './series'
 import type { TheilSen } from './theilSen'
 
-/** All of these are ours: no published limit in mm a year exists for ceilings. */
-export const ACTIVITY_LEAST_READINGS = 6
-export const ACTIVITY_LEAST_DAYS = 90
-export const ACTIVITY_P_RISING = 0.01
-export const DEFAULT_SEASON_ALLOWANCE_MM = 1.5
-/** Gaps up to ¾ in (19 mm) at interior walls under trusses are published (SBCA, partition separation). */
-export const TRUSS_UPLIFT_ALLOWANCE_MM = 20
-export const DORMANT_WITHIN_PER_YEAR = 0.5
-
 export interface ActivityInput {
   spanDays: number
   sigma: number
@@ -21,6 +12,7 @@ export interface ActivityInput {
   season: SeasonFit | null
   seasonAllowance: number
   dormantWithinPerYear: number
+  pRising: number
   /** Slope times span, in the unit of the readings. */
   rise: number
 }
@@ -33,7 +25,7 @@ function outgrowsSeason(input: ActivityInput): boolean {
 
 /** Activity of a series that already has enough readings over enough days. */
 export function activityOf(input: ActivityInput): Exclude<Activity, 'too-few-readings'> {
-  const rising = input.mannKendall.pRising < ACTIVITY_P_RISING && input.rise >= 2 * input.sigma
+  const rising = input.mannKendall.pRising < input.pRising && input.rise >= 2 * input.sigma
   if (rising && outgrowsSeason(input)) return 'active'
   const [low, high] = input.slope.interval
   const quiet = low >= -input.dormantWithinPerYear && high <= input.dormantWithinPerYear

@@ -1,5 +1,4 @@
 import { dayFromNumber } from '../days'
-import { ACTIVITY_LEAST_DAYS, ACTIVITY_LEAST_READINGS } from './activity'
 import { leastSquares } from './leastSquares'
 import { seasonColumns } from './seasonFit'
 import { DAYS_PER_YEAR, yearsOf, type SeriesPoint } from './series'
@@ -20,14 +19,16 @@ function slopeVariance(years: readonly number[], sigma: number, seasonAllowance:
   return leastSquares(columns, columns[0]!)?.unitVariances[1] ?? Infinity
 }
 
+export interface WantedReadings { seasonAllowance: number, leastReadings: number, leastDays: number }
+
 /** Day the next reading tells most about the rate: the earliest nearly as good as the best within a quarter. */
-export function nextBestReadingOn(points: readonly SeriesPoint[], sigma: number, seasonAllowance: number): string | null {
+export function nextBestReadingOn(points: readonly SeriesPoint[], sigma: number, { seasonAllowance, leastReadings, leastDays }: WantedReadings): string | null {
   const last = points.at(-1)
   if (!last) return null
   const first = points[0]!
-  const missing = ACTIVITY_LEAST_READINGS - points.length
+  const missing = leastReadings - points.length
   if (missing > 0) {
-    const daysLeft = Math.max(0, first.day + ACTIVITY_LEAST_DAYS - last.day)
+    const daysLeft = Math.max(0, first.day + leastDays - last.day)
     return dayFromNumber(last.day + Math.max(SOONEST_DAYS, Math.ceil(daysLeft / missing)))
   }
   const years = yearsOf(points)

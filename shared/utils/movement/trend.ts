@@ -1,17 +1,26 @@
 import { addDays, dayFromNumber } from '../days'
 import type { Activity } from '../../types/mark'
-import { ACTIVITY_LEAST_DAYS, ACTIVITY_LEAST_READINGS, activityOf, DEFAULT_SEASON_ALLOWANCE_MM, DORMANT_WITHIN_PER_YEAR } from './activity'
+import { OUR_LIMITS } from '../../types/limits'
+import { activityOf } from './activity'
 import { detectableRate, type DetectableRate } from './detectableRate'
 import { mannKendall, varianceOfS, type MannKendall } from './mannKendall'
 import { nextBestReadingOn } from './nextBestReading'
 import { Z_975 } from './normal'
 import { seasonFit, type SeasonFit } from './seasonFit'
 import { DAYS_PER_YEAR, seriesOf, seriesSigma, spanDaysOf, timeSumOfSquares, yearsOf, type SeriesPoint, type TrendReading } from './series'
-import { LEAST_JUMP_MM, suddenRises, type SuddenRise } from './sudden'
+import { suddenRises, type SuddenRise } from './sudden'
 import { medianOf, theilSen } from './theilSen'
 
 /** In the unit of the readings; the defaults are for crack widths and sags in mm. */
-export interface TrendOptions { seasonAllowance?: number, dormantWithinPerYear?: number, leastJump?: number }
+export interface TrendOptions {
+  seasonAllowance?: number
+  dormantWithinPerYear?: number
+  leastJump?: number
+  jumpSigmas?: number
+  leastReadings?: number
+  leastDays?: number
+  pRising?: number
+}
 
 interface TrendBasis {
   readingCount: number
@@ -59,7 +68,7 @@ type Settings = Required<TrendOptions>
 
 function basisOf(points: SeriesPoint[], settings: Settings): TrendBasis {
   const sigma = points.length === 0 ? null : seriesSigma(points)
-  const rises = suddenRises(points, settings.leastJump)
+  const rises = suddenRises(points, settings.leastJump, settings.jumpSigmas)
   const lastOn = points.length === 0 ? null : dayFromNumber(points.at(-1)!.day)
   return {
     readingCount: points.length,
@@ -69,12 +78,12 @@ function basisOf(points: SeriesPoint[], settings: Settings): TrendBasis {
     sudden: rises.find(rise => rise.takenOn === lastOn) ?? null,
     suddenRises: rises,
     detectable: sigma === null ? null : detectableRate(points, sigma, settings.seasonAllowance),
-    nextBestOn: sigma === null ? null : nextBestReadingOn(points, sigma, settings.seasonAllowance),
+    nextBestOn: sigma === null ? null : nextBestReadingOn(points, sigma, settings),
   }
 }
 
-function enough(points: SeriesPoint[]): boolean {
-  return points.length >= ACTIVITY_LEAST_READINGS && spanDaysOf(points) >= ACTIVITY_LEAST_DAYS
+function enough(points: SeriesPoint[], { leastReadings, leastDays }: Settings): boolean {
+  return points.length >= leastReadings && spanDaysOf(points) >= leastDays
 }
 
 function judge(points: SeriesPoint[], settings: Settings) {
@@ -92,7 +101,7 @@ function judge(points: SeriesPoint[], settings: Settings) {
 }
 
 function activityAt(points: SeriesPoint[], settings: Settings): Activity {
-  return enough(points) ? judge(points, settings).activity : 'too-few-readings'
+  return enough(points, settings) ? judge(points, settings).activity : 'too-few-readings'
 }
 
 /** Walks back from the newest reading while each earlier look was active too. */
@@ -102,12 +111,26 @@ function activeSinceOf(points: SeriesPoint[], settings: Settings): string {
   return dayFromNumber(points[count - 1]!.day)
 }
 
-function settingsOf(options: TrendOptions): Settings {
-  return {
-    seasonAllowance: options.seasonAllowance ?? DEFAULT_SEASON_ALLOWANCE_MM,
-    dormantWithinPerYear: options.dormantWithinPerYear ?? DORMANT_WITHIN_PER_YEAR,
-    leastJump: options.leastJump ?? LEAST_JUMP_MM,
+const OURS: Settings = {
+  seasonAllowance: OUR_LIMITS.seasonAllowanceMm,
+  dormantWithinPerYear: OUR_LIMITS.dormantWithinMmPerYear,
+  leastJump: OUR_LIMITS.leastJumpMm,
+  jumpSigmas: OUR_LIMITS.jumpSigmas,
+  leastReadings: OUR_LIMITS.leastReadings,
+  leastDays: OUR_LIMITS.leastDays,
+  pRising: OUR_LIMITS.pRising,
+}
+
+const settingsOf = (options: TrendOptions): Settings => ({ ...OURS, ...options })
+
+/** The first day on which the readings up to then were already active; null if there is none. */
+export function activeFromOn(readings: readonly TrendReading[], options: TrendOptions = {}): string | null {
+  const settings = settingsOf(options)
+  const points = seriesOf(readings)
+  for (let count = settings.leastReadings; count <= points.length; count++) {
+    if (activityAt(points.slice(0, count), settings) === 'active') return dayFromNumber(points[count - 1]!.day)
   }
+  return null
 }
 
 /** The activity alone, as `markTrend` gives it, at a small part of the work. */
@@ -124,14 +147,14 @@ export function markTrend(readings: readonly TrendReading[], options: TrendOptio
   const points = seriesOf(readings)
   const basis = basisOf(points, settings)
   const first = points[0]
-  if (!first || !enough(points)) {
+  if (!first || !enough(points, settings)) {
     return {
       ...basis,
       kind: 'too few readings',
       activity: 'too-few-readings',
-      needed: ACTIVITY_LEAST_READINGS,
-      missing: Math.max(0, ACTIVITY_LEAST_READINGS - points.length),
-      enoughOn: first ? addDays(dayFromNumber(first.day), ACTIVITY_LEAST_DAYS) : null,
+      needed: settings.leastReadings,
+      missing: Math.max(0, settings.leastReadings - points.length),
+      enoughOn: first ? addDays(dayFromNumber(first.day), settings.leastDays) : null,
     }
   }
   const judged = judge(points, settings)

@@ -1,6 +1,5 @@
+import { OUR_LIMITS, type MovementLimits } from '../../types/limits'
 import type { MarkKind, MarkPlace, WallType } from '../../types/mark'
-import { DEFAULT_SEASON_ALLOWANCE_MM, DORMANT_WITHIN_PER_YEAR, TRUSS_UPLIFT_ALLOWANCE_MM } from './activity'
-import { LEAST_JUMP_MM } from './sudden'
 import type { TrendOptions } from './trend'
 
 export interface MarkSetting {
@@ -11,18 +10,21 @@ export interface MarkSetting {
   framing: string | null
 }
 
-/** Ours. A stain is read in centimetres rather than tenths of a millimetre. */
+/** Ours. A stain is read in centimetres rather than tenths of a millimetre, so an organisation's millimetres do not apply. */
 const STAIN_OPTIONS = { seasonAllowance: 30, dormantWithinPerYear: 20, leastJump: 40 }
 
-/** What the activity rule allows this mark: the large season allowance only at interior wall corners under trusses. */
-export function trendOptionsFor(setting: MarkSetting): Required<TrendOptions> {
-  if (setting.kind === 'stain') return STAIN_OPTIONS
+/** What the activity rule allows this mark under an organisation's limits: the large season allowance only at interior wall corners under trusses. */
+export function trendOptionsFor(setting: MarkSetting, limits: MovementLimits = OUR_LIMITS): Required<TrendOptions> {
+  const { leastReadings, leastDays, pRising, jumpSigmas } = limits
+  const shared = { leastReadings, leastDays, pRising, jumpSigmas }
+  if (setting.kind === 'stain') return { ...shared, ...STAIN_OPTIONS }
   const uplift = setting.kind === 'crack' && setting.framing === 'trusses'
     && setting.place === 'wall-ceiling-corner' && setting.wallType === 'interior'
   return {
-    seasonAllowance: uplift ? TRUSS_UPLIFT_ALLOWANCE_MM : DEFAULT_SEASON_ALLOWANCE_MM,
-    dormantWithinPerYear: DORMANT_WITHIN_PER_YEAR,
-    leastJump: LEAST_JUMP_MM,
+    ...shared,
+    seasonAllowance: uplift ? Math.max(limits.trussAllowanceMm, limits.seasonAllowanceMm) : limits.seasonAllowanceMm,
+    dormantWithinPerYear: limits.dormantWithinMmPerYear,
+    leastJump: limits.leastJumpMm,
   }
 }
 

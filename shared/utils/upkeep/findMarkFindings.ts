@@ -32,6 +32,8 @@ export interface MarkJudgement {
   /** Width the sag is judged over when a reading names none; null when unknown. */
   ceilingSpanMm: number | null
   plaster: boolean
+  /** So many more pops than at the least count are growth: the organisation's limit. */
+  morePops: number
   nextReading: NextReading | null
 }
 
@@ -41,7 +43,8 @@ export const SAG_DIVISORS = { board: 240, plaster: 360, urgent: 120 } as const
 const NEW_MARK_DAYS = 90
 const SUDDEN_STANDS_DAYS = 30
 const LEAST_LOAD_ABOVE_LB = 50
-const POPS_MORE = 3
+/** So many pops in one row are a line: a danger sign where they appear together. */
+const POPS_IN_LINE = 3
 const READING_GRACE_DAYS = 7
 const CLASS_NEEDS_SIGMAS = 2
 
@@ -89,15 +92,15 @@ function widthFindings({ mark, subject, inOrder }: Judged): Finding[] {
   return [{ rule: 'width-class-up', subject, severity: toClass >= 3 ? 'attention' : 'notice', evidence, adviceCode: 'watch-and-check-above' }]
 }
 
-function popFindings({ mark, subject, inOrder }: Judged): Finding[] {
+function popFindings({ mark, subject, inOrder, morePops }: Judged): Finding[] {
   const last = inOrder.at(-1)
   if (mark.kind !== 'nail-pops' || !last) return []
   const findings: Finding[] = []
   const least = Math.min(...inOrder.map(reading => reading.value))
-  if (last.value - least >= POPS_MORE) {
+  if (last.value - least >= morePops) {
     findings.push({ rule: 'nail-pops-growing', subject, severity: 'attention', evidence: { fromCount: least, toCount: last.value, takenOn: last.takenOn }, adviceCode: 'look-then-engineer' })
   }
-  if (mark.shape === 'bumps-in-a-row' && last.value >= POPS_MORE) {
+  if (mark.shape === 'bumps-in-a-row' && last.value >= POPS_IN_LINE) {
     findings.push({ rule: 'nail-pops-in-line', subject, severity: 'attention', evidence: { count: last.value, takenOn: last.takenOn }, adviceCode: 'look-then-engineer' })
   }
   return findings

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { addDays, daysBetween } from '../../../shared/utils/days'
+import { OUR_LIMITS } from '../../../shared/types/limits'
 import { METHODS_BY_KIND, READING_METHODS, WIDTH_COMPARISONS } from '../../../shared/types/mark'
 import { detectableRate } from '../../../shared/utils/movement/detectableRate'
 import { leastSquares } from '../../../shared/utils/movement/leastSquares'
@@ -14,6 +15,8 @@ import { newestSegment, trendOptionsFor } from '../../../shared/utils/movement/t
 import { comparisonReading, rangeReading, WIDTH_RANGES } from '../../../shared/utils/movement/widthComparisons'
 import { widthClass } from '../../../shared/utils/movement/widthClass'
 import { monthly, readingsOn } from './seeded'
+
+const plainCrack = { kind: 'crack', place: null, wallType: null, framing: null } as const
 
 describe('Uncertainty of a reading', () => {
   it('gets smaller from a guess to calipers', () => {
@@ -152,7 +155,7 @@ describe('Detectable rate and next best day', () => {
   it('the next best day lies between a week and a quarter after the last reading', () => {
     for (let n = 1; n <= 20; n++) {
       const readings = monthly(n, () => 1)
-      const on = nextBestReadingOn(seriesOf(readings), 0.2, 1.5)!
+      const on = nextBestReadingOn(seriesOf(readings), 0.2, trendOptionsFor(plainCrack))!
       const gap = daysBetween(readings.at(-1)!.takenOn, on)
       expect(gap).toBeGreaterThanOrEqual(7)
       expect(gap).toBeLessThanOrEqual(91)
@@ -160,7 +163,7 @@ describe('Detectable rate and next best day', () => {
   })
 
   it('while readings are missing they are spread so that the sixth ends the 90 days', () => {
-    expect(nextBestReadingOn(seriesOf(readingsOn([0], [1])), 0.2, 1.5)).toBe(addDays('2026-01-01', 18))
+    expect(nextBestReadingOn(seriesOf(readingsOn([0], [1])), 0.2, trendOptionsFor(plainCrack))).toBe(addDays('2026-01-01', 18))
   })
 })
 
@@ -172,6 +175,12 @@ describe('What a mark is allowed', () => {
     expect(trendOptionsFor({ ...corner, framing: 'rafters-and-joists' }).seasonAllowance).toBe(1.5)
     expect(trendOptionsFor({ ...corner, place: 'middle' }).seasonAllowance).toBe(1.5)
     expect(trendOptionsFor({ ...corner, kind: 'sag' }).seasonAllowance).toBe(1.5)
+  })
+
+  it('an organisation’s own limits stand in for ours, the larger allowance under trusses excepted', () => {
+    const own = { ...OUR_LIMITS, seasonAllowanceMm: 0.8, leastReadings: 8, leastDays: 120, pRising: 0.02, leastJumpMm: 0.7, jumpSigmas: 3, dormantWithinMmPerYear: 0.3 }
+    expect(trendOptionsFor(plainCrack, own)).toEqual({ seasonAllowance: 0.8, dormantWithinPerYear: 0.3, leastJump: 0.7, jumpSigmas: 3, leastReadings: 8, leastDays: 120, pRising: 0.02 })
+    expect(trendOptionsFor({ kind: 'crack', place: 'wall-ceiling-corner', wallType: 'interior', framing: 'trusses' }, own).seasonAllowance).toBe(20)
   })
 
   it('a stain is judged in centimetres', () => {

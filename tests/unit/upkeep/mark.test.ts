@@ -11,7 +11,7 @@ const YOUNG = { firstSeenOn: '2024-06-01', reportedOn: '2026-01-01' }
 function judge(kind: MarkJudgement['mark']['kind'], readings: JudgedReading[], changes: Partial<MarkJudgement> = {}): MarkJudgement {
   return {
     mark: { id: 'm1', kind, shape: null, ...LONG_KNOWN }, today: readings.at(-1)?.takenOn ?? '2026-06-01', readings, trend: markTrend(readings),
-    dangerSigns: [], dangerClearedOn: null, stain: null, loadAbove: null, ceilingSpanMm: null, plaster: false, nextReading: null, ...changes,
+    dangerSigns: [], dangerClearedOn: null, stain: null, loadAbove: null, ceilingSpanMm: null, plaster: false, morePops: 3, nextReading: null, ...changes,
   }
 }
 

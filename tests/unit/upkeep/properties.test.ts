@@ -97,7 +97,7 @@ describe('Whatever a mark shows', () => {
     return {
       mark: { id: 'm', kind, shape: null, firstSeenOn: '2025-01-01', reportedOn: '2025-01-01' }, today: TODAY, readings: dated, trend: markTrend(dated),
       dangerSigns: sign === null ? [] : [{ sign, seenOn: '2026-11-01' }], dangerClearedOn: null, stain: null,
-      loadAbove: aboveLb === null ? null : { totalLb: aboveLb, utilisation: aboveLb / 1000 }, ceilingSpanMm: span, plaster: false, nextReading: null,
+      loadAbove: aboveLb === null ? null : { totalLb: aboveLb, utilisation: aboveLb / 1000 }, ceilingSpanMm: span, plaster: false, morePops: 3, nextReading: null,
     }
   })
 
