@@ -1,20 +1,35 @@
 /** Days are 'YYYY-MM-DD' strings; arithmetic is done on whole days counted from 1 Jan 1970, so no clock or time zone enters. */
 
 const MS_PER_DAY = 86_400_000
-const SHAPE = /^(\d{4})-(\d{2})-(\d{2})$/
+const SHAPE = /^\d{4}-\d{2}-\d{2}$/
+const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31]
+
+const isLeapYear = (year: number) => year % 4 === 0 && (year % 100 !== 0 || year % 400 === 0)
+
+/** Counted, not parsed: a trend asks this of every reading. Undefined for anything that is no day of the calendar. */
+function countDays(on: string): number | undefined {
+  if (!SHAPE.test(on)) return undefined
+  const year = Number(on.slice(0, 4))
+  const month = Number(on.slice(5, 7))
+  const day = Number(on.slice(8))
+  const leap = isLeapYear(year) ? 1 : 0
+  if (month < 1 || month > 12 || day < 1 || day > MONTH_DAYS[month - 1]! + (month === 2 ? leap : 0)) return undefined
+  // Years run from March, so that the leap day is the last one; 719,468 days lie before 1 Jan 1970.
+  const shifted = month > 2 ? year : year - 1
+  const fromMarch = Math.floor((153 * ((month + 9) % 12) + 2) / 5) + day - 1
+  return 365 * shifted + Math.floor(shifted / 4) - Math.floor(shifted / 100) + Math.floor(shifted / 400) + fromMarch - 719_468
+}
 
 /** True for a day that exists in the calendar, written 'YYYY-MM-DD'. */
 export function isDay(on: string): boolean {
-  const parts = SHAPE.exec(on)
-  if (!parts) return false
-  const date = new Date(`${on}T00:00:00Z`)
-  return !Number.isNaN(date.getTime()) && date.toISOString().slice(0, 10) === on
+  return countDays(on) !== undefined
 }
 
 /** Whole days since 1 Jan 1970. Throws RangeError for anything that is not a day. */
 export function dayNumber(on: string): number {
-  if (!isDay(on)) throw new RangeError(`Not a day: ${JSON.stringify(on)}`)
-  return Date.parse(`${on}T00:00:00Z`) / MS_PER_DAY
+  const days = countDays(on)
+  if (days === undefined) throw new RangeError(`Not a day: ${JSON.stringify(on)}`)
+  return days
 }
 
 export function dayFromNumber(day: number): string {

@@ -17,21 +17,37 @@ export const MANN_KENDALL_LEAST = 4
 /** Exact distribution up to here when there are no ties (EPA QA/G-9S gives tables to 10). */
 const EXACT_UP_TO = 10
 
-/** Var(S) = [n(n−1)(2n+5) − Σt(t−1)(2t+5)]/18 over groups of t equal values (EPA QA/G-9S §4.3.4). */
-export function varianceOfS(values: readonly number[]): number {
-  const groups = new Map<number, number>()
-  for (const value of values) groups.set(value, (groups.get(value) ?? 0) + 1)
-  const term = (m: number) => m * (m - 1) * (2 * m + 5)
-  const ties = [...groups.values()].reduce((sum, size) => sum + term(size), 0)
-  return (term(values.length) - ties) / 18
+const term = (m: number) => m * (m - 1) * (2 * m + 5)
+
+/** What the test is made of: it can be carried on from one reading to the next. */
+export interface KendallCount { n: number, s: number, tieTerms: number, hasTies: boolean }
+
+/** The count of the first value, of the first two, and so on. */
+export function kendallCounts(values: ArrayLike<number>): KendallCount[] {
+  const sizes = new Map<number, number>()
+  const counts: KendallCount[] = []
+  let s = 0
+  let tieTerms = 0
+  for (let j = 0; j < values.length; j++) {
+    const value = values[j]!
+    for (let i = 0; i < j; i++) s += Math.sign(value - values[i]!)
+    const size = sizes.get(value) ?? 0
+    sizes.set(value, size + 1)
+    tieTerms += term(size + 1) - term(size)
+    counts.push({ n: j + 1, s, tieTerms, hasTies: sizes.size < j + 1 })
+  }
+  return counts
 }
 
-export function kendallS(values: readonly number[]): number {
-  let s = 0
-  for (let i = 0; i < values.length; i++) {
-    for (let j = i + 1; j < values.length; j++) s += Math.sign(values[j]! - values[i]!)
-  }
-  return s
+/** Var(S) = [n(n−1)(2n+5) − Σt(t−1)(2t+5)]/18 over groups of t equal values (EPA QA/G-9S §4.3.4). */
+const varianceOf = ({ n, tieTerms }: KendallCount) => (term(n) - tieTerms) / 18
+
+export function varianceOfS(values: readonly number[]): number {
+  const sizes = new Map<number, number>()
+  for (const value of values) sizes.set(value, (sizes.get(value) ?? 0) + 1)
+  let tieTerms = 0
+  for (const size of sizes.values()) tieTerms += term(size)
+  return varianceOf({ n: values.length, s: 0, tieTerms, hasTies: false })
 }
 
 /** Number of orderings of n different values with 0, 1, 2 … falling pairs. */
@@ -47,11 +63,30 @@ function orderingsByFallingPairs(n: number): number[] {
   return counts
 }
 
+const ORDERINGS = Array.from({ length: EXACT_UP_TO + 1 }, (_, n) => orderingsByFallingPairs(n))
+
 function exactChanceAtLeast(s: number, n: number): number {
-  const counts = orderingsByFallingPairs(n)
+  const counts = ORDERINGS[n]!
   const pairs = (n * (n - 1)) / 2
-  const total = counts.reduce((sum, count) => sum + count, 0)
-  return counts.reduce((sum, count, falling) => (pairs - 2 * falling >= s ? sum + count : sum), 0) / total
+  let atLeast = 0
+  let total = 0
+  counts.forEach((count, falling) => {
+    total += count
+    if (pairs - 2 * falling >= s) atLeast += count
+  })
+  return atLeast / total
+}
+
+/** The test from its counts; null below 4 values. */
+export function testCounts(count: KendallCount): MannKendall | null {
+  const { n, s, hasTies } = count
+  if (n < MANN_KENDALL_LEAST) return null
+  const varS = varianceOf(count)
+  const z = varS === 0 ? 0 : (s - Math.sign(s)) / Math.sqrt(varS)
+  if (n <= EXACT_UP_TO && !hasTies) {
+    return { s, varS, z, p: Math.min(1, 2 * exactChanceAtLeast(Math.abs(s), n)), pRising: exactChanceAtLeast(s, n), exact: true }
+  }
+  return { s, varS, z, p: Math.min(1, 2 * normalBelow(-Math.abs(z))), pRising: normalBelow(-z), exact: false }
 }
 
 /**
@@ -59,15 +94,6 @@ function exactChanceAtLeast(s: number, n: number): number {
  * Exact for n ≤ 10 without ties. No answer (null) below 4 values.
  */
 export function mannKendall(values: readonly number[]): MannKendall | null {
-  const n = values.length
-  if (n < MANN_KENDALL_LEAST) return null
-  const s = kendallS(values)
-  const varS = varianceOfS(values)
-  const z = varS === 0 ? 0 : (s - Math.sign(s)) / Math.sqrt(varS)
-  const exact = n <= EXACT_UP_TO && new Set(values).size === n
-  if (exact) {
-    const p = Math.min(1, 2 * exactChanceAtLeast(Math.abs(s), n))
-    return { s, varS, z, p, pRising: exactChanceAtLeast(s, n), exact }
-  }
-  return { s, varS, z, p: Math.min(1, 2 * normalBelow(-Math.abs(z))), pRising: normalBelow(-z), exact }
+  const last = kendallCounts(values).at(-1)
+  return last ? testCounts(last) : null
 }

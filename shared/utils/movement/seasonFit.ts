@@ -1,6 +1,6 @@
-import { leastSquares } from './leastSquares'
+import { leastSquares, type LeastSquaresFit } from './leastSquares'
 import { Z_975 } from './normal'
-import { DAYS_PER_YEAR, spanDaysOf, seriesSigma, TWELVE_MONTHS_DAYS, yearsOf, type SeriesPoint } from './series'
+import { DAYS_PER_YEAR, seriesSigma, TWELVE_MONTHS_DAYS, yearsOf, type SeriesPoint } from './series'
 import { tQuantile975 } from './tQuantile'
 
 export interface SeasonFit {
@@ -34,21 +34,32 @@ export function seasonColumns(years: readonly number[]): number[][] {
  * No answer (null) below 12 months or 8 readings, or when the dates cannot tell season from slope.
  */
 export function seasonFit(points: readonly SeriesPoint[]): SeasonFit | null {
-  if (points.length < SEASON_LEAST_READINGS || spanDaysOf(points) < TWELVE_MONTHS_DAYS) return null
-  const years = yearsOf(points)
-  const fit = leastSquares(seasonColumns(years), points.map(point => point.value))
-  if (!fit) return null
+  return seasonFits(points)(points.length)
+}
+
+/** The same for the first so many points of one series; the model's columns are laid out once. */
+export function seasonFits(points: readonly SeriesPoint[]): (count: number) => SeasonFit | null {
+  const columns = seasonColumns(yearsOf(points)).map(column => new Float64Array(column))
+  const values = new Float64Array(points.map(point => point.value))
+  return (count) => {
+    if (count < SEASON_LEAST_READINGS || points[count - 1]!.day - points[0]!.day < TWELVE_MONTHS_DAYS) return null
+    const fit = leastSquares(columns.map(column => column.subarray(0, count)), values.subarray(0, count))
+    return fit && asSeasonFit(fit, points[0]!.day, seriesSigma(points.slice(0, count)))
+  }
+}
+
+function asSeasonFit(fit: LeastSquaresFit, startDay: number, sigma: number): SeasonFit {
   const [, slopePerYear = 0, sine = 0, cosine = 0] = fit.coefficients
   const unit = Math.sqrt(fit.unitVariances[1]!)
   const residualSd = Math.sqrt(fit.residualSumOfSquares / fit.degreesOfFreedom)
-  const margin = Math.max(tQuantile975(fit.degreesOfFreedom) * residualSd, Z_975 * seriesSigma(points)) * unit
+  const margin = Math.max(tQuantile975(fit.degreesOfFreedom) * residualSd, Z_975 * sigma) * unit
   const highestAtYears = Math.atan2(sine, cosine) / (2 * Math.PI)
   return {
     slopePerYear,
-    standardError: Math.max(residualSd, seriesSigma(points)) * unit,
+    standardError: Math.max(residualSd, sigma) * unit,
     slopeAtLeast: slopePerYear - margin,
     peakToPeak: 2 * Math.hypot(sine, cosine),
-    highestOnDayOfYear: dayOfYear(points[0]!.day + highestAtYears * DAYS_PER_YEAR),
+    highestOnDayOfYear: dayOfYear(startDay + highestAtYears * DAYS_PER_YEAR),
     residualSd,
   }
 }

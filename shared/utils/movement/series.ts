@@ -21,13 +21,21 @@ export function seriesOf(readings: readonly TrendReading[]): SeriesPoint[] {
     if (!Number.isFinite(reading.value)) throw new RangeError(`Reading value is not a number: ${reading.value}`)
     if (!(Number.isFinite(reading.sigma) && reading.sigma > 0)) throw new RangeError(`Reading sigma must be above zero: ${reading.sigma}`)
     const day = dayNumber(reading.takenOn)
-    byDay.set(day, [...(byDay.get(day) ?? []), reading])
+    const same = byDay.get(day)
+    if (same) same.push(reading)
+    else byDay.set(day, [reading])
   }
-  return [...byDay.entries()].sort(([a], [b]) => a - b).map(([day, same]) => ({
+  return [...byDay].sort(([a], [b]) => a - b).map(([day, same]) => pointOf(day, same))
+}
+
+function pointOf(day: number, same: readonly TrendReading[]): SeriesPoint {
+  const [first] = same
+  if (same.length === 1) return { day, value: first!.value, sigma: first!.sigma }
+  return {
     day,
     value: same.reduce((sum, reading) => sum + reading.value, 0) / same.length,
     sigma: Math.sqrt(same.reduce((sum, reading) => sum + reading.sigma ** 2, 0)) / same.length,
-  }))
+  }
 }
 
 /** Root mean square of the points' uncertainties: the σ of the series. */

@@ -1,7 +1,6 @@
 import { OUR_LIMITS } from '../../types/limits'
 import { dayFromNumber } from '../days'
 import type { SeriesPoint } from './series'
-import { medianOf } from './theilSen'
 
 export interface SuddenRise {
   takenOn: string
@@ -19,13 +18,23 @@ const BASELINE_READINGS = 3
  * σ is the greater of the reading's own and the coarsest of the ones before, so that a guess followed by calipers raises no alarm.
  */
 export function suddenRises(points: readonly SeriesPoint[], leastJump = OUR_LIMITS.leastJumpMm, jumpSigmas = OUR_LIMITS.jumpSigmas): SuddenRise[] {
-  return points.flatMap((point, index) => {
+  const rises: SuddenRise[] = []
+  for (let index = 1; index < points.length; index++) {
+    const point = points[index]!
     const before = points.slice(Math.max(0, index - BASELINE_READINGS), index)
-    if (before.length === 0) return []
-    const baseline = medianOf(before.map(earlier => earlier.value))
-    const sigma = Math.max(point.sigma, ...before.map(earlier => earlier.sigma))
+    const baseline = medianOfThree(before)
+    const sigma = before.reduce((most, earlier) => Math.max(most, earlier.sigma), point.sigma)
     const threshold = Math.max(leastJump, jumpSigmas * sigma)
     const rise = point.value - baseline
-    return rise > threshold ? [{ takenOn: dayFromNumber(point.day), value: point.value, baseline, rise, threshold }] : []
-  })
+    if (rise > threshold) rises.push({ takenOn: dayFromNumber(point.day), value: point.value, baseline, rise, threshold })
+  }
+  return rises
+}
+
+/** Of one to three points. */
+function medianOfThree([first, second = first, third]: SeriesPoint[]): number {
+  const a = first!.value
+  const b = second!.value
+  if (third === undefined) return (a + b) / 2
+  return Math.max(Math.min(a, b), Math.min(Math.max(a, b), third.value))
 }

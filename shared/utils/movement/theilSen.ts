@@ -12,7 +12,7 @@ function medianOfSorted(sorted: ArrayLike<number>): number {
 }
 
 export function medianOf(values: readonly number[]): number {
-  return medianOfSorted(Float64Array.from(values).sort())
+  return medianOfSorted(new Float64Array(values).sort())
 }
 
 /** Value at a rank counted from 1, between ranks by a straight line, held to the ends. */
@@ -29,16 +29,17 @@ function atRank(sorted: ArrayLike<number>, rank: number): number {
  * `least` is the narrowest half-width the interval may have. No answer (null) without two different times.
  */
 export function theilSen(years: readonly number[], values: readonly number[], varS: number, least = 0): TheilSen | null {
-  const slopes: number[] = []
+  const slopes = new Float64Array(years.length * (years.length - 1) / 2)
+  let count = 0
   for (let i = 0; i < years.length; i++) {
     for (let j = i + 1; j < years.length; j++) {
       const gap = years[j]! - years[i]!
-      if (gap !== 0) slopes.push((values[j]! - values[i]!) / gap)
+      if (gap !== 0) slopes[count++] = (values[j]! - values[i]!) / gap
     }
   }
-  if (slopes.length === 0) return null
-  // Typed arrays sort numbers natively: the walk back through a long series sorts thousands of slopes at each step.
-  const sorted = Float64Array.from(slopes).sort()
+  if (count === 0) return null
+  // Typed arrays sort numbers natively.
+  const sorted = slopes.subarray(0, count).sort()
   const slopePerYear = medianOfSorted(sorted)
   const c = Z_975 * Math.sqrt(varS)
   const low = atRank(sorted, (sorted.length - c) / 2)

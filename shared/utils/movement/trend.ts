@@ -1,9 +1,10 @@
 import { addDays, dayFromNumber } from '../days'
 import type { Activity } from '../../types/mark'
 import { OUR_LIMITS } from '../../types/limits'
-import { activityOf } from './activity'
+import { isActive, restOf } from './activity'
+import { activityWalk } from './activityWalk'
 import { detectableRate, type DetectableRate } from './detectableRate'
-import { mannKendall, varianceOfS, type MannKendall } from './mannKendall'
+import { mannKendall, type MannKendall } from './mannKendall'
 import { nextBestReadingOn } from './nextBestReading'
 import { Z_975 } from './normal'
 import { seasonFit, type SeasonFit } from './seasonFit'
@@ -91,11 +92,12 @@ function judge(points: SeriesPoint[], settings: Settings) {
   const values = points.map(point => point.value)
   const sigma = seriesSigma(points)
   const test = mannKendall(values)!
-  const slope = theilSen(years, values, varianceOfS(values), Z_975 * sigma / Math.sqrt(timeSumOfSquares(years)))!
+  const slope = theilSen(years, values, test.varS, Z_975 * sigma / Math.sqrt(timeSumOfSquares(years)))!
   const spanDays = spanDaysOf(points)
   const rise = slope.slopePerYear * spanDays / DAYS_PER_YEAR
   const season = seasonFit(points)
-  const activity = activityOf({ spanDays, sigma, slope, mannKendall: test, season, rise, ...settings })
+  const active = isActive({ sigma, pRising: test.pRising, riseIsAtLeast: least => rise >= least, riseIsAbove: limit => rise > limit, season: () => season }, settings)
+  const activity = active ? 'active' as const : restOf(slope, spanDays, settings.dormantWithinPerYear)
   const levelAtStart = medianOf(values.map((value, i) => value - slope.slopePerYear * years[i]!))
   return { activity, sigma, mannKendall: test, ...slope, levelAtStart, rise, season }
 }
@@ -104,10 +106,17 @@ function activityAt(points: SeriesPoint[], settings: Settings): Activity {
   return enough(points, settings) ? judge(points, settings).activity : 'too-few-readings'
 }
 
+/** Whether the first so many points were enough and active. */
+function looksBack(points: SeriesPoint[], settings: Settings): (count: number) => boolean {
+  const isActiveAt = activityWalk(points, settings)
+  return count => count >= settings.leastReadings && points[count - 1]!.day - points[0]!.day >= settings.leastDays && isActiveAt(count)
+}
+
 /** Walks back from the newest reading while each earlier look was active too. */
 function activeSinceOf(points: SeriesPoint[], settings: Settings): string {
+  const isActiveAt = looksBack(points, settings)
   let count = points.length
-  while (activityAt(points.slice(0, count - 1), settings) === 'active') count--
+  while (isActiveAt(count - 1)) count--
   return dayFromNumber(points[count - 1]!.day)
 }
 
@@ -127,10 +136,9 @@ const settingsOf = (options: TrendOptions): Settings => ({ ...OURS, ...options }
 export function activeFromOn(readings: readonly TrendReading[], options: TrendOptions = {}): string | null {
   const settings = settingsOf(options)
   const points = seriesOf(readings)
-  for (let count = settings.leastReadings; count <= points.length; count++) {
-    if (activityAt(points.slice(0, count), settings) === 'active') return dayFromNumber(points[count - 1]!.day)
-  }
-  return null
+  const isActiveAt = looksBack(points, settings)
+  const count = points.findIndex((_, i) => isActiveAt(i + 1))
+  return count === -1 ? null : dayFromNumber(points[count]!.day)
 }
 
 /** The activity alone, as `markTrend` gives it, at a small part of the work. */

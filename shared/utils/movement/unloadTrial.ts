@@ -1,5 +1,5 @@
 import { dayFromNumber, dayNumber } from '../days'
-import { leastSquares } from './leastSquares'
+import { leastSquares, unitVariances } from './leastSquares'
 import { Z_80, Z_975 } from './normal'
 import { DAYS_PER_YEAR, seriesOf, seriesSigma, spanDaysOf, TWELVE_MONTHS_DAYS, type SeriesPoint, type TrendReading } from './series'
 import { tQuantile975 } from './tQuantile'
@@ -61,8 +61,8 @@ const beforehand = (time: number) => Math.min(0, time)
 /** Spread a coefficient has for readings at these times; null while the times cannot tell the parts apart. */
 function spreadOfChange(times: number[], withSeason: boolean): number | null {
   const columns = columnsOf(times, afterwards, withSeason)
-  const fit = leastSquares(columns, times.map(() => 0))
-  return fit ? Math.sqrt(fit.unitVariances[3]!) : null
+  const variances = unitVariances(columns)
+  return variances && Math.sqrt(variances[3]!)
 }
 
 /** How many readings more, one in two weeks, until a change of this rate would show. */
