@@ -24,7 +24,7 @@ export default defineConfig({
         resolve: { alias: { '~': root, '#shared': `${root}shared` } },
         test: {
           name: 'browser', include: ['tests/browser/**/*.test.ts'], environment: 'node',
-          testTimeout: 180_000, hookTimeout: 180_000, maxWorkers: 1, globalSetup: ['tests/support/globalSetup.ts'],
+          testTimeout: 180_000, hookTimeout: 180_000, maxWorkers: 2, globalSetup: ['tests/support/globalSetup.ts'],
         },
       },
     ],

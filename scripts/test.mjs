@@ -46,8 +46,7 @@ async function runTests() {
   const context = { root, folder, keeper, services: {} }
   await step('prepare', context, prepareTypes)
   if (chosen.has('checks')) {
-    await step('lint', context, lint)
-    await step('types', context, checkTypes)
+    await Promise.all([step('lint', context, lint), step('types', context, checkTypes)])
   }
   if (chosen.has('unit')) await step('unit and reference', context, runProject('unit'))
   if (chosen.has('api') || chosen.has('browser')) await runOnBuiltServer(chosen, context)

@@ -1,12 +1,17 @@
 import { useQuery, useQueryClient, type QueryKey } from '@tanstack/vue-query'
+import type { SignUp } from '~/shared/schemas/account'
 import type { Acceptance } from '~/shared/schemas/invitation'
 import type { InvitationOffer } from '~/shared/types/invitation'
+import type { Beginning } from '~/shared/types/people'
 
 /** What a link of a mail opens, or the sentence why it opens nothing any more. */
 export type LinkState<T> = { open: T, closed?: undefined } | { open?: undefined, closed: string }
 
 export const useResetLink = (token: string) =>
   useMailLink<{ email: string }>(['me', 'reset-link', token], `/api/auth/reset-password/${encodeURIComponent(token)}`)
+
+export const useBeginning = (token: string) =>
+  useMailLink<Beginning>(['me', 'beginning', token], `/api/auth/beginnings/${encodeURIComponent(token)}`)
 
 export const useInvitation = (token: string) =>
   useMailLink<InvitationOffer>(['me', 'invitation', token], `/api/auth/invitations/${encodeURIComponent(token)}`)
@@ -20,6 +25,8 @@ export function useLinkAnswers() {
   }
   return {
     askForLink: (input: { email: string }) => post<{ taken: true }>('/api/auth/forgotten-password', input),
+    askToBegin: (input: SignUp) => post<{ taken: true }>('/api/auth/sign-up', input),
+    begin: (token: string, input: { password: string }) => post<{ organisationId: string }>(`/api/auth/beginnings/${encodeURIComponent(token)}`, input),
     resetPassword: (token: string, input: { password: string }) => post<{ changed: true }>(`/api/auth/reset-password/${encodeURIComponent(token)}`, input),
     acceptInvitation: (token: string, input: Acceptance) => post<{ startPage: string }>(`/api/auth/invitations/${encodeURIComponent(token)}`, input),
   }

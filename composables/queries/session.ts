@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/vue-query'
 import { useServerQuery } from '~/composables/useServerQuery'
-import type { AccountEdit, ChangePassword, SignIn, SignUp } from '~/shared/schemas/account'
+import type { AccountEdit, ChangePassword, SignIn } from '~/shared/schemas/account'
 import type { Me } from '~/shared/types/people'
 
 export const meKey = ['me'] as const
@@ -20,7 +20,6 @@ export function useSignInOut() {
   }
   return {
     signIn: (input: SignIn) => post('/api/auth/sign-in', input),
-    signUp: (input: SignUp) => post('/api/auth/sign-up', input),
     signOut: () => post('/api/auth/sign-out'),
   }
 }

@@ -26,3 +26,16 @@ export function passwordResetMail(name: string, token: string): MailContent {
     footer: ['You get this because somebody typed this address on our sign-in page.'],
   }
 }
+
+export function signUpMail({ name, organisationName }: { name: string, organisationName: string }, token: string): MailContent {
+  return {
+    subject: 'Begin with Lathkey',
+    heading: `Set up ${organisationName}`,
+    paragraphs: [
+      `Hello ${name}, somebody asked to keep the homes of ${organisationName} with Lathkey, with this address. If it was you, follow the link within one day. It works once.`,
+      'If it was not you, there is nothing to do: nothing is set up until the link is followed.',
+    ],
+    action: { label: 'Set up the account', href: appUrl(`/begin/${token}`) },
+    footer: ['You get this because somebody typed this address on our sign-up page.'],
+  }
+}

@@ -10,6 +10,7 @@ import { useConnection } from './useDb'
 export const ATTEMPT_LIMITS = {
   'sign-in by address': { points: 10, minutes: 15 },
   'sign-in by remote': { points: 60, minutes: 15 },
+  'sign-up by address': { points: 5, minutes: 60 },
   'sign-up by remote': { points: 60, minutes: 60 },
   'forgotten password by address': { points: 3, minutes: 60 },
   'forgotten password by remote': { points: 30, minutes: 60 },

@@ -25,13 +25,15 @@ export const SignUpInput = z.strictObject({
     .min(1, 'What is the name of your household or firm?').max(120, 'Use at most 120 characters.'),
   name: PersonNameInput,
   email: EmailInput,
-  password: NewPasswordInput,
   timeZone: TimeZoneInput,
 })
 export type SignUp = z.output<typeof SignUpInput>
 
 export const SignInInput = z.strictObject({ email: EmailInput, password: KnownPasswordInput })
 export type SignIn = z.output<typeof SignInInput>
+
+/** A new person's password, or the one of the account that the address has; the command knows which. */
+export const BeginInput = z.strictObject({ password: KnownPasswordInput })
 
 export const ForgottenPasswordInput = z.strictObject({ email: EmailInput })
 

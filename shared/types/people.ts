@@ -14,3 +14,6 @@ export interface Me {
   /** Whether this organisation's daily digest goes to this person. */
   digest: boolean
 }
+
+/** What a mailed link to begin with would set up. */
+export interface Beginning { email: string, name: string, organisationName: string, hasAccount: boolean }

@@ -2,8 +2,8 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Connection } from '../../server/db/connect'
 import { verifyChain } from '../../server/db/commands/appendRecord'
 import type { Me } from '../../shared/types/people'
-import { createClient, inventOwner, signIn, signUp } from '../support/client'
-import { inventAddress, lookInto, type Refusal } from '../support/people'
+import { begin, createClient, inventOwner, signIn, signUp } from '../support/client'
+import { inventAddress, lookInto, newestLink, type Refusal } from '../support/people'
 import { startServer, type TestServer } from '../support/server'
 
 let server: TestServer
@@ -19,11 +19,21 @@ afterAll(async () => {
 
 const userRow = (email: string) => rows.db.selectFrom('appUser').selectAll().where('email', '=', email).executeTakeFirst()
 
+const asking = ({ organisationName, name, email }: ReturnType<typeof inventOwner>) => ({ organisationName, name, email })
+const beginningOf = (token: string) => `/api/auth/beginnings/${token}`
+async function askedToken(owner: ReturnType<typeof inventOwner>, more = {}) {
+  expect((await createClient(server.url).post('/api/auth/sign-up', { ...asking(owner), ...more })).status).toBe(202)
+  return newestLink(rows, owner.email.trim().toLowerCase(), 'begin')
+}
+
 describe('sign-up', () => {
-  it('makes an organisation, its owner and a session, and records both', async () => {
+  it('by the mailed link makes an organisation, its owner and a session, and records both', async () => {
     const client = createClient(server.url)
     const owner = inventOwner({ email: `  ${inventAddress('Olive').toUpperCase()} ` })
-    const answer = await client.post<{ organisationId: string }>('/api/auth/sign-up', { ...owner, timeZone: 'America/Chicago' })
+    const token = await askedToken(owner, { timeZone: 'America/Chicago' })
+    expect((await client.get(beginningOf(token))).body).toEqual({ email: owner.email.trim().toLowerCase(), name: owner.name, organisationName: owner.organisationName, hasAccount: false })
+    expect(await userRow(owner.email.trim().toLowerCase())).toBeUndefined()
+    const answer = await client.post<{ organisationId: string }>(beginningOf(token), { password: owner.password })
     expect(answer.status).toBe(201)
     const { body: me } = await client.get<Me>('/api/me')
     expect(me.user).toMatchObject({ name: owner.name, email: owner.email.trim().toLowerCase(), unitsOfMeasure: 'us' })
@@ -35,47 +45,80 @@ describe('sign-up', () => {
   })
 
   it('seals the session in a cookie that scripts and other sites cannot use', async () => {
-    const response = await createClient(server.url).send('/api/auth/sign-up', {
-      method: 'POST', headers: { 'content-type': 'application/json' }, body: JSON.stringify(inventOwner()),
+    const owner = inventOwner()
+    const response = await createClient(server.url).send(beginningOf(await askedToken(owner)), {
+      method: 'POST', headers: { 'content-type': 'application/json' }, body: JSON.stringify({ password: owner.password }),
     })
     const [cookie] = response.headers.getSetCookie()
     expect(cookie).toMatch(/^lathkey-session=Fe26\.2/)
     for (const part of ['HttpOnly', 'Secure', 'SameSite=Lax', 'Path=/']) expect(cookie).toContain(part)
   })
 
+  it('answers the same whether or not the address has an account, and makes none by itself', async () => {
+    const { owner } = await signUp(server.url)
+    const newcomer = inventOwner()
+    const answers = []
+    for (const who of [owner, newcomer]) answers.push(await createClient(server.url).post('/api/auth/sign-up', asking(who)))
+    expect(answers.map(({ status, body }) => ({ status, body }))).toEqual([1, 2].map(() => ({ status: 202, body: { taken: true } })))
+    expect(answers.flatMap(({ headers }) => headers.getSetCookie())).toEqual([])
+    expect(await userRow(newcomer.email)).toBeUndefined()
+  })
+
   it('gives an account that exists one more organisation, for its own password only', async () => {
     const { owner } = await signUp(server.url)
-    const refused = await createClient(server.url).post<Refusal>('/api/auth/sign-up', { ...owner, organisationName: 'Another', password: 'not their password' })
-    expect([refused.status, refused.body.data.code]).toEqual([409, 'address-in-use'])
-    expect(refused.body.data.fields?.email).toMatch(/has an account/)
+    const token = await askedToken({ ...owner, organisationName: 'Another' })
     const client = createClient(server.url)
-    expect((await client.post('/api/auth/sign-up', { ...owner, organisationName: 'Another' })).status).toBe(201)
+    expect((await client.get(beginningOf(token))).body).toMatchObject({ hasAccount: true })
+    const refused = await client.post<Refusal>(beginningOf(token), { password: 'not their password' })
+    expect([refused.status, refused.body.data.code, Object.keys(refused.body.data.fields ?? {})]).toEqual([401, 'wrong-sign-in', ['password']])
+    expect((await client.post(beginningOf(token), { password: owner.password })).status).toBe(201)
     const { body: me } = await client.get<Me>('/api/me')
     expect(me.organisation.name).toBe('Another')
     expect(me.organisations.map(({ name }) => name).sort()).toEqual(['Another', owner.organisationName].sort())
   })
 
   it('refuses unsound answers at their fields and writes nothing', async () => {
-    const answer = await createClient(server.url).post<Refusal>('/api/auth/sign-up', { organisationName: ' ', name: '', email: 'nobody', password: 'short' })
+    const answer = await createClient(server.url).post<Refusal>('/api/auth/sign-up', { organisationName: ' ', name: '', email: 'nobody' })
     expect(answer.status).toBe(422)
-    expect(Object.keys(answer.body.data.fields ?? {}).sort()).toEqual(['email', 'name', 'organisationName', 'password'])
-    expect(await userRow('nobody')).toBeUndefined()
+    expect(Object.keys(answer.body.data.fields ?? {}).sort()).toEqual(['email', 'name', 'organisationName'])
+    const short = await createClient(server.url).post<Refusal>(beginningOf(await askedToken(inventOwner())), { password: 'short' })
+    expect([short.status, Object.keys(short.body.data.fields ?? {})]).toEqual([422, ['password']])
   })
 
   it('refuses another origin, a body that is not JSON, and text the database cannot keep', async () => {
     const client = createClient(server.url)
-    expect((await client.post('/api/auth/sign-up', inventOwner(), { headers: { origin: 'https://elsewhere.example' } })).status).toBe(403)
+    expect((await client.post('/api/auth/sign-up', asking(inventOwner()), { headers: { origin: 'https://elsewhere.example' } })).status).toBe(403)
     expect((await client.post('/api/auth/sign-up', 'name=x', { headers: { 'content-type': 'application/x-www-form-urlencoded' } })).status).toBe(415)
     expect((await client.post('/api/auth/sign-up', '{"name":', { headers: { 'content-type': 'application/json' } })).status).toBe(422)
-    expect((await client.post('/api/auth/sign-up', inventOwner({ name: 'a\u0000b' }))).status).toBe(422)
+    expect((await client.post('/api/auth/sign-up', asking(inventOwner({ name: 'a\u0000b' })))).status).toBe(422)
   })
 
-  it('makes one account when two people ask for the same address at the same moment', async () => {
+  it('refuses a link that is unknown, used or a day old', async () => {
     const owner = inventOwner()
-    const answers = await Promise.all([1, 2].map(() => createClient(server.url).post('/api/auth/sign-up', owner)))
+    const token = await askedToken(owner)
+    const codeOf = async (asked: string) => (await createClient(server.url).post<Refusal>(beginningOf(asked), { password: owner.password })).body.data?.code
+    expect(await codeOf('x'.repeat(43))).toBe('link-unknown')
+    expect([await codeOf(token), await codeOf(token)]).toEqual([undefined, 'link-used'])
+    const late = await askedToken(inventOwner())
+    await rows.db.updateTable('signUp').set({ expiresAt: new Date(Date.now() - 1_000).toISOString() }).where('usedAt', 'is', null).execute()
+    expect(await codeOf(late)).toBe('link-expired')
+  })
+
+  it('makes one account when its link is followed twice at the same moment', async () => {
+    const owner = inventOwner()
+    const token = await askedToken(owner)
+    const answers = await Promise.all([1, 2].map(() => createClient(server.url).post(beginningOf(token), { password: owner.password })))
     expect(answers.map(answer => answer.status).sort()[0]).toBe(201)
-    expect([201, 409]).toContain(answers.map(answer => answer.status).sort()[1])
+    expect([401, 409, 410]).toContain(answers.map(answer => answer.status).sort()[1])
     expect(await rows.db.selectFrom('appUser').select('id').where('email', '=', owner.email).execute()).toHaveLength(1)
+    expect(await rows.db.selectFrom('organisation').select('id').where('name', '=', owner.organisationName).execute()).toHaveLength(1)
+  })
+
+  it('mails one address no more than a few times an hour', async () => {
+    const owner = asking(inventOwner())
+    const statuses = []
+    for (let time = 0; time < 6; time += 1) statuses.push((await createClient(server.url).post('/api/auth/sign-up', owner)).status)
+    expect(statuses).toEqual([202, 202, 202, 202, 202, 429])
   })
 })
 
@@ -192,7 +235,7 @@ describe('several organisations', () => {
   it('are switched between, and only among one\'s own', async () => {
     const { client, owner } = await signUp(server.url)
     const { body: first } = await client.get<Me>('/api/me')
-    await client.post('/api/auth/sign-up', { ...owner, organisationName: 'Second House' })
+    await begin(client, { ...owner, organisationName: 'Second House' })
     const moved = await client.post<Me>('/api/me/organisation', { organisationId: first.organisation.id })
     expect(moved.body.organisation.name).toBe(owner.organisationName)
     expect((await client.get<Me>('/api/me')).body.organisation.id).toBe(first.organisation.id)

@@ -3,7 +3,7 @@ import type { Connection } from '../../server/db/connect'
 import { addUser, joinOrganisation } from '../../server/db/commands/addPerson'
 import type { PersonRow } from '../../shared/types/invitation'
 import type { Me } from '../../shared/types/people'
-import { createClient, signUp, type Client } from '../support/client'
+import { begin, createClient, signUp, type Client } from '../support/client'
 import { bringIn, inventAddress, lookInto, makeHome, newestLink, tenantTerms, type Refusal } from '../support/people'
 import { startServer, type TestServer } from '../support/server'
 
@@ -96,7 +96,7 @@ describe('ending access', () => {
   it('falls back to another organisation of theirs', async () => {
     const { client: owner } = await signUp(server.url)
     const manager = await bringIn(server, rows, owner, 'manager')
-    await manager.client.post('/api/auth/sign-up', { organisationName: 'Own House', name: manager.name, email: manager.email, password: manager.password })
+    await begin(manager.client, { ...manager, organisationName: 'Own House' })
     const { body: me } = await manager.client.get<Me>('/api/me')
     await manager.client.post('/api/me/organisation', { organisationId: me.organisations.find(({ role }) => role === 'manager')!.id })
     await owner.remove(`/api/people/${(await rowOf(owner, manager.email)).id}`)

@@ -21,6 +21,7 @@ const PAGES: Record<string, Sample[]> = {
   'attics/[atticId]/load-plan.vue': one('maren', '/attics/:attic/load-plan'),
   'attics/[atticId]/survey.vue': one('maren', '/attics/:attic/survey'),
   'attics/index.vue': one('maren', '/attics'),
+  'begin/[token].vue': one('nobody', '/begin/not-a-token'),
   'ceilings.vue': one('maren', '/ceilings'),
   'findings/[findingId].vue': one('maren', '/findings/:finding'),
   'findings/index.vue': one('maren', '/findings'),

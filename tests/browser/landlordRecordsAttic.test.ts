@@ -22,7 +22,10 @@ describe.each(screens)('a landlord on a %s', (_name, screen) => {
     await page.getByLabel('Name of your household or firm').fill(owner.organisationName)
     await page.getByLabel('Your name').fill(owner.name)
     await page.getByLabel('E-mail address').fill(owner.email)
-    await page.getByLabel('Password', { exact: true }).fill(owner.password)
+    await page.getByRole('button', { name: 'Mail me a link to begin' }).click()
+    const { text } = await server.mail.waitForMessage(owner.email)
+    await visit(page, new URL(/http\S+\/begin\/\S+/.exec(text)![0]).pathname)
+    await page.getByLabel('Choose a password').fill(owner.password)
     await page.getByRole('button', { name: 'Set up the account' }).click()
     await page.getByRole('heading', { name: 'No homes need a decision' }).waitFor()
 

@@ -1,4 +1,7 @@
 import { randomBytes } from 'node:crypto'
+import { connect } from '../../server/db/connect'
+import { newestLink } from './people'
+import { databaseAt } from './server'
 
 export interface Answer<T> { status: number, headers: Headers, body: T }
 
@@ -94,8 +97,22 @@ function insist(answer: Answer<unknown>, what: string) {
 export async function signUp(url: string, details: Partial<NewOwner> = {}): Promise<{ client: Client, owner: NewOwner }> {
   const client = createClient(url)
   const owner = inventOwner(details)
-  insist(await client.post('/api/auth/sign-up', owner), 'Sign-up')
+  await begin(client, owner)
   return { client, owner }
+}
+
+/** Asks for the mailed link and follows it; the client is signed in to the new organisation afterwards. */
+export async function begin(client: Client, { organisationName, name, email, password }: NewOwner): Promise<void> {
+  insist(await client.post('/api/auth/sign-up', { organisationName, name, email }), 'Sign-up')
+  insist(await client.post(`/api/auth/beginnings/${await mailedToken(client.url, email)}`, { password }), 'Beginning')
+}
+
+async function mailedToken(url: string, email: string): Promise<string> {
+  const database = databaseAt.get(url)
+  if (!database) throw new Error(`No server of this run is at ${url}.`)
+  const connection = connect(database.adminUrl, { max: 1 })
+  try { return await newestLink(connection, email.trim().toLowerCase(), 'begin') }
+  finally { await connection.close() }
 }
 
 export async function signIn(url: string, { email, password }: { email: string, password: string }): Promise<Client> {

@@ -13,7 +13,7 @@ export const lookInto = (server: TestServer): Connection => connect(server.datab
 export const inventAddress = (name: string) => `${name}-${randomBytes(4).toString('hex')}@plumbline.example`
 
 /** The token of the newest link to `page` that was mailed to this address. */
-export async function newestLink({ db }: Connection, address: string, page: 'invitation' | 'reset-password'): Promise<string> {
+export async function newestLink({ db }: Connection, address: string, page: 'invitation' | 'reset-password' | 'begin'): Promise<string> {
   const row = await db.selectFrom('message').select('textBody').where('toAddress', '=', address)
     .where('textBody', 'like', `%/${page}/%`).orderBy('createdAt', 'desc').orderBy('id', 'desc').executeTakeFirstOrThrow()
   const token = new RegExp(`/${page}/([\\w-]+)`).exec(row.textBody)?.[1]

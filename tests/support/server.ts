@@ -33,6 +33,9 @@ export interface TestServer {
   kill: () => Promise<void>
 }
 
+/** The databases of the servers that run, by address: some tests look past the program. */
+export const databaseAt = new Map<string, TestDatabase>()
+
 let builtEntry: Promise<string> | undefined
 
 function serverEntry() {
@@ -55,6 +58,7 @@ export async function startServer(options: TestServerOptions = {}): Promise<Test
   }
   try {
     const server = await launch(entry, { database, mail, dataDir, env: options.env ?? {} })
+    databaseAt.set(server.url, database)
     return {
       ...server, database, mail, dataDir,
       stop: async () => {

@@ -1,15 +1,14 @@
-import { signUp } from '../../db/commands/signUp'
+import { requestSignUp } from '../../db/commands/requestSignUp'
 import { SignUpInput } from '../../../shared/schemas/account'
 import { publicRoute } from '../../utils/apiRoute'
 import { remoteAddress, takeTry } from '../../utils/attempts'
 import { readBodyAs } from '../../utils/readBodyAs'
-import { openSession } from '../../utils/session'
 
 export default publicRoute(async ({ event, db }) => {
   const body = await readBodyAs(event, SignUpInput)
-  await Promise.all([takeTry('sign-up by remote', remoteAddress(event)), takeTry('sign-in by address', body.email)])
-  const { user, organisationId } = await signUp(db, body)
-  await openSession(event, user, organisationId)
-  setResponseStatus(event, 201)
-  return { organisationId }
+  await takeTry('sign-up by remote', remoteAddress(event))
+  await takeTry('sign-up by address', body.email)
+  await requestSignUp(db, body)
+  setResponseStatus(event, 202)
+  return { taken: true }
 })

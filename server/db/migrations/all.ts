@@ -12,6 +12,7 @@ import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
+import * as signUps from './0014SignUps'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -28,4 +29,5 @@ export const migrations: Record<string, Migration> = {
   '0013FollowedChanges': followedChanges,
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
+  '0014SignUps': signUps,
 }

@@ -8,6 +8,7 @@ export interface PeopleTables {
   membership: MembershipTable
   invitation: InvitationTable
   passwordReset: PasswordResetTable
+  signUp: SignUpTable
 }
 
 export interface OrganisationTable {
@@ -85,5 +86,17 @@ export interface PasswordResetTable {
   tokenHash: string
   expiresAt: Instant
   usedAt: Instant | null
+  createdAt: Instant
+}
+
+export interface SignUpTable {
+  id: string
+  email: string
+  name: string
+  organisationName: string
+  timeZone: string | null
+  tokenHash: string
+  expiresAt: Instant
+  usedAt: ColumnType<string | null, string | null | undefined, string | null>
   createdAt: Instant
 }

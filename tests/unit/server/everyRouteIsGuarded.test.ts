@@ -9,6 +9,8 @@ const root = resolve(import.meta.dirname, '../../..')
 const PUBLIC: Record<string, string> = {
   'health.get.ts': 'asked by whatever keeps the server running',
   'auth/sign-up.post.ts': 'nobody has an account before it',
+  'auth/beginnings/[token].get.ts': 'the link of the mail is the key',
+  'auth/beginnings/[token].post.ts': 'the link of the mail is the key',
   'auth/sign-in.post.ts': 'makes the session',
   'auth/sign-out.post.ts': 'takes away a cookie, also of a session that has ended',
   'auth/forgotten-password.post.ts': 'for people who cannot sign in',
