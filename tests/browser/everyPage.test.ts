@@ -2,7 +2,7 @@ import { readdirSync } from 'node:fs'
 import { resolve } from 'node:path'
 import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
-import { axeFindings, contrastFindings, desk, openBrowser, openPage, phone, sidewaysOverflowPx, visit } from '../support/browser'
+import { desk, openBrowser, openPage, phone, visit, wholePageFindings } from '../support/browser'
 import type { Client } from '../support/client'
 import { startDemoServer, type DemoServer } from '../support/demo'
 
@@ -89,15 +89,8 @@ describe.each(files.flatMap(file => (PAGES[file] ?? []).map(sample => [file, sam
     expect((await visit(page, addressOf(sample.path)))?.status()).toBe(200)
     expect(await page.locator('h1').count()).toBe(1)
     expect(await page.title()).toMatch(/^.+ · Lathkey$/)
-    expect(await axeFindings(page)).toEqual([])
     await collectLinks(sample.who, await page.locator('a[href^="/"]').evaluateAll(found => found.map(link => link.getAttribute('href')!)))
-    await page.emulateMedia({ colorScheme: 'dark' })
-    expect(await contrastFindings(page)).toEqual([])
-    for (const width of sample.who === 'maren' ? [phone.width] : [phone.width, 320]) {
-      await page.setViewportSize({ width, height: phone.height })
-      // Charts draw themselves again a moment after the room has changed.
-      await expect.poll(() => sidewaysOverflowPx(page), { message: `hangs over the edge at ${width} px`, timeout: 3_000 }).toBe(0)
-    }
+    expect(await wholePageFindings(page, sample.who === 'maren' ? [phone.width] : undefined)).toEqual([])
     expect(problems).toEqual([])
     await close()
   })

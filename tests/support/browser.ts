@@ -81,11 +81,30 @@ const wcag22 = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']
 export const axeFindings = (page: Page) => findingsOf(new AxeBuilder({ page }).withTags(wcag22))
 
 /** The part of it that another colour scheme can change. */
-export const contrastFindings = (page: Page) => findingsOf(new AxeBuilder({ page }).withRules(['color-contrast', 'link-in-text-block']))
+const contrastFindings = (page: Page) => findingsOf(new AxeBuilder({ page }).withRules(['color-contrast', 'link-in-text-block']))
 
 async function findingsOf(axe: AxeBuilder): Promise<string[]> {
   const { violations } = await axe.analyze()
   return violations.map(({ id, help, nodes }) => `${id}: ${help} — ${nodes.map(node => node.target.join(' ')).join(' | ')}`)
+}
+
+/** All that is asked of a page on a desk in both schemes and on narrow phones; leaves it dark and narrow. */
+export async function wholePageFindings(page: Page, widths: readonly number[] = [phone.width, 320]): Promise<string[]> {
+  const found = await axeFindings(page)
+  await page.emulateMedia({ colorScheme: 'dark' })
+  found.push(...(await contrastFindings(page)).map(finding => `dark: ${finding}`))
+  for (const width of widths) {
+    await page.setViewportSize({ width, height: phone.height })
+    const overflowPx = await settledOverflowPx(page)
+    if (overflowPx > 0) found.push(`${overflowPx} px too wide at ${width} px`)
+  }
+  return found
+}
+
+/** Charts draw themselves again a moment after the room has changed. */
+async function settledOverflowPx(page: Page): Promise<number> {
+  for (let look = 0; look < 30 && await sidewaysOverflowPx(page) > 0; look += 1) await page.waitForTimeout(100)
+  return sidewaysOverflowPx(page)
 }
 
 /** How far the page can be scrolled sideways; 0 where everything fits. */
