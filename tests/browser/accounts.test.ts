@@ -1,7 +1,7 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Connection } from '../../server/db/connect'
-import { axeFindings, desk, openBrowser, openPage, phone, schemes, screens, sidewaysOverflowPx, visit, type OpenPage } from '../support/browser'
+import { desk, openBrowser, openPage, phone, visit, wholePageFindings, type OpenPage } from '../support/browser'
 import { begin, inventOwner, signUp, type Client } from '../support/client'
 import { bringIn, inventAddress, lookInto, makeHome, newestLink, tenantTerms } from '../support/people'
 import { startServer, type TestServer } from '../support/server'
