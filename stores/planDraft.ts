@@ -1,11 +1,11 @@
 import { defineStore } from 'pinia'
 import { keptDrafts } from './keptDrafts'
 
-export interface TrialSpot { xFt?: number, yFt?: number, lengthFt?: number, widthFt?: number }
+export interface TrialSpot { fieldNumber?: number, xFt?: number, yFt?: number, lengthFt?: number, widthFt?: number }
 /** Item id → where it is tried out. */
 export type TrialMoves = Record<string, TrialSpot>
 
-const MEASURES = ['xFt', 'yFt', 'lengthFt', 'widthFt'] as const
+const MEASURES = ['fieldNumber', 'xFt', 'yFt', 'lengthFt', 'widthFt'] as const
 
 function readMoves(value: object): TrialMoves {
   return Object.fromEntries(Object.entries(value as Record<string, unknown>).flatMap(([id, spot]) => {

@@ -1,4 +1,6 @@
-import type { LoadPlanField, LoadPlanItem, LoadPlanSpot } from './loadPlanTypes'
+import type { LoadPlanChange, LoadPlanCorner, LoadPlanField, LoadPlanSpot } from './loadPlanTypes'
+
+type Placed = LoadPlanSpot & { id: string }
 
 /** Moves and sizes go by half feet (look and manners of the plan: ours). */
 export const stepFt = 0.5
@@ -11,20 +13,36 @@ export function fieldDepthFt({ spacingIn, joistCount }: LoadPlanField): number {
 const clamp = (value: number, from: number, to: number) => Math.min(Math.max(value, from), Math.max(from, to))
 const snap = (ft: number) => Math.round(ft / stepFt) * stepFt
 
-/** The nearest place on the half-foot grid, or against the edge, that keeps the item inside the field. */
-export function placeInside(field: LoadPlanField, item: LoadPlanSpot, xFt: number, yFt: number): { xFt: number, yFt: number } {
-  return {
-    xFt: clamp(snap(xFt), 0, field.spanFt - item.lengthFt),
-    yFt: clamp(snap(yFt), 0, fieldDepthFt(field) - item.widthFt),
-  }
+/**
+ * Several items moved by the same step: `lead` lands on the half-foot grid, and the edge of the field stops them all as
+ * soon as it stops one.
+ */
+export function moveTogether(field: LoadPlanField, items: readonly Placed[], lead: Placed, dxFt: number, dyFt: number): LoadPlanChange[] {
+  const least = (room: (item: Placed) => number) => Math.min(...items.map(room))
+  const dx = clamp(snap(lead.xFt + dxFt) - lead.xFt, -least(item => item.xFt), least(item => field.spanFt - item.xFt - item.lengthFt))
+  const dy = clamp(snap(lead.yFt + dyFt) - lead.yFt, -least(item => item.yFt), least(item => fieldDepthFt(field) - item.yFt - item.widthFt))
+  return items.map(({ id, xFt, yFt }) => ({ id, xFt: xFt + dx, yFt: yFt + dy }))
 }
 
-/** The nearest size of half feet, at least half a foot, that keeps the item inside the field. */
-export function sizeInside(field: LoadPlanField, item: LoadPlanSpot, lengthFt: number, widthFt: number): { lengthFt: number, widthFt: number } {
-  return {
-    lengthFt: clamp(snap(lengthFt), stepFt, field.spanFt - item.xFt),
-    widthFt: clamp(snap(widthFt), stepFt, fieldDepthFt(field) - item.yFt),
-  }
+/** One edge pulled by so much: where it lies then, on the half-foot grid, inside the field, half a foot from the other at least. */
+function pulledEdge(from: number, size: number, by: number, isFirst: boolean, limit: number): { from: number, size: number } {
+  if (!isFirst) return { from, size: clamp(snap(size + by), stepFt, limit - from) }
+  const edge = clamp(snap(from + by), 0, from + size - stepFt)
+  return { from: edge, size: from + size - edge }
+}
+
+/** An item sized by one of its corners; the corner across from it stays. */
+export function sizeFromCorner(field: LoadPlanField, item: LoadPlanSpot, corner: LoadPlanCorner, dxFt: number, dyFt: number): LoadPlanSpot {
+  const x = pulledEdge(item.xFt, item.lengthFt, dxFt, corner.x === 'start', field.spanFt)
+  const y = pulledEdge(item.yFt, item.widthFt, dyFt, corner.y === 'first', fieldDepthFt(field))
+  return { xFt: x.from, lengthFt: x.size, yFt: y.from, widthFt: y.size }
+}
+
+/** Length and width changed places, kept inside the field; null where it does not fit. */
+export function turnInside(field: LoadPlanField, item: LoadPlanSpot): LoadPlanSpot | null {
+  const turned = { ...item, lengthFt: item.widthFt, widthFt: item.lengthFt }
+  if (turned.lengthFt > field.spanFt || turned.widthFt > fieldDepthFt(field)) return null
+  return { ...turned, xFt: clamp(item.xFt, 0, field.spanFt - turned.lengthFt), yFt: clamp(item.yFt, 0, fieldDepthFt(field) - turned.widthFt) }
 }
 
 /** Which joists an item stands on or between, counted from 1. */
@@ -44,17 +62,27 @@ export function nearerWall(field: LoadPlanField, item: LoadPlanSpot): { wall: 's
 }
 
 const arrows: Record<string, [number, number]> = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, -1], ArrowDown: [0, 1] }
+export const isArrow = (key: string): boolean => key in arrows
 
-/** What an arrow key asks for: a move, with Shift a new size. Null for any other key, or when nothing would change. */
-export function stepByKey(field: LoadPlanField, item: LoadPlanItem, key: string, shift: boolean):
-  { kind: 'move', xFt: number, yFt: number } | { kind: 'resize', lengthFt: number, widthFt: number } | null {
+/** What an arrow key asks of the chosen items: a move by half a foot, with Shift a new size. Empty for other keys, or at the edge. */
+export function stepByKey(field: LoadPlanField, items: readonly Placed[], key: string, shift: boolean): LoadPlanChange[] {
   const arrow = arrows[key]
-  if (!arrow) return null
-  const [dx, dy] = arrow.map(direction => direction * stepFt) as [number, number]
-  if (shift) {
-    const size = sizeInside(field, item, item.lengthFt + dx, item.widthFt + dy)
-    return size.lengthFt === item.lengthFt && size.widthFt === item.widthFt ? null : { kind: 'resize', ...size }
-  }
-  const place = placeInside(field, item, item.xFt + dx, item.yFt + dy)
-  return place.xFt === item.xFt && place.yFt === item.yFt ? null : { kind: 'move', ...place }
+  const [lead] = items
+  if (!arrow || !lead) return []
+  const [dx, dy] = [arrow[0] * stepFt, arrow[1] * stepFt]
+  const changes = shift
+    ? items.map((item): LoadPlanChange => {
+        const { lengthFt, widthFt } = sizeFromCorner(field, item, { x: 'end', y: 'last' }, dx, dy)
+        return { id: item.id, ...dx !== 0 && { lengthFt }, ...dy !== 0 && { widthFt } }
+      })
+    : moveTogether(field, items, lead, dx, dy)
+  return isChange(items, changes) ? changes : []
+}
+
+/** Whether anything would lie elsewhere than it does. */
+export function isChange(items: readonly Placed[], changes: readonly LoadPlanChange[]): boolean {
+  return changes.some((change) => {
+    const item = items.find(one => one.id === change.id)
+    return item !== undefined && (['xFt', 'yFt', 'lengthFt', 'widthFt'] as const).some(measure => change[measure] !== undefined && Math.abs(change[measure] - item[measure]) > 1e-9)
+  })
 }

@@ -22,3 +22,12 @@ export interface LoadPlanJoist { utilisation: number | null, state: LoadTone }
 export interface LoadPlanWalls { start: string, end: string }
 
 export interface LoadPlanSpot { xFt: number, yFt: number, lengthFt: number, widthFt: number }
+
+/** A new place or size, or both; what is left out stays. */
+export interface LoadPlanChange { id: string, xFt?: number, yFt?: number, lengthFt?: number, widthFt?: number }
+
+/** Which corner is pulled: at the first or the last wall, on the side of the first or the last joist. */
+export interface LoadPlanCorner { x: 'start' | 'end', y: 'first' | 'last' }
+
+/** A stretch of places for the middle of an item, in shares of the plan. */
+export interface LoadPlanShade { x: number, y: number, w: number, h: number, tone: 'near' | 'over' }

@@ -13,10 +13,12 @@ export const AtticDocumentInput = z.strictObject({
   writtenBy: shortText('Who wrote it?', 200),
   ratedPsf: z.number().min(0, 'Not less than 0 psf.').max(500, 'That is more than 500 psf. Is it in pounds per square foot?').nullable(),
   liftsHold: z.boolean(),
+  acceptsStrongbacks: z.boolean().default(false),
   coversWholeAttic: z.boolean(),
   area: longText(500),
 }).refine(value => value.coversWholeAttic || value.area.length > 0, { path: ['area'], message: 'Which part does it cover?' })
   .refine(value => !value.liftsHold || value.kind === 'engineer-letter' || value.kind === 'inspection-record', { path: ['liftsHold'], message: 'Only an engineer’s letter or an inspection record can lift a hold.' })
+  .refine(value => !value.acceptsStrongbacks || value.kind === 'engineer-letter', { path: ['acceptsStrongbacks'], message: 'Only an engineer’s letter can say so.' })
 
 export type AtticDocumentValue = z.output<typeof AtticDocumentInput>
 

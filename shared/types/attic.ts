@@ -135,6 +135,8 @@ export interface AtticDocument {
   ratedPsf: number | null
   /** The writer saw the damage and states that storage may go on. */
   liftsHold: boolean
+  /** The writer found the strongbacks sound and lets them share the load. Left out: no. */
+  acceptsStrongbacks?: boolean
   coversWholeAttic: boolean
   /** Which part it covers, in the writer's words. */
   area: string

@@ -19,6 +19,7 @@ export interface DocumentRow {
   kind: DocumentKind
   ratedPsf: number | null
   liftsHold: boolean
+  acceptsStrongbacks: boolean
   writtenOn: string
   writtenBy: string
   coversWholeAttic: boolean

@@ -65,7 +65,8 @@ export interface JudgedJoist extends JoistRatios {
   limit: PlanLimit
   state: LoadState
   loadLb: number
-  /** Moment and deflection if strongbacks shared the load. */
+  /** Moment and deflection of the joist alone, and if strongbacks shared the load. */
+  own: JoistRatios
   withStrongbacks: JoistRatios
 }
 

@@ -13,6 +13,7 @@ import * as followedChanges from './0013FollowedChanges'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
 import * as signUps from './0014SignUps'
+import * as strongbackOpinion from './0020StrongbackOpinion'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -30,4 +31,5 @@ export const migrations: Record<string, Migration> = {
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
   '0014SignUps': signUps,
+  '0020StrongbackOpinion': strongbackOpinion,
 }

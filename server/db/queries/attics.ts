@@ -36,7 +36,7 @@ type DocumentRow = Awaited<ReturnType<typeof findDocuments>>[number]
 
 export const asAtticDocument = (row: DocumentRow): AtticDocument => ({
   kind: row.kind, writtenOn: row.writtenOn, writtenBy: row.writtenBy, attached: true, ratedPsf: row.ratedPsf,
-  liftsHold: row.liftsHold, coversWholeAttic: row.coversWholeAttic, area: row.area,
+  liftsHold: row.liftsHold, acceptsStrongbacks: row.acceptsStrongbacks, coversWholeAttic: row.coversWholeAttic, area: row.area,
 })
 
 /** What stood in the attic after each step, by the day it happened: a step entered late counts from its own day. */

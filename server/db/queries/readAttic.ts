@@ -31,7 +31,7 @@ export async function readAttic(db: Db, attic: AtticRow): Promise<Omit<AtticDeta
     survey,
     surveys: surveys.map(({ answers: _answers, basis, ...row }) => ({ ...row, basis: basis as RatingBasis })),
     documents: documents.map(row => ({
-      id: row.id, kind: row.kind, ratedPsf: row.ratedPsf, liftsHold: row.liftsHold, writtenOn: row.writtenOn, writtenBy: row.writtenBy,
+      id: row.id, kind: row.kind, ratedPsf: row.ratedPsf, liftsHold: row.liftsHold, acceptsStrongbacks: row.acceptsStrongbacks, writtenOn: row.writtenOn, writtenBy: row.writtenBy,
       coversWholeAttic: row.coversWholeAttic, area: row.area, fileName: row.fileName, createdAt: row.createdAt,
     })),
     items,

@@ -23,7 +23,7 @@ export const atticsOf = (db: Db, unitId: Expression<string>) => atticRowsOf(db, 
 export const judgedAtticsOf = (db: Db, unitId: Expression<string>) => atticRowsOf(db, unitId).select(eb => jsonList(sql<AtticOfUnit>`${atticFacts(eb)}::jsonb || jsonb_build_object(
   'survey', latest.answers, 'documents', coalesce(${eb.selectFrom('atticDocument as d').select(({ ref }) => jsonList(jsonBuildObject({
     kind: ref('d.kind'), writtenOn: ref('d.writtenOn'), writtenBy: ref('d.writtenBy'), attached: sql<boolean>`true`, ratedPsf: ref('d.ratedPsf'),
-    liftsHold: ref('d.liftsHold'), coversWholeAttic: ref('d.coversWholeAttic'), area: ref('d.area'),
+    liftsHold: ref('d.liftsHold'), acceptsStrongbacks: ref('d.acceptsStrongbacks'), coversWholeAttic: ref('d.coversWholeAttic'), area: ref('d.area'),
   }), sql`d.created_at`).as('list')).whereRef('d.atticId', '=', 'a.id').where('d.withdrawnAt', 'is', null)}, '[]'::json)::jsonb)`, byName).as('list'))
 
 const byName = sql`a.name, a.id`

@@ -45,6 +45,7 @@ export interface AtticDocumentTable {
   kind: DocumentKind
   ratedPsf: number | null
   liftsHold: Defaulted<boolean>
+  acceptsStrongbacks: Defaulted<boolean>
   writtenOn: Day
   writtenBy: string
   coversWholeAttic: boolean

@@ -3,12 +3,13 @@ import type { DocumentRow } from '../../types/atticDetail'
 import type { AtticRating } from '../../types/atticRating'
 import type { ContentState, JudgedContents, JudgedField } from '../../types/contents'
 import type { ContentsItem } from '../../types/item'
-import type { PlacedItem } from '../../types/loadPlan'
+import type { LoadFieldAnswer, PlacedItem } from '../../types/loadPlan'
 import { chanceOfExceeding, inventoryTotal } from '../goods/inventoryTotal'
 import { judgeLoadPlan } from '../structure/judgeLoadPlan'
 import { loadFieldOf } from '../structure/loadField'
 import { loadStateOf } from '../structure/loadState'
 import { rateAttic } from '../structure/rating'
+import { strongbackOpinion } from '../structure/strongbackOpinion'
 import { CHANCE_LIMIT } from '../upkeep/findAtticFindings'
 
 export interface Contents {
@@ -24,7 +25,7 @@ export interface Contents {
 export function judgeContents({ survey, documents, items }: Contents): JudgedContents {
   const rating = survey ? rateAttic(survey, [...documents]) : null
   const total = inventoryTotal(items.map(item => ({ ...item, count: item.quantity })))
-  const fields = survey && rating ? survey.joistFields.map((_, index) => judgeField(survey, rating, index, items)) : []
+  const fields = survey && rating ? judgeFields(survey, rating, documents, items) : []
   const ratedTotalLb = ratedTotalOf(rating, fields)
   const worstJoist = worstJoistOf(fields)
   const chance = ratedTotalLb === null ? null : chanceOfExceeding(total, ratedTotalLb)
@@ -59,14 +60,17 @@ export const placedItem = (item: Omit<ContentsItem, 'fieldNumber' | 'weightSourc
   id: item.id, weightLb: item.quantity * item.typicalLb, xFt: item.xFt, yFt: item.yFt, lengthFt: item.lengthFt, widthFt: item.widthFt,
 })
 
-function judgeField(survey: AtticSurvey, rating: AtticRating, index: number, items: readonly ContentsItem[]): JudgedField {
-  const surveyed = survey.joistFields[index]!
-  const answer = loadFieldOf(survey, surveyed, rating.ratedPsf)
+function judgeFields(survey: AtticSurvey, rating: AtticRating, documents: readonly AtticDocument[], items: readonly ContentsItem[]): JudgedField[] {
+  const letterAccepts = strongbackOpinion(documents, survey.surveyedOn).kind === 'accepted'
+  return survey.joistFields.map((surveyed, index) => judgeField(loadFieldOf(survey, surveyed, rating.ratedPsf, letterAccepts), surveyed.name, index, items))
+}
+
+function judgeField(answer: LoadFieldAnswer, name: string, index: number, items: readonly ContentsItem[]): JudgedField {
   const here = items.filter(item => item.fieldNumber === index + 1).map(placedItem)
   const plan = answer.kind === 'field'
     ? judgeLoadPlan(answer.field, here, { member: answer.memberAssumed ? undefined : answer.member, strongbacksCount: answer.strongbacksCount })
     : null
-  return { number: index + 1, name: surveyed.name, answer, plan }
+  return { number: index + 1, name, answer, plan }
 }
 
 /** Only when every field is measured: a part would make the whole look smaller than it is, or larger. */

@@ -2,7 +2,7 @@ import type { ContentState, JudgedContents } from '../../types/contents'
 import { formatLoad, formatShare, formatWeight, type UnitSystem } from '../units'
 import { CHANCE_LIMIT } from '../upkeep/findAtticFindings'
 import { chanceSentence } from './goodsMessages'
-import { LIMIT_WORDS } from './ratingReasons'
+import { PLAN_LIMIT_WORDS } from './planMessages'
 
 export const CONTENT_STATE_WORDS: Record<ContentState, string> = {
   'empty': 'Empty',
@@ -13,8 +13,6 @@ export const CONTENT_STATE_WORDS: Record<ContentState, string> = {
   'no-storage': 'No storage',
   'unsurveyed': 'Not surveyed',
 }
-
-const PLAN_LIMIT_WORDS = { ...LIMIT_WORDS, moment: LIMIT_WORDS.bending }
 
 /** An attic's state as a verdict: word, number, why, whether it is to be unloaded first, and the one thing to do then. */
 export interface ContentsVerdict { word: string, says: string, number: string | null, why: string, unloadFirst: boolean, doNow: string | null }

@@ -35,13 +35,14 @@ function judgeJoists(field: LoadField, items: PlacedItem[], member: JoistMember,
   const loads = joistLoads(field, items)
   const traces = loads.map(list => traceSpan(field.spanFt, list))
   const shared = sharedTraces(field, loads, traces)
-  return traces.map((own, joist) => {
-    const sharedTrace = shared[joist] ?? own
-    const withStrongbacks = joistRatios(sharedTrace, rated)
+  return traces.map((trace, joist) => {
+    const own = joistRatios(trace, rated)
+    const sharedTrace = shared[joist] ?? trace
+    const withStrongbacks = sharedTrace === trace ? own : joistRatios(sharedTrace, rated)
     // Shear and bearing never count on sharing: a heavy thing at the wall stands on its own joists.
-    const ratios = { ...(strongbacksCount ? withStrongbacks : joistRatios(own, rated)), ...memberRatios(field, member, own) }
+    const ratios = { ...(strongbacksCount ? withStrongbacks : own), ...memberRatios(field, member, trace) }
     const governing = governingLimit(ratios)
-    return { ...ratios, ...governing, state: loadStateOf(governing.utilisation), loadLb: own.reactionsLb[0] + own.reactionsLb[1], withStrongbacks }
+    return { ...ratios, ...governing, state: loadStateOf(governing.utilisation), loadLb: trace.reactionsLb[0] + trace.reactionsLb[1], own, withStrongbacks }
   })
 }
 

@@ -39,9 +39,9 @@ function strongbackEiLbIn2(strongback: Strongback): number {
 }
 
 /** Sound strongbacks that an engineer accepts, alone; where there is none, all that are not known to be unsound, for show. */
-function strongbacksOf(field: JoistField, spanFt: number): { strongbacks: LoadField['strongbacks'], strongbacksCount: boolean } {
+function strongbacksOf(field: JoistField, spanFt: number, letterAccepts: boolean): { strongbacks: LoadField['strongbacks'], strongbacksCount: boolean } {
   const inside = field.strongbacks.filter(({ atFt, sound }) => sound !== false && atFt > 0 && atFt < spanFt)
-  const accepted = inside.filter(({ sound, engineerAccepts }) => sound === true && engineerAccepts)
+  const accepted = inside.filter(({ sound, engineerAccepts }) => sound === true && (engineerAccepts || letterAccepts))
   const strongbacks = (accepted.length > 0 ? accepted : inside)
     .map(strongback => ({ atFt: strongback.atFt, eiLbIn2: strongbackEiLbIn2(strongback) })).filter(({ eiLbIn2 }) => eiLbIn2 > 0)
   return { strongbacks, strongbacksCount: accepted.length > 0 && strongbacks.length > 0 }
@@ -49,9 +49,9 @@ function strongbacksOf(field: JoistField, spanFt: number): { strongbacks: LoadFi
 
 /**
  * A surveyed field made ready for a load plan at a rating. Span, spacing and count must be known; an unknown size is taken
- * as the weakest joist. Trusses and unknown framing get none, whatever is known of them.
+ * as the weakest joist. `letterAccepts`: an engineer's letter lets strongbacks share (strongbackOpinion). Trusses and unknown framing get none, whatever is known of them.
  */
-export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish' | 'insulation' | 'deck'>, field: JoistField, ratedPsf: number): LoadFieldAnswer {
+export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish' | 'insulation' | 'deck'>, field: JoistField, ratedPsf: number, letterAccepts = false): LoadFieldAnswer {
   if (survey.framing !== 'rafters-and-joists') return { kind: 'not-joists', fieldName: field.name, framing: survey.framing }
   const { spanFt, spacingIn } = field
   const joistCount = field.joistCount !== null && Number.isInteger(field.joistCount) && field.joistCount >= 2 ? field.joistCount : null
@@ -65,7 +65,7 @@ export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish
   const older = field.installedBeforeJune2013 === true && field.preJune2013StampProven
   const lumber = lumberValues(wood.species, wood.grade, sizeClassOf(section.depthIn), older)
   const dead = deadLoad(survey, { fieldName: field.name, ...section, spacingIn }, true)
-  const { strongbacks, strongbacksCount } = strongbacksOf(field, spanFt)
+  const { strongbacks, strongbacksCount } = strongbacksOf(field, spanFt, letterAccepts)
   return {
     kind: 'field', fieldName: field.name, strongbacksCount, memberAssumed: measured === null,
     field: { spanFt, spacingIn, joistCount, ratedPsf, joistEiLbIn2: lumber.ePsi * sectionProperties(section.breadthIn, section.depthIn).inertiaIn4, strongbacks },

@@ -1,11 +1,22 @@
+import type { AtticSurvey } from '../../types/attic'
 import type { LoadField, LoadPlanProblem, PlacedItem } from '../../types/loadPlan'
 import { checkLoadPlan } from './checkLoadPlan'
 import { joistLoads } from './itemShares'
+import { deflectionDivisor } from './joistCapacity'
 import { KCR_DRY, KCR_GREEN_OR_DAMP } from './ndsFactors'
 import { maxDeflection, traceSpan } from './spanTrace'
 
 /** A sag that anybody sees, as a share of the span (practice). */
 export const VISIBLE_DIVISOR = 120
+
+/**
+ * What decides how far stored goods may bend a ceiling: its finish (IRC R301.7) and whether the wood is damp. Where nobody
+ * has looked at the wood it is taken as damp, on the safe side.
+ */
+export function sagTerms(survey: Pick<AtticSurvey, 'ceilingFinish' | 'conditions'>): { deflectionDivisor: number, greenOrDamp: boolean } {
+  const greenOrDamp = survey.conditions === null || survey.conditions.some(condition => condition === 'wet' || condition === 'mouldy' || condition === 'rotten')
+  return { deflectionDivisor: deflectionDivisor(survey.ceilingFinish).divisor, greenOrDamp }
+}
 
 export interface JoistSag {
   immediateIn: number

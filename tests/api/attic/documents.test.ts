@@ -5,7 +5,7 @@ import { addDays } from '../../../shared/utils/days'
 import { plantCeilingHome, type CeilingHome } from '../../support/ceilingHome'
 import { startServer, type TestServer } from '../../support/server'
 import type { paperForm, Refusal } from './atticInputs'
-import { about, newAttic } from './atticInputs'
+import { about, joists, newAttic } from './atticInputs'
 import { emptyPdf } from './paperBytes'
 
 let server: TestServer
@@ -47,6 +47,22 @@ describe('a paper on file', () => {
     const bytes = await sharp({ create: { width: 40, height: 40, channels: 3, background: '#fff' } }).png().toBuffer()
     expect((await attic.paper(about(home.today), { bytes, name: '../../etc/letter.pdf' })).status).toBe(200)
     expect(await documentsOf(attic.id)).toMatchObject([{ mediaType: 'image/png', fileName: 'letter.pdf' }])
+  })
+
+  it('lets strongbacks count in the verdict when the engineer says so, and no longer once it is withdrawn', async () => {
+    const attic = await newAttic(home)
+    await attic.survey({ joistFields: [joists({ strongbacks: [{ atFt: 6, size: '2x6', breadthIn: null, depthIn: null, sound: true, engineerAccepts: false }] })] })
+    await attic.put({ xFt: 5, yFt: 7, quantity: 4 })
+    const counts = async () => {
+      const [field] = (await attic.read()).contents.fields
+      return field?.plan?.kind === 'judged' && field.plan.strongbacksCount
+    }
+    expect(await counts()).toBe(false)
+    const { body } = await attic.paper(about(home.today, { acceptsStrongbacks: true }))
+    expect(await documentsOf(attic.id)).toMatchObject([{ acceptsStrongbacks: true }])
+    expect(await counts()).toBe(true)
+    await home.owner.post(`/api/documents/${body.id}/withdrawal`)
+    expect(await counts()).toBe(false)
   })
 
   it('that was withdrawn rates nothing any more, and stays on file', async () => {
@@ -93,6 +109,7 @@ describe('what is no paper', () => {
     ['of a day to come', { writtenOn: '2198-01-01' }, 'writtenOn'],
     ['for a part that is not named', { coversWholeAttic: false }, 'area'],
     ['that states a load below zero', { ratedPsf: -1 }, 'ratedPsf'],
+    ['a permit that would let strongbacks share', { kind: 'permit', acceptsStrongbacks: true }, 'acceptsStrongbacks'],
     ['a permit that would lift a hold', { kind: 'permit', liftsHold: true }, 'liftsHold'],
   ])('is refused at its field: a paper %s', async (_what, change, field) => {
     const attic = await newAttic(home)

@@ -3,6 +3,7 @@ import { enableAutoUnmount } from '@vue/test-utils'
 import { afterEach, describe, expect, it } from 'vitest'
 import { nextTick } from 'vue'
 import LoadPlan from '../../../components/attic/LoadPlan.vue'
+import type { LoadPlanChange } from '../../../components/attic/loadPlanTypes'
 import LoadPlanTable from '../../../components/attic/LoadPlanTable.vue'
 import CeilingPlan from '../../../components/ceiling/CeilingPlan.vue'
 import MarkChartTable from '../../../components/ceiling/MarkChartTable.vue'
@@ -32,6 +33,8 @@ function boxed(wrapper: ReturnType<typeof mountUi>) {
   return wrapper
 }
 
+const changesOf = (wrapper: { emitted: (name: string) => unknown[][] | undefined }) => (wrapper.emitted('change') ?? []).map(([changes]) => changes as LoadPlanChange[])
+
 describe('the load plan on screen', () => {
   it('names every item with its weight, state and place, and every joist with its share in words', () => {
     const drawing = mountUi(LoadPlan, { props: plan })
@@ -42,12 +45,11 @@ describe('the load plan on screen', () => {
   })
 
   it('moves and sizes an item by arrow keys, and says where it stands now', async () => {
-    const drawing = mountUi(LoadPlan, { props: plan })
+    const drawing = mountUi(LoadPlan, { props: { ...plan, selectedIds: ['p'] } })
     const paper = drawing.get('button')
     await paper.trigger('keydown', { key: 'ArrowRight' })
     await paper.trigger('keydown', { key: 'ArrowLeft', shiftKey: true })
-    expect(drawing.emitted('move')).toEqual([[{ id: 'p', xFt: 6.5, yFt: 1 }]])
-    expect(drawing.emitted('resize')).toEqual([[{ id: 'p', lengthFt: 2, widthFt: 1.5 }]])
+    expect(changesOf(drawing)).toEqual([[{ id: 'p', xFt: 6.5, yFt: 1 }], [{ id: 'p', lengthFt: 2 }]])
     expect(plain(drawing.get('[role=status]').text())).toContain('Paper, 165 lb')
   })
 
@@ -55,24 +57,61 @@ describe('the load plan on screen', () => {
     const drawing = mountUi(LoadPlan, { props: plan })
     await drawing.get('button').trigger('focus')
     await drawing.get('button').trigger('keydown', { key: 'Escape' })
-    expect(drawing.emitted('select')).toEqual([['p'], [null]])
+    expect(drawing.emitted('select')).toEqual([[['p']], [[]]])
   })
 
-  it('follows a drag by half feet', async () => {
+  it('follows a drag by half feet, all of it one step to undo', async () => {
     const drawing = boxed(mountUi(LoadPlan, { props: plan }))
     await drawing.get('button').trigger('pointerdown', { button: 0, clientX: 250, clientY: 60 })
     for (const clientX of [252, 270, 271, 290]) await drawing.get('[role=group]').trigger('pointermove', { clientX, clientY: 60 })
     await drawing.get('[role=group]').trigger('pointerup')
     await drawing.get('[role=group]').trigger('pointermove', { clientX: 400, clientY: 60 })
-    expect(drawing.emitted('move')).toEqual([[{ id: 'p', xFt: 6.5, yFt: 1 }], [{ id: 'p', xFt: 7, yFt: 1 }]])
+    expect(changesOf(drawing)).toEqual([[{ id: 'p', xFt: 6.5, yFt: 1 }], [{ id: 'p', xFt: 7, yFt: 1 }]])
+    expect(new Set(drawing.emitted('change')?.map(([, gesture]) => gesture)).size).toBe(1)
   })
 
-  it('sizes an item by its corner', async () => {
-    const drawing = boxed(mountUi(LoadPlan, { props: { ...plan, selectedId: 'p' } }))
-    await drawing.get('.corner').trigger('pointerdown', { button: 0, clientX: 340, clientY: 100 })
+  it('Escape on the way puts a dragged item back', async () => {
+    const drawing = boxed(mountUi(LoadPlan, { props: plan }))
+    await drawing.get('button').trigger('pointerdown', { button: 0, clientX: 250, clientY: 60 })
+    await drawing.get('[role=group]').trigger('pointermove', { clientX: 290, clientY: 60 })
+    await drawing.get('button').trigger('keydown', { key: 'Escape' })
+    expect(changesOf(drawing).at(-1)).toEqual([{ id: 'p', xFt: 6, yFt: 1, lengthFt: 2.5, widthFt: 1.5 }])
+  })
+
+  it('moves all that are chosen together, by drag and by keys', async () => {
+    const drawing = boxed(mountUi(LoadPlan, { props: { ...plan, selectedIds: ['p', 't'] } }))
+    await drawing.get('button').trigger('keydown', { key: 'ArrowRight' })
+    expect(changesOf(drawing)[0]?.map(change => change.id)).toEqual(['p', 't'])
+    await drawing.get('button').trigger('pointerdown', { button: 0, clientX: 250, clientY: 60 })
+    await drawing.get('[role=group]').trigger('pointermove', { clientX: 290, clientY: 60 })
+    expect(changesOf(drawing)[1]?.map(change => change.id)).toEqual(['p', 't'])
+  })
+
+  it('adds to what is chosen with Ctrl, with Ctrl-A takes all, and with taps where several are asked for', async () => {
+    const drawing = boxed(mountUi(LoadPlan, { props: { ...plan, selectedIds: ['p'] } }))
+    const [paper, tools] = drawing.findAll('button')
+    await tools!.trigger('pointerdown', { button: 0, ctrlKey: true })
+    await tools!.trigger('keydown', { key: 'a', ctrlKey: true })
+    expect(drawing.emitted('select')).toEqual([[['p', 't']], [['p', 't']]])
+    await drawing.setProps({ several: true })
+    await paper!.trigger('pointerdown', { button: 0 })
+    await drawing.get('[role=group]').trigger('pointerup')
+    expect(drawing.emitted('select')?.at(-1)).toEqual([[]])
+    await tools!.trigger('click', { detail: 0 })
+    expect(drawing.emitted('select')?.at(-1)).toEqual([['p', 't']])
+  })
+
+  it('sizes an item by each of its four corners', async () => {
+    const drawing = boxed(mountUi(LoadPlan, { props: { ...plan, selectedIds: ['p'] } }))
+    await drawing.get('.corner.end.last').trigger('pointerdown', { button: 0, clientX: 340, clientY: 100 })
     await drawing.get('[role=group]').trigger('pointermove', { clientX: 380, clientY: 100 })
-    expect(drawing.emitted('resize')).toEqual([[{ id: 'p', lengthFt: 3.5, widthFt: 1.5 }]])
-    expect(drawing.emitted('move')).toBeUndefined()
+    await drawing.get('[role=group]').trigger('pointerup')
+    await drawing.get('.corner.start.first').trigger('pointerdown', { button: 0, clientX: 240, clientY: 40 })
+    await drawing.get('[role=group]').trigger('pointermove', { clientX: 280, clientY: 40 })
+    expect(changesOf(drawing)).toEqual([[{ id: 'p', xFt: 6, yFt: 1, lengthFt: 3.5, widthFt: 1.5 }], [{ id: 'p', xFt: 7, yFt: 1, lengthFt: 1.5, widthFt: 1.5 }]])
+    expect(drawing.findAll('.corner')).toHaveLength(4)
+    await drawing.setProps({ selectedIds: ['p', 't'] })
+    expect(drawing.findAll('.corner')).toHaveLength(0)
   })
 
   it('that is only shown does not move', async () => {
@@ -80,7 +119,16 @@ describe('the load plan on screen', () => {
     await drawing.get('button').trigger('pointerdown', { button: 0, clientX: 0, clientY: 0 })
     await drawing.get('[role=group]').trigger('pointermove', { clientX: 200, clientY: 0 })
     await drawing.get('button').trigger('keydown', { key: 'ArrowRight' })
-    expect(drawing.emitted('move')).toBeUndefined()
+    expect(drawing.emitted('change')).toBeUndefined()
+  })
+
+  it('hatches where the chosen item may not go, and draws strongbacks across', () => {
+    const drawing = mountUi(LoadPlan, { props: { ...plan, selectedIds: ['p'], strongbacksAtFt: [7], shades: [{ x: 0.25, y: 0, w: 0.5, h: 0.5, tone: 'over' }] } })
+    const rect = drawing.get('.shades rect')
+    expect(rect.attributes()).toMatchObject({ x: '25.000%', width: '50.000%' })
+    expect(rect.attributes('fill')).toMatch(/shade-over/)
+    expect(drawing.get('.strongback').attributes('style')).toContain('50')
+    expect(drawing.find('.centre').exists()).toBe(true)
   })
 
   it('draws a field without items, and with a single joist', () => {
@@ -95,15 +143,14 @@ describe('the load plan as a table', () => {
     const box = (label: string) => table.get(`input[aria-label="${label}"]`)
     await box('Paper, from the south wall, ft').setValue('11.5')
     await box('Paper, along the joists, ft').setValue('3 1/2')
-    expect(table.emitted('move')).toEqual([[{ id: 'p', xFt: 11.5, yFt: 1 }]])
-    expect(table.emitted('resize')).toEqual([[{ id: 'p', lengthFt: 3.5, widthFt: 1.5 }]])
+    expect(changesOf(table)).toEqual([[{ id: 'p', xFt: 11.5 }], [{ id: 'p', lengthFt: 3.5 }]])
   })
 
   it('refuses a place outside the field at the box, and keeps what was typed', async () => {
     const table = mountUi(LoadPlanTable, { props: plan })
     const box = table.get('input[aria-label="Paper, from the south wall, ft"]')
     await box.setValue('40')
-    expect(table.emitted('move')).toBeUndefined()
+    expect(table.emitted('change')).toBeUndefined()
     expect(box.attributes('aria-invalid')).toBe('true')
     expect(document.getElementById(box.attributes('aria-describedby') ?? '')?.textContent).toBe('Between 0 and 11.5 ft.')
     expect(box.element).toHaveProperty('value', '40')
@@ -113,7 +160,7 @@ describe('the load plan as a table', () => {
     const table = mountUi(LoadPlanTable, { props: plan, global: { provide: { [unitSystemKey as symbol]: 'metric' } } })
     expect(plain(table.text())).toContain('75 kg')
     await table.get('input[aria-label="Paper, from the south wall, m"]').setValue('3.048')
-    expect((table.emitted('move')?.[0]?.[0] as { xFt: number }).xFt).toBeCloseTo(10, 9)
+    expect(changesOf(table)[0]?.[0]?.xFt).toBeCloseTo(10, 9)
   })
 })
 

@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { fieldDepthFt, joistsUnder, nearerWall, placeInside, sizeInside, stepByKey } from '../../../components/attic/loadPlanGeometry'
+import { fieldDepthFt, isArrow, isChange, joistsUnder, moveTogether, nearerWall, sizeFromCorner, stepByKey, turnInside } from '../../../components/attic/loadPlanGeometry'
 import type { LoadPlanItem } from '../../../components/attic/loadPlanTypes'
 import { itemWords, joistWords, wallWords } from '../../../components/attic/loadPlanWords'
 
@@ -19,36 +19,67 @@ describe('the load plan', () => {
     expect(fieldDepthFt({ ...field, joistCount: 1 })).toBe(0)
   })
 
-  it('keeps an item inside its field wherever it is dragged', () => {
-    fc.assert(fc.property(anyField, size, size, far, far, (f, lengthFt, widthFt, x, y) => {
-      const place = placeInside(f, { xFt: 0, yFt: 0, lengthFt, widthFt }, x, y)
-      expect(place.xFt).toBeGreaterThanOrEqual(0)
-      expect(place.yFt).toBeGreaterThanOrEqual(0)
-      expect(place.xFt + lengthFt).toBeLessThanOrEqual(f.spanFt + 1e-9)
-      expect(place.yFt + widthFt).toBeLessThanOrEqual(fieldDepthFt(f) + 1e-9)
+  it('keeps everything inside its field wherever it is dragged, and apart as it was', () => {
+    fc.assert(fc.property(anyField, fc.array(fc.record({ lengthFt: size, widthFt: size, x: fc.double({ min: 0, max: 1, noNaN: true }), y: fc.double({ min: 0, max: 1, noNaN: true }) }), { minLength: 1, maxLength: 4 }), far, far, (f, list, dx, dy) => {
+      const depth = fieldDepthFt(f)
+      const items = list.map(({ x, y, ...rest }, index) => ({ id: String(index), ...rest, xFt: x * (f.spanFt - rest.lengthFt), yFt: y * (depth - rest.widthFt) }))
+      const moved = moveTogether(f, items, items[0]!, dx, dy)
+      moved.forEach((place, index) => {
+        const item = items[index]!
+        expect(place.xFt!).toBeGreaterThanOrEqual(-1e-9)
+        expect(place.yFt!).toBeGreaterThanOrEqual(-1e-9)
+        expect(place.xFt! + item.lengthFt).toBeLessThanOrEqual(f.spanFt + 1e-9)
+        expect(place.yFt! + item.widthFt).toBeLessThanOrEqual(depth + 1e-9)
+        expect(place.xFt! - moved[0]!.xFt!).toBeCloseTo(item.xFt - items[0]!.xFt, 9)
+      })
     }))
   })
 
-  it('keeps an item inside its field however it is stretched, and never smaller than half a foot', () => {
-    fc.assert(fc.property(anyField, far, far, (f, lengthFt, widthFt) => {
-      const sized = sizeInside(f, { xFt: 1, yFt: 1, lengthFt: 1, widthFt: 1 }, lengthFt, widthFt)
+  it('a single item lands on the half-foot grid, or at the edge', () => {
+    expect(moveTogether(field, [paper], paper, 1.1, -0.2)).toEqual([{ id: 'p', xFt: 7.5, yFt: 9.5 }])
+    expect(moveTogether(field, [paper], paper, 90, -90)).toEqual([{ id: 'p', xFt: 11.5, yFt: 0 }])
+  })
+
+  it('keeps an item inside its field whichever corner is pulled how far, never smaller than half a foot, the other corner where it was', () => {
+    const corner = fc.record({ x: fc.constantFrom('start' as const, 'end' as const), y: fc.constantFrom('first' as const, 'last' as const) })
+    fc.assert(fc.property(anyField, corner, far, far, (f, pulled, dx, dy) => {
+      const before = { xFt: 1, yFt: 1, lengthFt: 1, widthFt: 1 }
+      const sized = sizeFromCorner(f, before, pulled, dx, dy)
       expect(Math.min(sized.lengthFt, sized.widthFt)).toBeGreaterThanOrEqual(0.5)
-      expect(1 + sized.lengthFt).toBeLessThanOrEqual(f.spanFt)
-      expect(1 + sized.widthFt).toBeLessThanOrEqual(fieldDepthFt(f) + 1e-9)
+      expect(Math.min(sized.xFt, sized.yFt)).toBeGreaterThanOrEqual(0)
+      expect(sized.xFt + sized.lengthFt).toBeLessThanOrEqual(f.spanFt + 1e-9)
+      expect(sized.yFt + sized.widthFt).toBeLessThanOrEqual(fieldDepthFt(f) + 1e-9)
+      expect(pulled.x === 'end' ? sized.xFt : sized.xFt + sized.lengthFt).toBeCloseTo(pulled.x === 'end' ? 1 : 2, 9)
+      expect(pulled.y === 'last' ? sized.yFt : sized.yFt + sized.widthFt).toBeCloseTo(pulled.y === 'last' ? 1 : 2, 9)
     }))
+  })
+
+  it('turns an item inside the field, and not where it would not fit', () => {
+    expect(turnInside(field, { xFt: 12, yFt: 0, lengthFt: 1, widthFt: 3 })).toEqual({ xFt: 11, yFt: 0, lengthFt: 3, widthFt: 1 })
+    expect(turnInside(field, { xFt: 0, yFt: 0, lengthFt: 1, widthFt: 15 })).toBeNull()
   })
 
   it('moves by half a foot a press, with Shift sizes by half a foot', () => {
-    expect(stepByKey(field, paper, 'ArrowLeft', false)).toEqual({ kind: 'move', xFt: 6, yFt: 9.5 })
-    expect(stepByKey(field, paper, 'ArrowDown', false)).toEqual({ kind: 'move', xFt: 6.5, yFt: 10 })
-    expect(stepByKey(field, paper, 'ArrowRight', true)).toEqual({ kind: 'resize', lengthFt: 3, widthFt: 1.5 })
-    expect(stepByKey(field, paper, 'ArrowUp', true)).toEqual({ kind: 'resize', lengthFt: 2.5, widthFt: 1 })
+    expect(stepByKey(field, [paper], 'ArrowLeft', false)).toEqual([{ id: 'p', xFt: 6, yFt: 9.5 }])
+    expect(stepByKey(field, [paper], 'ArrowDown', false)).toEqual([{ id: 'p', xFt: 6.5, yFt: 10 }])
+    expect(stepByKey(field, [paper], 'ArrowRight', true)).toEqual([{ id: 'p', lengthFt: 3 }])
+    expect(stepByKey(field, [paper], 'ArrowUp', true)).toEqual([{ id: 'p', widthFt: 1 }])
+  })
+
+  it('moves several as one: the first that meets a wall stops them all', () => {
+    const tools = { ...paper, id: 't', xFt: 0, yFt: 0 }
+    expect(stepByKey(field, [paper, tools], 'ArrowRight', false).map(change => change.xFt)).toEqual([7, 0.5])
+    expect(stepByKey(field, [paper, tools], 'ArrowLeft', false)).toEqual([])
   })
 
   it('does nothing at the edge, and nothing for other keys', () => {
-    expect(stepByKey(field, { ...paper, xFt: 0 }, 'ArrowLeft', false)).toBeNull()
-    expect(stepByKey(field, { ...paper, widthFt: 0.5 }, 'ArrowUp', true)).toBeNull()
-    expect(stepByKey(field, paper, 'a', false)).toBeNull()
+    expect(stepByKey(field, [{ ...paper, xFt: 0 }], 'ArrowLeft', false)).toEqual([])
+    expect(stepByKey(field, [{ ...paper, widthFt: 0.5 }], 'ArrowUp', true)).toEqual([])
+    expect(stepByKey(field, [paper], 'a', false)).toEqual([])
+    expect(stepByKey(field, [], 'ArrowUp', false)).toEqual([])
+    expect([isArrow('ArrowUp'), isArrow('Enter')]).toEqual([true, false])
+    expect(isChange([paper], [{ id: 'p', xFt: 6.5 }])).toBe(false)
+    expect(isChange([paper], [{ id: 'other', xFt: 1 }])).toBe(false)
   })
 
   it('names the joists an item stands on or between', () => {

@@ -5,7 +5,7 @@ import type { DistanceRow } from '../../../shared/utils/structure/distanceFromWa
 import { judgeLoadPlan } from '../../../shared/utils/structure/judgeLoadPlan'
 import { loadPlan } from '../../../shared/utils/structure/loadPlan'
 import { personOnJoist } from '../../../shared/utils/structure/personOnJoist'
-import { sagOverTime } from '../../../shared/utils/structure/sagOverTime'
+import { sagOverTime, sagTerms } from '../../../shared/utils/structure/sagOverTime'
 import { whereMayItGo } from '../../../shared/utils/structure/whereMayItGo'
 import type { NewItem, Places } from '../../../shared/utils/structure/whereMayItGo'
 
@@ -145,6 +145,13 @@ describe('sag over time', () => {
     expect(answer).toMatchObject({ kcr, finishLimitIn: 168 / 240, visibleLimitIn: 168 / 120 })
     expect(joist?.finishRatio).toBeCloseTo(kcr * immediateIn / 0.7, 10)
     expect(joist?.visibleRatio).toBeCloseTo(kcr * immediateIn / 1.4, 10)
+  })
+
+  it('plaster is held to L/360, and wood nobody looked at is taken as damp', () => {
+    expect(sagTerms({ ceilingFinish: 'plaster-on-lath', conditions: [] })).toEqual({ deflectionDivisor: 360, greenOrDamp: false })
+    expect(sagTerms({ ceilingFinish: 'gypsum-half-inch', conditions: null })).toEqual({ deflectionDivisor: 240, greenOrDamp: true })
+    expect(sagTerms({ ceilingFinish: 'wood-boards', conditions: ['wet'] }).greenOrDamp).toBe(true)
+    expect(sagTerms({ ceilingFinish: 'wood-boards', conditions: ['notched'] }).greenOrDamp).toBe(false)
   })
 
   it('refuses a plan that cannot be', () => {
