@@ -1,6 +1,7 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Connection } from '../../server/db/connect'
+import type { Me } from '../../shared/types/people'
 import { desk, openBrowser, openPage, phone, visit, wholePageFindings, type OpenPage } from '../support/browser'
 import { begin, inventOwner, signUp, type Client } from '../support/client'
 import { bringIn, inventAddress, lookInto, makeHome, newestLink, tenantTerms } from '../support/people'
@@ -68,6 +69,35 @@ describe('coming in', () => {
       await press(page, 'Sign in')
       await page.waitForURL('**/account')
     }, /401/)
+  })
+
+  it('what is typed and ticked before the page\'s script has come is not lost', async () => {
+    const { client, owner } = await signUp(server.url)
+    const held = async (page: Page, path: string, work: () => Promise<void>) => {
+      let release = () => {}
+      const released = new Promise<void>(resolve => release = resolve)
+      await page.route('**/_nuxt/*.js', route => released.then(() => route.continue()))
+      await page.goto(path, { waitUntil: 'commit' })
+      await work()
+      release()
+      await page.waitForLoadState('networkidle')
+    }
+    await within({ url: server.url, screen: phone }, async ({ page }) => {
+      await held(page, '/sign-in', async () => {
+        await page.getByLabel('E-mail address').fill(owner.email)
+        await page.getByLabel('Password').fill(owner.password)
+      })
+      expect(await page.getByLabel('E-mail address').inputValue()).toBe(owner.email)
+      await press(page, 'Sign in')
+      await page.waitForURL('**/overview')
+    })
+    await within({ url: server.url, screen: phone, as: client }, async ({ page }) => {
+      const digest = page.getByRole('checkbox').first()
+      await held(page, '/account', () => digest.uncheck())
+      await press(page, 'Save')
+      await expect.poll(async () => (await client.get<Me>('/api/me')).body.digest).toBe(false)
+      expect(await digest.isChecked()).toBe(false)
+    })
   })
 
   it('a forgotten password is set anew by the mailed link', async () => {
