@@ -1,5 +1,6 @@
 import cron from 'node-cron'
 import { failReview } from '../db/commands/failReview'
+import { forgetLoosePhotos } from '../db/commands/forgetLoosePhotos'
 import { reviewOrganisation } from '../db/commands/reviewOrganisation'
 import { findOrganisationsToReview } from '../db/queries/reviews'
 import { startJobQueue, type JobQueue, type ReviewOrder } from './jobQueue'
@@ -7,6 +8,7 @@ import { kickMail, setMailSender } from './kickMail'
 import { logTrouble } from './logTrouble'
 import { createMailer } from './mailer'
 import { createMailSender } from './mailSender'
+import { usePhotoStore } from './photoStore'
 import { useDb } from './useDb'
 
 export interface Background { queue: JobQueue, stop: () => Promise<void> }
@@ -26,10 +28,12 @@ export function startBackground(settings: { databaseUrl: string, smtpUrl: string
     review,
     reviewFailed: order => failReview(useDb(), order),
     mail: async () => sender?.send(),
+    tidy: async () => void await forgetLoosePhotos(useDb(), usePhotoStore()),
   })
   const clock = [
     cron.schedule('*/15 * * * *', () => orderDueReviews(queue), { name: 'review-due', noOverlap: true }),
-    cron.schedule('* * * * *', () => orderMail(queue), { name: 'mail-due', noOverlap: true }),
+    cron.schedule('* * * * *', () => orderAlone(queue, 'mail'), { name: 'mail-due', noOverlap: true }),
+    cron.schedule('40 3 * * *', () => orderAlone(queue, 'tidy'), { name: 'tidy-due', noOverlap: true }),
   ]
   const soon = setTimeout(() => void orderDueReviews(queue), 10_000)
   soon.unref()
@@ -59,7 +63,7 @@ async function orderDueReviews(queue: JobQueue) {
   }
 }
 
-async function orderMail(queue: JobQueue) {
-  try { await queue.order('mail', {}, 'mail') }
-  catch (error) { logTrouble('Sending of mail could not be ordered', error) }
+async function orderAlone(queue: JobQueue, name: 'mail' | 'tidy') {
+  try { await queue.order(name, {}, name) }
+  catch (error) { logTrouble(`The work '${name}' could not be ordered`, error) }
 }

@@ -8,11 +8,12 @@ export interface QueueWork {
   review: (order: ReviewOrder) => Promise<void>
   reviewFailed: (order: ReviewOrder) => Promise<void>
   mail: () => Promise<void>
+  tidy: () => Promise<void>
 }
 
 export interface JobQueue {
   /** False while the queue is not up yet (the database is away). */
-  order: (name: 'review' | 'mail', data: object, singletonKey: string) => Promise<boolean>
+  order: (name: 'review' | 'mail' | 'tidy', data: object, singletonKey: string) => Promise<boolean>
   stop: () => Promise<void>
 }
 
@@ -20,6 +21,7 @@ const TRY_AGAIN_MS = 5_000
 const STOP_WITHIN_MS = 10_000
 const REVIEW = { policy: 'short', retryLimit: 9, retryDelay: 2, retryBackoff: true, expireInMinutes: 60, deadLetter: 'review-failed' } as const
 const MAIL = { policy: 'short', retryLimit: 0, expireInMinutes: 10 } as const
+const TIDY = { policy: 'short', retryLimit: 3, retryDelay: 60, retryBackoff: true, expireInMinutes: 60 } as const
 const POLL_S = 2
 
 /**
@@ -86,8 +88,10 @@ async function setUp(boss: PgBoss, work: QueueWork) {
   await boss.createQueue('review-failed', { name: 'review-failed', retryLimit: 3 })
   await boss.createQueue('review', { name: 'review', ...REVIEW })
   await boss.createQueue('mail', { name: 'mail', ...MAIL })
+  await boss.createQueue('tidy', { name: 'tidy', ...TIDY })
   const polling = { pollingIntervalSeconds: POLL_S, batchSize: 1 }
   await boss.work<ReviewOrder>('review', polling, async ([job]) => { if (job) await work.review(job.data) })
   await boss.work<ReviewOrder>('review-failed', polling, async ([job]) => { if (job) await work.reviewFailed(job.data) })
   await boss.work('mail', polling, () => work.mail())
+  await boss.work('tidy', polling, () => work.tidy())
 }

@@ -4,11 +4,17 @@ import type { PhotoRef } from '../../../shared/types/photo'
 
 export const photoRefColumns = ['id', 'view', 'widthPx', 'heightPx', 'cameraTime', 'uploadedAt'] as const
 
-/** Loose: sent, but not yet part of a report, reading, item or job. */
-const loosePhotos = (db: Db | Trx, uploadedBy: string) => db.selectFrom('photo')
-  .where('uploadedBy', '=', uploadedBy)
-  .where('observationId', 'is', null).where('readingId', 'is', null).where('markId', 'is', null)
-  .where('itemId', 'is', null).where('jobId', 'is', null)
+/** What a photo can be part of. */
+export const PHOTO_OWNERS = ['observationId', 'readingId', 'markId', 'itemId', 'jobId'] as const
+
+/** Loose: sent, but not yet part of anything. */
+const allLoosePhotos = (db: Db | Trx) => db.selectFrom('photo').where(eb => eb.and(PHOTO_OWNERS.map(owner => eb(owner, 'is', null))))
+
+const loosePhotos = (db: Db | Trx, uploadedBy: string) => allLoosePhotos(db).where('uploadedBy', '=', uploadedBy)
+
+/** Those nobody named in time, and that nobody is naming just now. */
+export const lockLoosePhotosBefore = (trx: Trx, uploadedBefore: string, limit: number) =>
+  allLoosePhotos(trx).select(['id', 'storedKey']).where('uploadedAt', '<', uploadedBefore).orderBy('id').limit(limit).forUpdate().skipLocked().execute()
 
 export async function countLoosePhotos(db: Db, uploadedBy: string, since: string): Promise<number> {
   const row = await loosePhotos(db, uploadedBy).where('uploadedAt', '>=', since)

@@ -28,6 +28,7 @@ describe('the job queue', () => {
       },
       reviewFailed: async () => {},
       mail: async () => {},
+      tidy: async () => {},
     })
     await wait(500)
     expect(await queue.order('review', { organisationId: 'one' }, 'one')).toBe(false)
