@@ -7,6 +7,7 @@ import { fileURLToPath } from 'node:url'
 import { parseArgs, promisify } from 'node:util'
 import { chooseRoutes, openSession } from './lib/benchDemo.mjs'
 import { bringUpBench } from './lib/benchServers.mjs'
+import { isReviewQuickEnough, measureReview, reviewTableOf } from './lib/benchReview.mjs'
 import { timeStarts } from './lib/benchStart.mjs'
 import { domainTableOf, isQuickEnough, meetsTarget, tableOf } from './lib/benchTable.mjs'
 import { createKeeper, stopOnSignals } from './lib/keeper.mjs'
@@ -67,13 +68,16 @@ async function runBench() {
   const options = readOptions()
   const folder = makeTestFolder(root, keeper)
   const domain = await measureDomain()
-  const rows = await measureRoutes({ folder, options })
+  // The whole by default; `--only review` is that alone, `--only` with a route leaves the review out.
+  const reviewed = !options.only || options.only === 'review' ? await measureReview({ root, folder, keeper, say }) : undefined
+  const rows = options.only === 'review' ? [] : await measureRoutes({ folder, options })
   const starts = options.start ? await timeStarts({ root, folder, keeper }) : undefined
   const missed = rows.filter(row => meetsTarget(row) === false)
   const report = [
     '# Measured', '', describeMachine(), '',
     `${connections} connections, ${options.seconds} s a route in ${rounds} rounds by turns, on the demo; client, servers and database on the same machine. Ratio: requests a second held against the reference of the same run. Processor: the server's own time an answer, without the database's. Made anew: asked so that no kept answer is used, as after a change.`, '',
-    tableOf(rows), '', domainTableOf(domain),
+    ...(rows.length > 0 ? [tableOf(rows), ''] : []), domainTableOf(domain),
+    ...(reviewed ? ['', reviewTableOf(reviewed)] : []),
     ...(starts ? ['', `npm start: first ${starts.firstSeconds.toFixed(1)} s on an empty data folder, second ${starts.secondSeconds.toFixed(1)} s.`] : []),
   ].join('\n')
   say(`\n${report}\n`)
@@ -81,7 +85,7 @@ async function runBench() {
     mkdirSync(join(root, 'tests/bench'), { recursive: true })
     writeFileSync(join(root, 'tests/bench/latest.md'), `${report}\n`)
   }
-  return missed.length === 0 && domain.every(isQuickEnough)
+  return missed.length === 0 && domain.every(isQuickEnough) && (!reviewed || reviewed.nights.every(isReviewQuickEnough))
 }
 
 stopOnSignals(keeper)

@@ -1,4 +1,6 @@
+import { sql } from 'kysely'
 import type { Db, Trx } from '../connect'
+import { insertRows, rowSet } from '../rowSet'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
 import type { ChainState } from '../../../shared/types/record'
@@ -18,29 +20,54 @@ export interface RecordChange extends RecordSubject {
   after?: object | null
 }
 
+type Appended = { id: string, seq: number, hash: string }
+
 /**
  * Appends one entry to the chain of its unit (or of the organisation) in the caller's transaction.
  * The chain's row is locked until commit, so entries of one unit stand in one order; other units never wait.
  */
-export async function appendRecord(trx: Trx, actor: RecordActor, change: RecordChange): Promise<{ id: string, seq: number, hash: string }> {
-  const chainId = change.unitId ?? change.organisationId
-  await trx.insertInto('recordChain')
-    .values({ chainId, organisationId: change.organisationId, unitId: change.unitId, headHash: FIRST_HASH })
-    .onConflict(conflict => conflict.column('chainId').doNothing()).execute()
-  const chain = await trx.selectFrom('recordChain').selectAll().where('chainId', '=', chainId).forUpdate().executeTakeFirstOrThrow()
-  const entry = {
-    chainId, seq: chain.entries + 1, recordedAt: nowInstant(), actorId: actor.userId, actorName: actor.name,
-    action: change.action, subjectKind: change.subjectKind, subjectId: change.subjectId,
-    before: plain(change.before), after: plain(change.after), previousHash: chain.headHash,
-  }
-  const hash = hashEntry(entry)
-  const id = newId()
-  await trx.insertInto('recordEntry').values({
-    id, organisationId: change.organisationId, unitId: change.unitId, ...entry,
-    before: entry.before && JSON.stringify(entry.before), after: entry.after && JSON.stringify(entry.after), hash,
-  }).execute()
-  await trx.updateTable('recordChain').set({ entries: entry.seq, headHash: hash }).where('chainId', '=', chainId).execute()
-  return { id, seq: entry.seq, hash }
+export async function appendRecord(trx: Trx, actor: RecordActor, change: RecordChange): Promise<Appended> {
+  const [appended] = await appendRecords(trx, actor, [change])
+  return appended!
+}
+
+const chainIdOf = (change: RecordChange) => change.unitId ?? change.organisationId
+
+/** The same for many at once, on as many chains as they belong to; entries of one chain in the order given. */
+export async function appendRecords(trx: Trx, actor: RecordActor, changes: readonly RecordChange[]): Promise<Appended[]> {
+  if (changes.length === 0) return []
+  const chains = await lockChains(trx, changes)
+  const recordedAt = nowInstant()
+  const entries = changes.map((change) => {
+    const chain = chains.get(chainIdOf(change))!
+    const entry = {
+      chainId: chain.chainId, seq: chain.entries + 1, recordedAt, actorId: actor.userId, actorName: actor.name,
+      action: change.action, subjectKind: change.subjectKind, subjectId: change.subjectId,
+      before: plain(change.before), after: plain(change.after), previousHash: chain.headHash,
+    }
+    const hash = hashEntry(entry)
+    Object.assign(chain, { entries: entry.seq, headHash: hash })
+    return { id: newId(), organisationId: change.organisationId, unitId: change.unitId, ...entry, hash }
+  })
+  await insertRows(trx, 'recordEntry', entries, ENTRY_COLUMNS)
+  await sql`update record_chain c set entries = v.entries, head_hash = v.head_hash
+    from ${rowSet([...chains.values()], { chainId: 'uuid', entries: 'integer', headHash: 'text' })} where c.chain_id = v.chain_id`.execute(trx)
+  return entries.map(({ id, seq, hash }) => ({ id, seq, hash }))
+}
+
+const ENTRY_COLUMNS = {
+  id: 'uuid', organisationId: 'uuid', unitId: 'uuid', chainId: 'uuid', seq: 'integer', recordedAt: 'timestamptz', actorId: 'uuid', actorName: 'text', action: 'text',
+  subjectKind: 'text', subjectId: 'uuid', before: 'jsonb', after: 'jsonb', previousHash: 'text', hash: 'text',
+} as const
+
+/** In the order of their ids, so that two who lock several never wait for each other crosswise. */
+async function lockChains(trx: Trx, changes: readonly RecordChange[]) {
+  const missing = new Map(changes.map(change => [chainIdOf(change), { chainId: chainIdOf(change), organisationId: change.organisationId, unitId: change.unitId, headHash: FIRST_HASH }]))
+  await sql`insert into record_chain (chain_id, organisation_id, unit_id, head_hash) select chain_id, organisation_id, unit_id, head_hash
+    from ${rowSet([...missing.values()], { chainId: 'uuid', organisationId: 'uuid', unitId: 'uuid', headHash: 'text' })} order by chain_id on conflict (chain_id) do nothing`.execute(trx)
+  const { rows } = await sql<{ chainId: string, entries: number, headHash: string }>`
+    select chain_id, entries, head_hash from record_chain where chain_id = any(${[...missing.keys()]}::uuid[]) order by chain_id for update`.execute(trx)
+  return new Map(rows.map(row => [row.chainId, row]))
 }
 
 /** As it will come back from jsonb: no undefined, dates as text. */

@@ -13,7 +13,7 @@ import { lockUnit } from './lockUnit'
 import { tellStaffUrgent } from './tellStaff'
 import { updateUnitStatus } from './updateUnitStatus'
 
-type JudgedAttic = NonNullable<Awaited<ReturnType<typeof findJudgedAttic>>>
+export type JudgedAttic = NonNullable<Awaited<ReturnType<typeof findJudgedAttic>>>
 
 /**
  * Judges an attic anew from its latest survey, the documents in force and what is up there now: findings kept, urgent mail
@@ -40,23 +40,29 @@ export async function judgeLockedAttic(trx: Trx, attic: JudgedAttic): Promise<vo
     await trx.deleteFrom('atticStatus').where('atticId', '=', attic.id).execute()
     return
   }
-  const { judgement, contents } = await judgementOf(trx, attic)
-  const findings = findAtticFindings(judgement)
-  await storeStatus(trx, attic, statusOf(contents))
-  const changes = await keepFindings(trx, scope, findings)
+  const survey = await findLatestSurvey(trx, attic.id)
+  const { judgement, contents } = atticJudgement(attic, { survey, documents: await findDocuments(trx, attic.id), items: await findItemsIn(trx, attic.id) }, dayIn(attic.timeZone))
+  await storeStatus(trx, attic, atticStatus(contents))
+  const changes = await keepFindings(trx, scope, findAtticFindings(judgement))
   await tellStaffUrgent(trx, { ...scope, changes })
 }
 
-async function judgementOf(trx: Trx, attic: JudgedAttic): Promise<{ judgement: AtticJudgement, contents: JudgedContents }> {
-  const survey = await findLatestSurvey(trx, attic.id)
-  const documents = await findDocuments(trx, attic.id)
-  const rows = await findItemsIn(trx, attic.id)
-  const contents = judgeContents({ survey: survey?.answers ?? null, documents: documents.map(asAtticDocument), items: rows })
+/** What an attic is judged from besides itself: the survey that holds, papers in force, what is up there. */
+export interface AtticMaterial {
+  survey: Pick<Survey, 'answers' | 'surveyedOn'> | undefined
+  documents: Awaited<ReturnType<typeof findDocuments>>
+  items: Awaited<ReturnType<typeof findItemsIn>>
+}
+type Survey = NonNullable<Awaited<ReturnType<typeof findLatestSurvey>>>
+
+/** What the rules read of an attic today, and its contents judged. */
+export function atticJudgement(attic: JudgedAttic, { survey, documents, items }: AtticMaterial, today: string): { judgement: AtticJudgement, contents: JudgedContents } {
+  const contents = judgeContents({ survey: survey?.answers ?? null, documents: documents.map(asAtticDocument), items })
   const inspections = documents.filter(document => document.kind === 'inspection-record').map(document => document.writtenOn)
   return {
     contents,
     judgement: {
-      atticId: attic.id, today: dayIn(attic.timeZone), items: rows.map(asAtticItem), rating: contents.rating,
+      atticId: attic.id, today, items: items.map(asAtticItem), rating: contents.rating,
       load: loadOf(contents), outside: contents.outside, ratedTotalLb: contents.ratedTotalLb,
       confirmedOn: attic.inventoryConfirmedOn,
       inspectedOn: [...inspections, ...(survey ? [survey.surveyedOn] : [])].sort().at(-1) ?? null,
@@ -74,14 +80,15 @@ function loadOf(contents: JudgedContents): AtticJudgement['load'] {
   }
 }
 
-type Status = Pick<AtticStatusTable, 'loadState' | 'utilisation' | 'storedLb' | 'ratedPsf'>
+export type AtticStatus = Pick<AtticStatusTable, 'loadState' | 'utilisation' | 'storedLb' | 'ratedPsf'>
 
-function statusOf({ state, rating, totalLb, utilisation }: JudgedContents): Status {
+/** What is kept of an attic's judgement for the portfolio. */
+export function atticStatus({ state, rating, totalLb, utilisation }: JudgedContents): AtticStatus {
   const loadState = state === 'empty' ? 'within' : state === 'no-storage' ? totalLb > 0 ? 'over' : 'within' : state
   return { loadState, utilisation: rating && !rating.hold && utilisation !== null && Number.isFinite(utilisation) ? utilisation : null, storedLb: totalLb, ratedPsf: rating?.ratedPsf ?? null }
 }
 
-async function storeStatus(trx: Trx, attic: JudgedAttic, status: Status) {
+async function storeStatus(trx: Trx, attic: JudgedAttic, status: AtticStatus) {
   const row = { ...status, judgedAt: nowInstant() }
   await trx.insertInto('atticStatus').values({ atticId: attic.id, organisationId: attic.organisationId, unitId: attic.unitId, ...row })
     .onConflict(conflict => conflict.column('atticId').doUpdateSet(row)).execute()

@@ -1,30 +1,37 @@
-import { dueItems, type DueItem } from '../../../shared/utils/upkeep/dueItems'
+import { sql } from 'kysely'
+import type { DueItem } from '../../../shared/utils/upkeep/dueItems'
 import type { Trx } from '../connect'
-import { dayIn, nowInstant } from '../../utils/clock'
+import { rowSet } from '../rowSet'
+import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
-import { findDueInput, type ReviewedUnit } from '../queries/reviewing'
 
-/**
- * Makes the open due items of a unit be what is due today: adds what fell due, settles what was done. An item that is still
- * due keeps its row, and with it the count of reminders.
- */
-export async function keepDueItems(trx: Trx, unit: ReviewedUnit): Promise<{ due: number }> {
-  const wanted = unit.archivedAt ? [] : dueItems(await findDueInput(trx, unit), dayIn(unit.timeZone))
-  const open = await trx.selectFrom('dueItem').select(['id', 'kind', 'subjectId']).where('unitId', '=', unit.id).where('settledAt', 'is', null).execute()
-  const keyOf = (item: { kind: string, subjectId: string }) => `${item.kind} ${item.subjectId}`
+interface OpenDue { id: string, kind: string, subjectId: string }
+
+/** The open due items of one unit, and what is due there today. */
+export interface JudgedDue { organisationId: string, unitId: string, open: readonly OpenDue[], wanted: readonly DueItem[] }
+
+const keyOf = (item: { kind: string, subjectId: string }) => `${item.kind} ${item.subjectId}`
+
+export function dueChanges({ open, wanted }: JudgedDue): { done: OpenDue[], added: DueItem[] } {
   const wantedKeys = new Set(wanted.map(keyOf))
   const openKeys = new Set(open.map(keyOf))
-  const done = open.filter(item => !wantedKeys.has(keyOf(item))).map(item => item.id)
-  if (done.length > 0) await trx.updateTable('dueItem').set({ settledAt: nowInstant() }).where('id', 'in', done).execute()
-  const added = wanted.filter(item => !openKeys.has(keyOf(item)))
-  if (added.length > 0) await addDueItems(trx, unit, added)
-  return { due: wantedKeys.size }
+  return { done: open.filter(item => !wantedKeys.has(keyOf(item))), added: wanted.filter(item => !openKeys.has(keyOf(item))) }
 }
 
-/** The same thing due on the same day again, after it was settled, opens its old row: a job sent back, a reading taken away. */
-async function addDueItems(trx: Trx, unit: ReviewedUnit, items: DueItem[]) {
-  await trx.insertInto('dueItem')
-    .values(items.map(({ kind, subjectId, dueOn }) => ({ id: newId(), organisationId: unit.organisationId, unitId: unit.id, kind, subjectId, dueOn, lastRemindedOn: null, settledAt: null, createdAt: nowInstant() })))
-    .onConflict(conflict => conflict.columns(['kind', 'subjectId', 'dueOn']).doUpdateSet({ settledAt: null }))
-    .execute()
+/**
+ * Makes the open due items of units be what is due today: adds what fell due, settles what was done. An item that is still
+ * due keeps its row, and with it the count of reminders. The same thing due on the same day again, after it was settled,
+ * opens its old row: a job sent back, a reading taken away.
+ */
+export async function keepDueItems(trx: Trx, judged: readonly JudgedDue[]): Promise<void> {
+  const changes = judged.map(one => ({ one, ...dueChanges(one) }))
+  const done = changes.flatMap(change => change.done.map(item => item.id))
+  const at = nowInstant()
+  if (done.length > 0) await trx.updateTable('dueItem').set({ settledAt: at }).where('id', '=', sql<string>`any(${done}::uuid[])`).execute()
+  const added = changes.flatMap(({ one, added: items }) => items.map(({ kind, subjectId, dueOn }) => ({ id: newId(), organisationId: one.organisationId, unitId: one.unitId, kind, subjectId, dueOn, createdAt: at })))
+  if (added.length === 0) return
+  const rows = rowSet(added, { id: 'uuid', organisationId: 'uuid', unitId: 'uuid', kind: 'text', subjectId: 'uuid', dueOn: 'date', createdAt: 'timestamptz' })
+  await sql`insert into due_item (id, organisation_id, unit_id, kind, subject_id, due_on, created_at)
+    select id, organisation_id, unit_id, kind, subject_id, due_on, created_at from ${rows}
+    on conflict (kind, subject_id, due_on) do update set settled_at = null`.execute(trx)
 }

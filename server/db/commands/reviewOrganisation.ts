@@ -6,7 +6,7 @@ import { findUnitsAfter } from '../queries/reviewing'
 import { escalateUnanswered } from './escalateUnanswered'
 import { makeCheckpoint } from './makeCheckpoint'
 import { queueDigests } from './queueDigests'
-import { reviewUnit } from './reviewUnit'
+import { reviewUnits } from './reviewUnits'
 
 export interface ReviewCounts { units: number, unitsDone: number, attics: number, marks: number, due: number, unanswered: number, digests: number }
 
@@ -69,7 +69,7 @@ async function runReview(db: Db, organisation: Organisation, today: string, runI
   try {
     counts.units = await countUnits(db, organisation.id)
     await note({ error: null })
-    await reviewUnits(db, organisation.id, counts, note)
+    await reviewInBatches(db, organisation.id, counts, note)
     counts.unanswered = await escalateUnanswered(db, organisation)
     const checkpoint = await db.transaction().execute(trx => makeCheckpoint(trx, organisation.id, today))
     counts.digests = await queueDigests(db, organisation, today, checkpoint)
@@ -88,27 +88,25 @@ async function countUnits(db: Db, organisationId: string): Promise<number> {
   return row.n
 }
 
-async function reviewUnits(db: Db, organisationId: string, counts: ReviewCounts, note: () => Promise<unknown>) {
+async function reviewInBatches(db: Db, organisationId: string, counts: ReviewCounts, note: () => Promise<unknown>) {
   let after: string | undefined
   for (;;) {
     const units = await findUnitsAfter(db, organisationId, after, UNITS_AT_ONCE)
     if (units.length === 0) return
-    for (const { id } of units) {
-      const { attics, marks, due } = await reviewUnitAgain(db, id)
-      counts.unitsDone += 1
-      counts.attics += attics
-      counts.marks += marks
-      counts.due += due
-    }
+    const { attics, marks, due } = await reviewUnitsAgain(db, organisationId, units.map(unit => unit.id))
+    counts.unitsDone += units.length
+    counts.attics += attics
+    counts.marks += marks
+    counts.due += due
     await note()
     after = units.at(-1)!.id
   }
 }
 
 /** Somebody may be writing in the same unit crosswise; the database then ends one of the two, and the review is the one that can wait. */
-async function reviewUnitAgain(db: Db, unitId: string, tries = 3) {
+async function reviewUnitsAgain(db: Db, organisationId: string, unitIds: string[], tries = 3) {
   for (;;) {
-    try { return await db.transaction().execute(trx => reviewUnit(trx, unitId)) }
+    try { return await reviewUnits(db, organisationId, unitIds) }
     catch (error) {
       tries -= 1
       if ((error as { code?: string }).code !== DEADLOCK || tries === 0) throw error

@@ -2,7 +2,7 @@ import { severityRank } from '../../../shared/utils/upkeep/compareFindings'
 import type { Trx } from '../connect'
 import { now } from '../../utils/clock'
 import { isLifeSafety, newMarkMail, urgentFindingMail, type MailedFinding } from '../../utils/findingMail'
-import { findStaff, findUnitPlace, type JudgedMark, type StaffMember } from '../queries/judging'
+import { findStaff, findUnitPlace, type JudgedMark, type JudgedReport, type StaffMember } from '../queries/judging'
 import type { KeptChange } from './keepFindings'
 import { queueMessage } from './queueMessage'
 
@@ -33,12 +33,11 @@ export async function tellStaffUrgent(trx: Trx, about: { organisationId: string,
   }
 }
 
-interface JudgedReport { number: number, receivedAt: string, reportedBy: string }
-
 /** A newly reported mark is announced once to everybody who decides but the reporter; anything urgent later, as for all findings. */
-export async function tellStaffAboutMark(trx: Trx, { mark, reports, changes }: { mark: JudgedMark, reports: JudgedReport[], changes: KeptChange[] }) {
+export async function tellStaffAboutMark(trx: Trx, { mark, reports, changes }: { mark: JudgedMark, reports: readonly JudgedReport[], changes: KeptChange[] }) {
   const first = reports[0]
   const isNew = first !== undefined && now().getTime() - new Date(mark.createdAt).getTime() < NEW_FOR_HOURS * 3_600_000
+  if (!isNew && !raised(changes).some(change => change.severity === 'urgent')) return
   const staff = await findStaff(trx, mark.organisationId)
   const untold = isNew ? await untoldOf(trx, mark.id, staff.filter(person => person.userId !== first.reportedBy)) : []
   if (untold.length > 0 && first) await announceMark(trx, mark, first, raised(changes), untold)

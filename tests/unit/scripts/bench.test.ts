@@ -3,6 +3,7 @@ import type { AddressInfo } from 'node:net'
 import { afterEach, beforeEach, expect, test } from 'vitest'
 import { measuresOf, percentile, pressInTurn } from '../../../scripts/lib/benchLoad.mjs'
 import { processorMs } from '../../../scripts/lib/benchProcess.mjs'
+import { isReviewQuickEnough, reviewTableOf } from '../../../scripts/lib/benchReview.mjs'
 import { domainTableOf, meetsTarget, tableOf } from '../../../scripts/lib/benchTable.mjs'
 import { chooseRoutes, openSession } from '../../../scripts/lib/benchDemo.mjs'
 
@@ -114,4 +115,12 @@ test('calculations alone have a table of their own', () => {
   ]).split('\n')
   expect(met).toBe('| plan | 2.000 | 3.000 | 8.000 | 4.0 | p50 < 4 ms | met |')
   expect(missed).toMatch(/ 10\.0 \| p50 < 40 ms \| \*\*missed\*\* \|$/)
+})
+
+test('the review shows marks a second beside the rate in memory, and misses when it takes too long', () => {
+  const night = { name: 'first night', marks: 1000, attics: 200, seconds: 2, mostSeconds: 60, marksPerSecond: 500, processorSeconds: 1.5, firstThirdMb: 150.2, lastThirdMb: 151.9 }
+  const table = reviewTableOf({ nights: [night, { ...night, seconds: 61 }], pureMarksPerSecond: 5000 })
+  expect(table).toContain('| first night | 1000 | 200 | 2.0 | 1.5 | 500 | 5000 | 0.10 | 150 / 152 | < 60 s | met |')
+  expect(table).toContain('| 61.0 | 1.5 | 500 | 5000 | 0.10 | 150 / 152 | < 60 s | **missed** |')
+  expect([isReviewQuickEnough(night), isReviewQuickEnough({ ...night, seconds: 60 })]).toEqual([true, false])
 })
