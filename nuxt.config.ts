@@ -1,3 +1,8 @@
+import { fileURLToPath } from 'node:url'
+
+/** Fonts of the printed papers; a PDF takes woff, with its letters in several files by alphabet. */
+const fontFolder = fileURLToPath(new URL('node_modules/@fontsource/nunito-sans/files', import.meta.url))
+
 /** Domain files name their siblings with the ending, so that any TypeScript runner loads them. */
 const compilerOptions = { noUncheckedIndexedAccess: true, allowImportingTsExtensions: true }
 
@@ -36,6 +41,7 @@ export default defineNuxtConfig({
     preset: 'node-server',
     output: { dir: process.env.LATHKEY_OUTPUT_DIR || '.output' },
     typescript: { tsConfig: { compilerOptions } },
+    serverAssets: [{ baseName: 'fonts', dir: fontFolder, pattern: 'nunito-sans-{latin,latin-ext,cyrillic,vietnamese}-{400,600,800}-normal.woff' }],
     compressPublicAssets: { gzip: true, brotli: true },
   },
   typescript: {

@@ -7,6 +7,7 @@ import { addCounts, noTests, oneCheck, summarize } from './lib/counts.mjs'
 import { installDependencies } from './lib/dependencies.mjs'
 import { createKeeper, stopOnSignals } from './lib/keeper.mjs'
 import { checkNodeVersion } from './lib/nodeVersion.mjs'
+import { ensurePoppler } from './lib/poppler.mjs'
 import { Refusal } from './lib/refusal.mjs'
 import { makeTestFolder } from './lib/testFolder.mjs'
 import { bringUpTestCluster, buildForTests } from './lib/testServices.mjs'
@@ -59,6 +60,7 @@ async function runOnBuiltServer(chosen, context) {
     return noTests
   })
   if (chosen.has('checks') && existsSync(join(root, 'scripts/size.mjs'))) await step('size', context, checkSize)
+  await ensurePoppler({ keeper, say })
   if (chosen.has('api')) await step('api', context, runProject('api'))
   if (!chosen.has('browser')) return
   await ensureChromium({ keeper, say })

@@ -16,6 +16,7 @@ const both = (path: string): Sample[] => [{ who: 'maren', path }, { who: 'tomas'
 const PAGES: Record<string, Sample[]> = {
   'account.vue': [...both('/account'), { who: 'bram', path: '/account' }],
   'attics/[atticId]/index.vue': [...both('/attics/:attic'), { who: 'ines', path: '/attics/:cottageAttic' }],
+  'attics/[atticId]/hatch-card.vue': both('/attics/:attic/hatch-card'),
   'attics/[atticId]/items/new.vue': one('maren', '/attics/:attic/items/new'),
   'attics/[atticId]/items/[itemId].vue': one('maren', '/attics/:attic/items/:item'),
   'attics/[atticId]/load-plan.vue': one('maren', '/attics/:attic/load-plan'),

@@ -25,12 +25,12 @@ function heaviest(field: LoadField, member: JoistMember, distanceFt: number): Di
   }, { distanceFt, weightLb: Number.POSITIVE_INFINITY, limit: 'bearing' })
 }
 
-/** Weight on one joist alone that brings it to 100 %, at 0, 1, 2 … ft from a bearing wall and at mid-span. */
-export function distanceFromWall(field: LoadField, member: JoistMember = weakestMember()): DistanceTable {
+/** Weight on one joist alone that brings it to 100 %, at each distance asked for, or at 0, 1, 2 … ft from a bearing wall and at mid-span. */
+export function distanceFromWall(field: LoadField, member: JoistMember = weakestMember(), distancesFt?: readonly number[]): DistanceTable {
   const problems = checkLoadPlan(field, [])
   if (problems.length > 0) return { kind: 'refused', problems }
   if (field.ratedPsf === 0) return { kind: 'nothing-allowed' }
   const middleFt = field.spanFt / 2
-  const distances = Array.from({ length: Math.ceil(middleFt) }, (_, foot) => foot)
-  return { kind: 'table', rows: [...distances, middleFt].map(distanceFt => heaviest(field, member, distanceFt)) }
+  const distances = distancesFt ?? [...Array.from({ length: Math.ceil(middleFt) }, (_, foot) => foot), middleFt]
+  return { kind: 'table', rows: distances.map(distanceFt => heaviest(field, member, distanceFt)) }
 }
