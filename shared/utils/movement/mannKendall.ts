@@ -40,14 +40,14 @@ export function kendallCounts(values: ArrayLike<number>): KendallCount[] {
 }
 
 /** Var(S) = [n(n−1)(2n+5) − Σt(t−1)(2t+5)]/18 over groups of t equal values (EPA QA/G-9S §4.3.4). */
-const varianceOf = ({ n, tieTerms }: KendallCount) => (term(n) - tieTerms) / 18
+export const varianceOfCount = ({ n, tieTerms }: KendallCount) => (term(n) - tieTerms) / 18
 
 export function varianceOfS(values: readonly number[]): number {
   const sizes = new Map<number, number>()
   for (const value of values) sizes.set(value, (sizes.get(value) ?? 0) + 1)
   let tieTerms = 0
   for (const size of sizes.values()) tieTerms += term(size)
-  return varianceOf({ n: values.length, s: 0, tieTerms, hasTies: false })
+  return varianceOfCount({ n: values.length, s: 0, tieTerms, hasTies: false })
 }
 
 /** Number of orderings of n different values with 0, 1, 2 … falling pairs. */
@@ -81,7 +81,7 @@ function exactChanceAtLeast(s: number, n: number): number {
 export function testCounts(count: KendallCount): MannKendall | null {
   const { n, s, hasTies } = count
   if (n < MANN_KENDALL_LEAST) return null
-  const varS = varianceOf(count)
+  const varS = varianceOfCount(count)
   const z = varS === 0 ? 0 : (s - Math.sign(s)) / Math.sqrt(varS)
   if (n <= EXACT_UP_TO && !hasTies) {
     return { s, varS, z, p: Math.min(1, 2 * exactChanceAtLeast(Math.abs(s), n)), pRising: exactChanceAtLeast(s, n), exact: true }

@@ -7,8 +7,9 @@ import { detectableRate, type DetectableRate } from './detectableRate'
 import { mannKendall, type MannKendall } from './mannKendall'
 import { nextBestReadingOn } from './nextBestReading'
 import { Z_975 } from './normal'
-import { seasonFit, type SeasonFit } from './seasonFit'
-import { DAYS_PER_YEAR, seriesOf, seriesSigma, spanDaysOf, timeSumOfSquares, yearsOf, type SeriesPoint, type TrendReading } from './series'
+import { SEASON_LEAST_READINGS, seasonFit, type SeasonFit } from './seasonFit'
+import { sameMonthsTest, type SeasonalKendall } from './seasonalKendall'
+import { DAYS_PER_YEAR, seriesOf, seriesSigma, spanDaysOf, timeSumOfSquares, TWELVE_MONTHS_DAYS, yearsOf, type SeriesPoint, type TrendReading } from './series'
 import { suddenRises, type SuddenRise } from './sudden'
 import { medianOf, theilSen } from './theilSen'
 
@@ -59,6 +60,10 @@ export interface MeasuredTrend extends TrendBasis {
   rise: number
   /** Null below 12 months or 8 readings: not yet separable from the season. */
   season: SeasonFit | null
+  /** The first day the season can be ruled out with readings going on as planned; null once it is. */
+  seasonRuledOutFrom: string | null
+  /** The same months of different years against each other; null below two years. Shown beside, no part of the rule. */
+  sameMonths: SeasonalKendall | null
   /** The first day on which the trend was already active with the readings up to then. */
   activeSince: string | null
 }
@@ -66,6 +71,8 @@ export interface MeasuredTrend extends TrendBasis {
 export type MarkTrend = TooFewReadings | MeasuredTrend
 
 type Settings = Required<TrendOptions>
+
+const MONTH_DAYS = 30
 
 function basisOf(points: SeriesPoint[], settings: Settings): TrendBasis {
   const sigma = points.length === 0 ? null : seriesSigma(points)
@@ -141,6 +148,12 @@ export function activeFromOn(readings: readonly TrendReading[], options: TrendOp
   return count === -1 ? null : dayFromNumber(points[count]!.day)
 }
 
+/** Twelve months after the first reading, and late enough for the missing ones at one a month. */
+function seasonRuledOutFrom(points: SeriesPoint[]): string {
+  const missing = Math.max(0, SEASON_LEAST_READINGS - points.length)
+  return dayFromNumber(Math.max(points[0]!.day + TWELVE_MONTHS_DAYS, points.at(-1)!.day + missing * MONTH_DAYS))
+}
+
 /** The activity alone, as `markTrend` gives it, at a small part of the work. */
 export function markActivity(readings: readonly TrendReading[], options: TrendOptions = {}): Activity {
   return activityAt(seriesOf(readings), settingsOf(options))
@@ -172,6 +185,8 @@ export function markTrend(readings: readonly TrendReading[], options: TrendOptio
     kind: 'measured',
     startOn: dayFromNumber(first.day),
     endOn: dayFromNumber(points.at(-1)!.day),
+    seasonRuledOutFrom: judged.season ? null : seasonRuledOutFrom(points),
+    sameMonths: sameMonthsTest(points),
     activeSince: judged.activity === 'active' ? activeSinceOf(points, settings) : null,
   }
 }

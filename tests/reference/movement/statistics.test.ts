@@ -4,6 +4,7 @@ import { addDays } from '../../../shared/utils/days'
 import { leastSquares } from '../../../shared/utils/movement/leastSquares'
 import { mannKendall } from '../../../shared/utils/movement/mannKendall'
 import { normalBelow, Z_80, Z_95, Z_975, Z_99 } from '../../../shared/utils/movement/normal'
+import { seasonalKendall } from '../../../shared/utils/movement/seasonalKendall'
 import { tQuantile975 } from '../../../shared/utils/movement/tQuantile'
 import { markTrend } from '../../../shared/utils/movement/trend'
 
@@ -52,6 +53,32 @@ describe('EPA QA/G-9S, Mann–Kendall example with ties', () => {
     const trend = markTrend([5, 6, 7, 8].map((value, i) => ({ takenOn: addDays('2026-01-01', i), value, sigma: 1 })))
     expect(trend.kind).toBe('too few readings')
     expect(trend.mannKendall).toMatchObject({ s: 6, exact: true })
+  })
+})
+
+describe('EPA Unified Guidance 2009, example 14-10: seasonal Kendall', () => {
+  const [month = [], , concentration = []] = columns('epa-ug-ex14-10-seasonal-kendall.csv')
+  const seasons = Array.from({ length: 12 }, (_, i) => concentration.filter((_, row) => month[row] === i + 1))
+
+  it('gives S 35 over twelve months of three years, standard deviation 6.557 and Z 5.18 (published results from memory)', () => {
+    expect(seasons.map(values => values.length)).toEqual(Array.from({ length: 12 }, () => 3))
+    const test = seasonalKendall(seasons)!
+    expect(test).toMatchObject({ s: 35, varS: expect.closeTo(43, 9), seasons: 12 })
+    expect(Math.sqrt(test.varS)).toBeCloseTo(6.557, 3)
+    expect(test.z).toBeCloseTo(5.18, 2)
+    expect(test.p).toBeLessThan(1e-6)
+  })
+
+  it('is reached through the trend of a mark with the same dated values', () => {
+    const trend = markTrend(concentration.map((value, row) => ({ takenOn: `${1983 + Math.floor(row / 12)}-${String(month[row]).padStart(2, '0')}-15`, value, sigma: 0.01 })))
+    expect(trend).toMatchObject({ kind: 'measured', sameMonths: { s: 35, varS: expect.closeTo(43, 9) } })
+  })
+
+  it('has no answer for one season, or below two years of a mark', () => {
+    expect(seasonalKendall([[1, 2, 3]])).toBeNull()
+    expect(seasonalKendall([[1], [2], [3]])).toBeNull()
+    const year = markTrend(concentration.slice(0, 20).map((value, row) => ({ takenOn: addDays('1983-01-15', row * 30), value, sigma: 0.01 })))
+    expect(year).toMatchObject({ kind: 'measured', sameMonths: null })
   })
 })
 

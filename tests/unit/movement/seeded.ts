@@ -18,20 +18,6 @@ export function normalOf(uniform: () => number): number {
   return Math.sqrt(-2 * Math.log(1 - uniform())) * Math.cos(2 * Math.PI * uniform())
 }
 
-export interface InventedMark { perYear: number, seasonPeakToPeak: number, months: number, sigma: number }
-
-/** Monthly readings of an invented mark: steady growth, a yearly season of random phase, normal errors. */
-export function inventedReadings(mark: InventedMark, uniform: () => number): TrendReading[] {
-  const phase = uniform()
-  const startOn = addDays('2025-01-01', Math.floor(uniform() * 365))
-  return Array.from({ length: mark.months }, (_, month) => {
-    const day = Math.round(month * DAYS_PER_YEAR / 12)
-    const years = day / DAYS_PER_YEAR
-    const season = mark.seasonPeakToPeak / 2 * Math.sin(2 * Math.PI * (years + phase))
-    return { takenOn: addDays(startOn, day), value: 3 + mark.perYear * years + season + mark.sigma * normalOf(uniform), sigma: mark.sigma }
-  })
-}
-
 /** A plain series for tests: values on the given days after 1 Jan 2026. */
 export function readingsOn(days: number[], values: number[], sigma = 0.2): TrendReading[] {
   return days.map((day, i) => ({ takenOn: addDays('2026-01-01', day), value: values[i]!, sigma }))

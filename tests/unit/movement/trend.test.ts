@@ -83,6 +83,12 @@ describe('Slope and activity', () => {
     expect(trend.slopePerYear - low).toBeCloseTo(half, 5)
   })
 
+  it('says from when a season can be ruled out: a year after the first reading, and with the missing ones at one a month', () => {
+    expect(measured(readingsOn([0, 20, 40, 60, 80, 100], [1, 1, 1, 1, 1, 1])).seasonRuledOutFrom).toBe('2027-01-01')
+    expect(measured(readingsOn([0, 70, 140, 210, 280, 350], [1, 1, 1, 1, 1, 1])).seasonRuledOutFrom).toBe(addDays('2026-01-01', 410))
+    expect(measured(monthly(14, () => 1)).seasonRuledOutFrom).toBeNull()
+  })
+
   it('does not count growth that a yearly season explains', () => {
     const season = monthly(18, years => 3 + Math.sin(2 * Math.PI * (years - 0.25)), 0.1)
     const trend = measured(season)
