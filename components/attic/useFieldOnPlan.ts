@@ -8,6 +8,7 @@ import type { PlanToMend } from './useSuggestedMoves'
 export function useFieldOnPlan(contents: Ref<JudgedContents>, items: Ref<NamedContentsItem[]>, fieldNumber: Ref<number>) {
   const current = computed(() => contents.value.fields.find(field => field.number === fieldNumber.value))
   const plan = computed(() => current.value?.plan?.kind === 'judged' ? current.value.plan : null)
+  const problems = computed(() => current.value?.plan?.kind === 'refused' ? current.value.plan.problems : [])
   const answer = computed(() => current.value?.answer.kind === 'field' ? current.value.answer : null)
   const member = computed(() => answer.value && !answer.value.memberAssumed ? answer.value.member : undefined)
   const joists = computed(() => plan.value?.joists ?? Array.from({ length: answer.value?.field.joistCount ?? 0 }, () => ({ utilisation: null, state: 'unknown' as const })))
@@ -20,5 +21,5 @@ export function useFieldOnPlan(contents: Ref<JudgedContents>, items: Ref<NamedCo
   const toMend = computed((): PlanToMend | null => answer.value && plan.value && (plan.value.state === 'over' || plan.value.items.some(item => item.heavyInMiddle))
     ? { field: answer.value.field, items: placed.value, options: { member: member.value, strongbacksCount: answer.value.strongbacksCount } }
     : null)
-  return { plan, answer, member, joists, here, placed, planItems, toMend }
+  return { plan, problems, answer, member, joists, here, placed, planItems, toMend }
 }

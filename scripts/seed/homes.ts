@@ -1,4 +1,4 @@
-import { J2X10, J2X6_NO_STAMP, J2X6_SHORT, J2X8, NOTCHED, openAttic, TRUSSED, type DemoMark, type DemoProperty } from './scenario'
+import { J2X10, J2X6_HALL, J2X6_NO_STAMP, J2X6_SHORT, J2X8, NOTCHED, openAttic, TRUSSED, type DemoMark, type DemoProperty } from './scenario'
 
 const room = (name: string, lengthFt: number, widthFt: number) => ({ name, lengthFt, widthFt })
 const bedroom = (name: string, lengthFt: number, widthFt: number) => ({ name, lengthFt, widthFt, isBedroom: true as const })
@@ -65,7 +65,11 @@ export const PROPERTIES: DemoProperty[] = [
     units: [
       {
         name: '1', tenantName: 'Anselm Vogt', rooms: [room('Living room', 15, 12), bedroom('Bedroom', 11, 10)],
-        attic: { name: 'Storage attic 1', surveyAgainDaysAgo: 80, survey: openAttic([J2X10]), confirmedDaysAgo: 90, items: [{ find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }] },
+        attic: {
+          name: 'Storage attic 1', surveyAgainDaysAgo: 80, confirmedDaysAgo: 90,
+          survey: openAttic([{ ...J2X10, layout: { leftFt: 0, frontFt: 0, joistsRun: 'left-right' } }, J2X6_HALL]),
+          items: [{ find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 1, daysAgo: 340 }, { find: 'Suitcase', quantity: 3, field: 2, xFt: 3, yFt: 3, daysAgo: 85 }],
+        },
         marks: [crack({ room: 0, pattern: 'still', startMm: 0.2, shape: 'straight-line' })],
       },
       {

@@ -72,7 +72,7 @@ export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic)
   return steps
 }
 
-function itemOf({ find, quantity, xFt, yFt, weighedLb, tenantOwns }: DemoItem, placedOn: string) {
+function itemOf({ find, quantity, field = 1, xFt, yFt, weighedLb, tenantOwns }: DemoItem, placedOn: string) {
   const row = searchCatalogue(find)[0]
   if (!row) throw new Error(`The demo asks for "${find}", which the catalogue does not know`)
   const foot = suggestFootprint(row)
@@ -81,6 +81,6 @@ function itemOf({ find, quantity, xFt, yFt, weighedLb, tenantOwns }: DemoItem, p
   const round = (feet: number) => Math.round(feet * 100) / 100
   return {
     name: row.label, catalogueKey: row.key, category: row.category, quantity, ...weight, belongsTo: tenantOwns ? 'tenant' as const : 'landlord' as const,
-    fieldNumber: 1, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', placedOn,
+    fieldNumber: field, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', placedOn,
   }
 }

@@ -43,7 +43,7 @@ export interface DemoMark {
   stain?: 'dry' | 'damp' | 'dripping'
 }
 
-export interface DemoItem { find: string, quantity: number, xFt: number, yFt: number, daysAgo: number, weighedLb?: number, tenantOwns?: true, removedDaysAgo?: number }
+export interface DemoItem { find: string, quantity: number, field?: number, xFt: number, yFt: number, daysAgo: number, weighedLb?: number, tenantOwns?: true, removedDaysAgo?: number }
 export interface DemoAttic { name: string, survey: AtticSurvey | null, items: DemoItem[], confirmedDaysAgo?: number, surveyAgainDaysAgo?: number }
 export interface DemoUnit { name: string, rooms: { name: string, isBedroom?: true, lengthFt: number, widthFt: number }[], attic?: DemoAttic, marks: DemoMark[], tenant?: string, tenantName?: string, engineer?: string, finish?: CeilingFinish }
 export interface DemoProperty { name: string, addressLines: string[], yearBuilt: number, units: DemoUnit[] }
@@ -60,6 +60,11 @@ export const J2X8 = joists('Main joists', { size: '2x8', species: 'Douglas fir-l
 export const J2X6_SHORT = joists('Main joists', { size: '2x6', species: 'Spruce-pine-fir', grade: 'No.2', spacingIn: 16, spanFt: 9.5, joistCount: 12, topEdgeBraced: true })
 export const J2X6_NO_STAMP = joists('Main joists', { size: '2x6', species: 'unknown', grade: 'no stamp', spacingIn: 24, spanFt: 11, joistCount: 9, topEdgeBraced: null })
 export const J2X10 = joists('North side', { size: '2x10', species: 'Southern pine', grade: 'No.2', spacingIn: 16, spanFt: 14, joistCount: 14, topEdgeBraced: true })
+export const J2X6_HALL = joists('Over the hall', {
+  size: '2x6', species: 'Spruce-pine-fir', grade: 'No.2', spacingIn: 16, spanFt: 8, joistCount: 8, topEdgeBraced: true,
+  strongbacks: [{ atFt: 4, size: '2x6', breadthIn: null, depthIn: null, sound: true, engineerAccepts: false }],
+  layout: { leftFt: 14, frontFt: 0, joistsRun: 'left-right' },
+})
 export const NOTCHED = joists('Main joists', {
   size: '2x8', species: 'Hem-fir', grade: 'No.2', spacingIn: 16, spanFt: 12, joistCount: 10, topEdgeBraced: true,
   notches: [{ depthIn: 1.5, lengthIn: 3, place: 'middle-third', edge: 'top' }],

@@ -1,9 +1,10 @@
 import { z } from 'zod'
 import {
-  ACCESSES, CEILING_FINISHES, CONDITIONS, DECKS, FRAMINGS, GRADES, INSULATION_MATERIALS, NOTCH_EDGES, NOTCH_PLACES, SIZES, SPECIES,
+  ACCESSES, CEILING_FINISHES, CONDITIONS, DECKS, FRAMINGS, GRADES, JOIST_DIRECTIONS, INSULATION_MATERIALS, NOTCH_EDGES, NOTCH_PLACES, SIZES, SPECIES,
   type AtticSurvey,
 } from '../types/attic'
 import { LONGEST_SPAN_FT } from '../utils/structure/checkLoadPlan'
+import { overlappingFields } from '../utils/structure/fieldLayout'
 import { day, measure, measureOrUnknown, shortText } from './fields'
 
 const Notch = z.strictObject({
@@ -29,6 +30,10 @@ const Strongback = z.strictObject({
   engineerAccepts: z.literal(false),
 })
 
+const fromWallFt = (wall: string) => z.number({ error: `Please give the distance from the ${wall} wall in feet.` })
+  .min(0, 'Not outside the wall.').max(200, 'That is more than 200 ft. Is it in the right unit?')
+const FieldLayout = z.strictObject({ leftFt: fromWallFt('left'), frontFt: fromWallFt('front'), joistsRun: z.enum(JOIST_DIRECTIONS, { error: 'Which way do the joists run?' }) })
+
 export const JoistFieldInput = z.strictObject({
   name: shortText('Please name this group of joists.', 80),
   species: z.enum([...SPECIES, 'unknown']),
@@ -46,6 +51,7 @@ export const JoistFieldInput = z.strictObject({
   notches: z.array(Notch).max(40, 'At most 40 notches.'),
   holes: z.array(Hole).max(40, 'At most 40 holes.'),
   strongbacks: z.array(Strongback).max(10, 'At most 10 strongbacks.'),
+  layout: FieldLayout.nullable().optional(),
 }).superRefine((field, context) => {
   const { spanFt } = field
   field.strongbacks.forEach((strongback, index) => {
@@ -72,5 +78,8 @@ export const AtticSurveyInput = z.strictObject({
 }).superRefine((survey, context) => {
   if (survey.framing !== 'rafters-and-joists' && survey.joistFields.length > 0) {
     context.addIssue({ code: 'custom', path: ['joistFields'], message: 'Joists are entered only for rafters with ceiling joists. Trusses are never calculated.' })
+  }
+  for (const { index, otherName } of overlappingFields(survey.joistFields)) {
+    context.addIssue({ code: 'custom', path: ['joistFields', index, 'layout'], message: `It lies over "${otherName}". Two groups of joists cannot lie in the same place.` })
   }
 }) satisfies z.ZodType<AtticSurvey>

@@ -69,6 +69,12 @@ export interface Strongback {
   engineerAccepts: boolean
 }
 
+export const JOIST_DIRECTIONS = ['left-right', 'front-back'] as const
+export type JoistDirection = typeof JOIST_DIRECTIONS[number]
+
+/** Where a group of joists lies in the attic, seen from above: its corner, from the attic's left and front walls. */
+export interface FieldLayout { leftFt: number, frontFt: number, joistsRun: JoistDirection }
+
 /** Parallel joists of one size, span and spacing between the same two bearing walls. */
 export interface JoistField {
   name: string
@@ -93,6 +99,8 @@ export interface JoistField {
   notches: Notch[]
   holes: Hole[]
   strongbacks: Strongback[]
+  /** Null or left out: nobody has said where it lies. */
+  layout?: FieldLayout | null
 }
 
 export interface Insulation {

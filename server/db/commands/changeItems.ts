@@ -50,10 +50,10 @@ export function moveItems(db: Db, actor: Person, attic: AtticRef, { moves, happe
   return db.transaction().execute(async (trx) => {
     await lockAttic(trx, attic)
     const items = await trx.selectFrom('atticItem').selectAll().where('atticId', '=', attic.id).where('removedOn', 'is', null).execute()
-    for (const { itemId, version, ...spot } of moves) {
+    for (const [index, { itemId, version, ...spot }] of moves.entries()) {
       const before = items.find(row => row.id === itemId)
       if (!before) throw notFound()
-      await refuseOutsideField(trx, attic.id, spot)
+      await refuseOutsideField(trx, attic.id, spot, `moves.${index}.`)
       await writeItem(trx, actor, { before, version, patch: spot, happenedOn })
     }
     await judgeAttic(trx, actor, attic.id)

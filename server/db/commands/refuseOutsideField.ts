@@ -9,16 +9,16 @@ export interface FieldSpot { fieldNumber: number, xFt: number, yFt: number, leng
 /** Room for rounding in entered feet, as the load plan has it. */
 const ROUNDING_FT = 1e-6
 
-/** Where the joists are measured, an item must stand inside their field. */
-export async function refuseOutsideField(trx: Trx, atticId: string, spot: FieldSpot) {
+/** Where the joists are measured, an item must stand inside their field. `at` names which of several: 'moves.2.'. */
+export async function refuseOutsideField(trx: Trx, atticId: string, spot: FieldSpot, at = '') {
   const survey = await findLatestSurvey(trx, atticId)
   const surveyed = survey?.answers.joistFields ?? []
   const field = surveyed[spot.fieldNumber - 1]
-  if (surveyed.length > 0 && !field) throw unsound({ fieldNumber: 'There is no such group of joists in the survey.' })
+  if (surveyed.length > 0 && !field) throw unsound({ [`${at}fieldNumber`]: 'There is no such group of joists in the survey.' })
   if (!field || field.spanFt === null || field.spacingIn === null || field.joistCount === null) return
   const widthFt = fieldWidthFt({ spacingIn: field.spacingIn, joistCount: field.joistCount })
   const fields: Record<string, string> = {}
-  if (spot.xFt + spot.lengthFt > field.spanFt + ROUNDING_FT) fields.xFt = `It would stick out: the span is ${formatLength(field.spanFt)}.`
-  if (spot.yFt + spot.widthFt > widthFt + ROUNDING_FT) fields.yFt = `It would stick out: the joists reach ${formatLength(widthFt)}.`
+  if (spot.xFt + spot.lengthFt > field.spanFt + ROUNDING_FT) fields[`${at}xFt`] = `It would stick out: the span is ${formatLength(field.spanFt)}.`
+  if (spot.yFt + spot.widthFt > widthFt + ROUNDING_FT) fields[`${at}yFt`] = `It would stick out: the joists reach ${formatLength(widthFt)}.`
   if (Object.keys(fields).length > 0) throw unsound(fields)
 }

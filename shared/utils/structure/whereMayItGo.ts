@@ -49,12 +49,13 @@ const overlaps = (a: Omit<PlacedItem, 'id' | 'weightLb'>, b: Omit<PlacedItem, 'i
   !apart(a.xFt, a.lengthFt, b.xFt, b.lengthFt) && !apart(a.yFt, a.widthFt, b.yFt, b.widthFt)
 
 /** Least used first, then nearest to a bearing wall; the suggested places do not overlap. */
-function bestOf(spots: Spot[], item: NewItem): Spot[] {
+function bestOf(spots: Spot[], { lengthFt, widthFt }: NewItem): Spot[] {
+  const lying = ({ xFt, yFt }: Spot) => ({ xFt, yFt, lengthFt, widthFt })
   const fit = spots.filter(spot => spot.state !== 'over' && spot.free && !spot.heavyInMiddle)
     .sort((a, b) => a.utilisation - b.utilisation || a.fromWallFt - b.fromWallFt)
   const best: Spot[] = []
   for (const spot of fit) {
-    if (best.every(chosen => !overlaps({ ...spot, ...item }, { ...chosen, ...item }))) best.push(spot)
+    if (best.every(chosen => !overlaps(lying(spot), lying(chosen)))) best.push(spot)
     if (best.length === MOST_SUGGESTED) break
   }
   return best

@@ -156,6 +156,15 @@ describe('moves from the load plan', () => {
     expect(await attic.rows.events()).toHaveLength(2)
   })
 
+  it('that leave their field are refused by which of them and where', async () => {
+    const attic = await surveyed()
+    const [one, two] = [(await attic.put()).body, (await attic.put({ yFt: 8 })).body]
+    const { body } = await move(attic.path, spot(one.id, 1), spot(two.id, 1, { xFt: 11, yFt: 15 }))
+    expect(Object.keys(body.data.fields!)).toEqual(['moves.1.xFt', 'moves.1.yFt'])
+    expect(Object.keys((await move(attic.path, spot(one.id, 1, { fieldNumber: 9 }))).body.data.fields!)).toEqual(['moves.0.fieldNumber'])
+    expect((await move(attic.path, spot(one.id, 1, { xFt: -1 }))).body.data.fields).toHaveProperty('moves.0.xFt')
+  })
+
   it('are refused when there is none, twice the same, or from another attic', async () => {
     const [attic, other] = [await surveyed(), await surveyed()]
     const [one, elsewhere] = [(await attic.put()).body, (await other.put()).body]

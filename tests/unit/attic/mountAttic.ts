@@ -7,6 +7,7 @@ import UiDay from '../../../components/ui/UiDay.vue'
 import UiDisclosure from '../../../components/ui/UiDisclosure.vue'
 import UiEmpty from '../../../components/ui/UiEmpty.vue'
 import UiField from '../../../components/ui/UiField.vue'
+import UiNotice from '../../../components/ui/UiNotice.vue'
 import UiNumber from '../../../components/ui/UiNumber.vue'
 import UiSafety from '../../../components/ui/UiSafety.vue'
 import UiSelect from '../../../components/ui/UiSelect.vue'
@@ -14,7 +15,7 @@ import UiStateWord from '../../../components/ui/UiStateWord.vue'
 import UiTable from '../../../components/ui/UiTable.vue'
 import UiVerdict from '../../../components/ui/UiVerdict.vue'
 
-const components = { AtticVerdict, UiButton, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
+const components = { AtticVerdict, UiButton, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiNotice, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
 
 /** Mounts a component of the attic with the pieces Nuxt would have found for it. */
 export function mountAttic(component: unknown, props: Record<string, unknown>) {

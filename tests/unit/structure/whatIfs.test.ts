@@ -46,6 +46,10 @@ describe('where an item may go', () => {
     best.forEach((a, i) => best.slice(i + 1).forEach(b => expect(Math.abs(a.xFt - b.xFt) >= 3 || Math.abs(a.yFt - b.yFt) >= 1.5).toBe(true)))
   })
 
+  it('suggests the same places whether or not the thing stands somewhere already', () => {
+    expect(places({ ...trunk, id: 'trunk', xFt: 6, yFt: 6 } as NewItem).best).toEqual(places(trunk).best)
+  })
+
   it('suggests nothing that would bring a joist or the total over', () => {
     expect(places({ lengthFt: 1, widthFt: 1, weightLb: 5000 }).best).toEqual([])
     const full = { ...box, id: 'full', xFt: 0, yFt: 0, lengthFt: 14, widthFt: 12, weightLb: 20 * 14 * 12 }
