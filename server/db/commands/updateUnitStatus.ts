@@ -1,7 +1,7 @@
 import { sql, type RawBuilder } from 'kysely'
 import type { Db, Trx } from '../connect'
 import { dayIn, nowInstant } from '../../utils/clock'
-import { riskRank } from '../queries/riskRank'
+import { fallRiskOfSubject, riskRank } from '../queries/riskRank'
 
 /** Everything the portfolio reads of a unit but the instant of the last change. */
 const COLUMNS = sql.raw('unit_id, organisation_id, property_id, worst_severity, open_findings, top_finding_id, attic_count, load_state, utilisation, stored_lb, open_marks, active_marks, late_readings')
@@ -18,7 +18,7 @@ const addedUp = (unitIds: readonly string[], today: string): RawBuilder<unknown>
   cross join lateral (select count(*) findings from finding where unit_id = u.id and cleared_at is null) open
   left join lateral (select id, severity from finding
     where unit_id = u.id and cleared_at is null and acknowledged_at is null
-    order by case severity when 'urgent' then 0 when 'attention' then 1 else 2 end, ${riskRank('rule')}, opened_at, id limit 1) top on true
+    order by case severity when 'urgent' then 0 when 'attention' then 1 else 2 end, ${riskRank('rule')}, ${fallRiskOfSubject('subject_id')} desc, opened_at, id limit 1) top on true
   cross join lateral (select count(*) n, max(s.utilisation) utilisation, sum(s.stored_lb) stored_lb
     from attic a left join attic_status s on s.attic_id = a.id where a.unit_id = u.id and a.archived_at is null) attics
   left join lateral (select coalesce(s.load_state, 'unsurveyed') load_state

@@ -3,7 +3,7 @@ import type { StoredFinding } from '../../../shared/types/finding'
 import type { DueKind } from '../../../shared/utils/upkeep/dueItems'
 import type { UnitsOfMeasure } from '../../../shared/types/people'
 import type { Db } from '../connect'
-import { riskRank } from './riskRank'
+import { fallRiskOfSubject, riskRank } from './riskRank'
 
 /** What digests are made of. Most important first everywhere. */
 
@@ -19,7 +19,7 @@ export async function findWaitingFindings(db: Db, organisationId: string): Promi
   const rows = await db.selectFrom('finding as f').innerJoin('unit as u', 'u.id', 'f.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
     .select(['f.id', 'f.unitId', 'f.rule', 'f.subjectKind', 'f.subjectId', 'f.severity', 'f.adviceCode', 'f.evidence', 'f.openedAt', 'f.changedAt', 'u.name as unitName', 'p.name as propertyName'])
     .where('f.organisationId', '=', organisationId).where('f.clearedAt', 'is', null).where('f.acknowledgedAt', 'is', null)
-    .orderBy(sql`array_position(array['urgent', 'attention', 'notice'], f.severity)`).orderBy(riskRank('f.rule')).orderBy('f.openedAt').orderBy('f.id').limit(MOST_FINDINGS).execute()
+    .orderBy(sql`array_position(array['urgent', 'attention', 'notice'], f.severity)`).orderBy(riskRank('f.rule')).orderBy(fallRiskOfSubject('f.subject_id'), 'desc').orderBy('f.openedAt').orderBy('f.id').limit(MOST_FINDINGS).execute()
   return rows.map(({ id, unitId, unitName, propertyName, changedAt, subjectKind, subjectId, ...rest }) => ({
     id, unitId, unitName, propertyName, changedAt,
     finding: { ...rest, id, subject: { kind: subjectKind, id: subjectId }, clearedAt: null, acknowledgedAt: null, acknowledgedReason: null, lookAgainOn: null } as StoredFinding,

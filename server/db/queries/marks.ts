@@ -7,10 +7,15 @@ import type { Page } from '../../../shared/types/home'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 import { runningTotalLb } from './attics'
 import { limitColumns } from './limits'
+import { fallRiskOfRoom } from './riskRank'
 
-/** Risk first: wet and moving above all, then what is watched, then what has too few readings; mended and closed last. */
-const RISK = sql<number>`(case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
-  when m.stain_state = 'damp' then 3 when m.activity = 'watch' then 2 when m.activity = 'too-few-readings' then 1.5 else 1 end)::double precision`
+/**
+ * Risk first: wet and moving above all, then what is watched, then what has too few readings; mended and closed last.
+ * Among equals what could fall on whom, as a part of a step too small to reach the next one.
+ */
+const RISK = sql<number>`((case when m.state <> 'open' then 0 when m.stain_state = 'dripping' then 5 when m.activity = 'active' then 4
+  when m.stain_state = 'damp' then 3 when m.activity = 'watch' then 2 when m.activity = 'too-few-readings' then 1.5 else 1 end)
+  + least(${fallRiskOfRoom}, 400) / 1000)::double precision`
 /** Days as a number, so that one cursor fits every order; no day sorts last. */
 const DUE = sql<number>`coalesce(-(m.next_reading_on - date '1970-01-01'), -1000000)::double precision`
 

@@ -3,7 +3,7 @@ import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
 import type { AtticCounts, OverviewChange, OverviewDecision } from '../../../shared/types/overview'
 import type { Activity } from '../../../shared/types/mark'
-import { riskRank } from './riskRank'
+import { fallRiskOfSubject, riskRank } from './riskRank'
 import { atticsOf, marksOf, roomsOf } from './unitParts'
 
 /** Homes shown as waiting for a decision; the rest is counted and listed on the findings page. */
@@ -19,7 +19,7 @@ const decisionRows = compiledOnce((db, given: { organisationId: string }) => db.
     roomsOf(db, eb.ref('us.unitId')).as('rooms'), atticsOf(db, eb.ref('us.unitId')).as('attics'), marksOf(db, eb.ref('us.unitId')).as('marks'),
   ])
   .where('us.organisationId', '=', given.organisationId).where('us.worstSeverity', 'in', ['urgent', 'attention']).where('u.archivedAt', 'is', null)
-  .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy(riskRank('f.rule')).orderBy('f.openedAt').orderBy('us.unitId')
+  .orderBy(sql`case us.worst_severity when 'urgent' then 0 else 1 end`).orderBy(riskRank('f.rule')).orderBy(fallRiskOfSubject('f.subject_id'), 'desc').orderBy('f.openedAt').orderBy('us.unitId')
   .limit(MOST_DECISIONS))
 
 /** Homes with something that waits for a person: worst first, by what could hurt somebody, then longest open. */

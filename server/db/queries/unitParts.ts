@@ -5,7 +5,7 @@ import type { CeilingFinish } from '../../../shared/types/attic'
 import type { StoredFinding } from '../../../shared/types/finding'
 import type { AtticOfUnit, FieldMeasures } from '../../../shared/types/home'
 import { isoInstant, jsonList } from './jsonList'
-import { riskRank } from './riskRank'
+import { fallRiskOfSubject, riskRank } from './riskRank'
 
 /** Subqueries for parts of one unit; `unitId` is a value or a column of the statement around them. */
 
@@ -70,7 +70,7 @@ export const findingsOf = (db: Db, unitId: Expression<string>) => db.selectFrom(
     id: ref('f.id'), rule: ref('f.rule'), subject: jsonBuildObject({ kind: ref('f.subjectKind'), id: ref('f.subjectId') }), severity: ref('f.severity'),
     adviceCode: ref('f.adviceCode'), evidence: ref('f.evidence'), openedAt: isoInstant(ref('f.openedAt')), clearedAt: ref('f.clearedAt'),
     acknowledgedAt: isoInstant(ref('f.acknowledgedAt')), acknowledgedReason: ref('f.acknowledgedReason'), lookAgainOn: ref('f.lookAgainOn'),
-  })}`, sql`array_position(array['urgent', 'attention', 'notice'], f.severity), ${riskRank('f.rule')}, f.opened_at desc, f.id`).as('list'))
+  })}`, sql`array_position(array['urgent', 'attention', 'notice'], f.severity), ${riskRank('f.rule')}, ${fallRiskOfSubject('f.subject_id')} desc, f.opened_at desc, f.id`).as('list'))
   .where('f.unitId', '=', unitId).where('f.clearedAt', 'is', null)
 
 /** What is still to be done or to be confirmed. */
