@@ -3,6 +3,7 @@ import type { LoadLink } from '../utils/movement/loadLink'
 import type { CauseClue } from '../utils/movement/causeClues'
 import type { Activity, DangerSign, Direction, MarkKind, MarkPlace, MarkShape, ObservationAnswers, ReadingMethod, StainState, TipState } from './mark'
 import type { PhotoRef } from './photo'
+import type { PhotoMeasure, SinceSet } from './readingDetail'
 
 export type MarkState = 'open' | 'repaired' | 'closed'
 
@@ -17,9 +18,22 @@ export interface ReadingRow {
   sigma: number | null
   low: number | null
   high: number | null
+  /** Of a double reading; `value` is their mean. */
+  firstValue: number | null
+  secondValue: number | null
   lengthMm: number | null
   spanMm: number | null
   tip: TipState | null
+  tipPastMm: number | null
+  photo: PhotoMeasure | null
+  stationsMm: number[] | null
+  sinceSet: SinceSet | null
+  wroteFirst: number | null
+  askedAgainstUsual: number | null
+  phoneAt: string | null
+  cameraOn: string | null
+  /** The number of the mark it was taken of, before that was joined into this one. */
+  fromMark: number | null
   stainState: Exclude<StainState, 'none'> | null
   /** The report made of danger signs seen with this reading. */
   reportId: string | null
@@ -54,6 +68,8 @@ export interface MarkFacts {
   notes: string
   createdAt: string
   version: number
+  /** Set while it counts as part of another mark. */
+  joinedInto: string | null
 }
 
 export interface ReportRow {

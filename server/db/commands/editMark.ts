@@ -4,12 +4,14 @@ import type { Actor } from '../queries/actor'
 import type { MarkEditValue } from '../../../shared/schemas/mark'
 import { SHAPES_BY_KIND } from '../../../shared/types/mark'
 import { dayIn, nowInstant } from '../../utils/clock'
+import { newId } from '../../utils/newId'
 import { clash, notFound, problem, unsound } from '../../utils/problems'
 import { appendRecord } from './appendRecord'
 import { editRow } from './editRow'
 import { judgeMark } from './judgeMark'
 import { lockUnit } from './lockUnit'
 import type { FollowedMark } from './openMark'
+import { placeInSegments } from './placeInSegments'
 
 /** Facts of a mark, or one change of its state; judged again, since both can change what stands. */
 export async function editMark(db: Db, actor: Actor, mark: FollowedMark, { version, change, pin, ...facts }: MarkEditValue): Promise<FollowedMark> {
@@ -56,6 +58,12 @@ async function settlePlainReports(trx: Trx, markId: string) {
   await trx.updateTable('observation').set(eb => ({ correctedAt: at, startedAt: eb.fn.coalesce('startedAt', eb.val(at)) })).where('id', 'in', ids).execute()
 }
 
+/** Readings of later days, entered before the repair was, go over into the new segment. */
+async function keepRepair(trx: Trx, actor: Actor, { id, organisationId }: FollowedMark, { happenedOn, reason }: NonNullable<MarkEditValue['change']>) {
+  await trx.insertInto('markRepair').values({ id: newId(), organisationId, markId: id, repairedOn: happenedOn, reason, recordedBy: actor.userId, recordedAt: nowInstant() }).execute()
+  await placeInSegments(trx, id)
+}
+
 /** A repair starts a new segment, so that no trend runs across it. Repair and closing settle what was reported, danger excepted. */
 async function changeState(trx: Trx, actor: Actor, id: string, version: number, change: NonNullable<MarkEditValue['change']>) {
   const before = await trx.selectFrom('mark').selectAll().where('id', '=', id).forUpdate().executeTakeFirst()
@@ -66,11 +74,13 @@ async function changeState(trx: Trx, actor: Actor, id: string, version: number, 
   if (change.to === 'closed' && await hasStandingDanger(trx, id)) {
     throw problem(409, 'danger-stands', 'A danger sign was reported here and nobody has put it right yet. Say on that report what was found and done; then the mark can be closed.')
   }
-  const segment = change.to === 'repaired' ? before.segment + 1 : before.segment
-  const after = await trx.updateTable('mark').set({ state: TO[change.to], segment, version: sql`version + 1` }).where('id', '=', id).returningAll().executeTakeFirstOrThrow()
+  if (before.joinedInto) throw problem(409, 'mark-joined', 'This mark counts as part of another one. Undo the joining first.')
+  await trx.updateTable('mark').set({ state: TO[change.to], version: sql`version + 1` }).where('id', '=', id).execute()
+  if (change.to === 'repaired') await keepRepair(trx, actor, before, change)
+  const after = await trx.selectFrom('mark').selectAll().where('id', '=', id).executeTakeFirstOrThrow()
   if (change.to !== 'reopened') await settlePlainReports(trx, id)
   await appendRecord(trx, actor, {
     organisationId: before.organisationId, unitId: before.unitId, subjectKind: 'mark', subjectId: id, action: `mark ${change.to}`,
-    before: { state: before.state, segment: before.segment }, after: { state: after.state, segment, happenedOn: change.happenedOn, reason: change.reason },
+    before: { state: before.state, segment: before.segment }, after: { state: after.state, segment: after.segment, happenedOn: change.happenedOn, reason: change.reason },
   })
 }

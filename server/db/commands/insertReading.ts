@@ -1,24 +1,16 @@
 import type { Trx } from '../connect'
-import type { MarkKind, StainState, TipState, WidthComparison } from '../../../shared/types/mark'
+import type { MarkKind, StainState } from '../../../shared/types/mark'
+import type { ReadingDetail } from '../../../shared/types/readingDetail'
 import type { MeasuredReading } from '../../../shared/utils/movement/measureReading'
+import { QUANTITY_COLUMNS } from '../queries/readings'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
 import { appendRecord, type RecordActor } from './appendRecord'
 
-/** What a reading may carry besides its size; kept in reading.detail. */
-export interface ReadingDetail {
-  observationId?: string
-  spanMm?: number | null
-  tip?: TipState | null
-  comparison?: WidthComparison | null
-  /** The report made of danger signs seen with this reading. */
-  reportId?: string
-}
-
 interface NewReading {
   clientKey: string
   takenOn: string
-  measured: Extract<MeasuredReading, { kind: 'measured' }> | { kind: 'could-not-measure', reason: string }
+  measured: Extract<MeasuredReading, { kind: 'measured' }> & { first?: number | null, second?: number | null } | { kind: 'could-not-measure', reason: string }
   lengthMm: number | null
   stain: StainState | null
   note: string
@@ -28,14 +20,12 @@ interface NewReading {
 
 interface ReadMark { id: string, organisationId: string, unitId: string, number: number, kind: MarkKind, segment: number }
 
-const QUANTITY_COLUMNS = { 'crack': 'width_mm', 'nail-pops': 'pop_count', 'sag': 'drop_mm', 'stain': 'size_mm' } as const
-
-/** One reading of the mark's present segment, with its record entry. */
+/** One reading of the segment the mark is given with, with its record entry. */
 export async function insertReading(trx: Trx, actor: RecordActor & { userId: string }, mark: ReadMark, reading: NewReading): Promise<{ id: string, receivedAt: string }> {
   const { measured, photos, detail, stain, ...rest } = reading
   const size = measured.kind === 'measured'
-    ? { method: measured.method, value: measured.value, sigma: measured.sigma, low: measured.low, high: measured.high, couldNotMeasureReason: null }
-    : { method: 'could-not-measure' as const, value: null, sigma: null, low: null, high: null, couldNotMeasureReason: measured.reason }
+    ? { method: measured.method, value: measured.value, sigma: measured.sigma, low: measured.low, high: measured.high, firstValue: measured.first ?? null, secondValue: measured.second ?? null, couldNotMeasureReason: null }
+    : { method: 'could-not-measure' as const, value: null, sigma: null, low: null, high: null, firstValue: null, secondValue: null, couldNotMeasureReason: measured.reason }
   const row = {
     id: newId(), organisationId: mark.organisationId, unitId: mark.unitId, markId: mark.id, segment: mark.segment,
     quantity: QUANTITY_COLUMNS[mark.kind], ...size, ...rest, stainState: stain === 'none' ? null : stain,

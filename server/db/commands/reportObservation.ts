@@ -64,7 +64,9 @@ const SIZE_FIELDS = { 'crack': 'widthMm', 'nail-pops': 'popCount', 'sag': 'sagDr
 
 /** A mark that came back after a repair is open again from this day. */
 async function joinMark(trx: Trx, actor: Actor, unit: ReportedUnit, markId: string, answers: ObservationAnswers, today: string): Promise<FollowedMark> {
-  const mark = await trx.selectFrom('mark').selectAll().where('id', '=', markId).where('unitId', '=', unit.id).forUpdate().executeTakeFirst()
+  const named = await trx.selectFrom('mark').select('joinedInto').where('id', '=', markId).where('unitId', '=', unit.id).executeTakeFirst()
+  // A tenant's page may still name a mark that has since been joined into another.
+  const mark = await trx.selectFrom('mark').selectAll().where('id', '=', named?.joinedInto ?? markId).where('unitId', '=', unit.id).forUpdate().executeTakeFirst()
   if (!mark || mark.state === 'closed') throw unsound({ sameAsMarkId: 'That mark is not being followed here. Report it as a new one.' })
   if (mark.kind !== answers.kind) throw unsound({ sameAsMarkId: 'That mark is of another kind. Report this as a new one.' })
   if (answers.stain !== 'none') await trx.updateTable('mark').set({ stainState: answers.stain }).where('id', '=', mark.id).execute()

@@ -12,6 +12,8 @@ import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
+import * as markRepairs from './0032MarkRepairs'
+import * as joinedMarks from './0033JoinedMarks'
 import * as signUps from './0014SignUps'
 import * as strongbackOpinion from './0020StrongbackOpinion'
 
@@ -30,6 +32,8 @@ export const migrations: Record<string, Migration> = {
   '0013FollowedChanges': followedChanges,
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
+  '0032MarkRepairs': markRepairs,
+  '0033JoinedMarks': joinedMarks,
   '0014SignUps': signUps,
   '0020StrongbackOpinion': strongbackOpinion,
 }

@@ -70,7 +70,7 @@ export async function listMarks(db: Db, { organisationId, units, today }: Sight,
 
 const markFacts = compiledOnce((db, { id }: { id: string }) =>
   db.selectFrom('mark').select(['id', 'organisationId', 'unitId', 'roomId', 'atticId', 'number', 'kind', 'label', 'pinX', 'pinY', 'place', 'shape', 'direction', 'firstSeenOn',
-    'state', 'segment', 'activity', 'widthClass', 'lastValue', 'lastReadOn', 'slopePerYear', 'nextReadingOn', 'stainState', 'notes', 'createdAt', 'version'])
+    'state', 'segment', 'activity', 'widthClass', 'lastValue', 'lastReadOn', 'slopePerYear', 'nextReadingOn', 'stainState', 'notes', 'createdAt', 'version', 'joinedInto'])
     .where('id', '=', id).$castTo<MarkFacts>())
 
 export const findMarkFacts = (db: Db, id: string) => markFacts.first(db, { id })

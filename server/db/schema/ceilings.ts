@@ -5,6 +5,9 @@ export interface CeilingTables {
   observation: ObservationTable
   reading: ReadingTable
   photo: PhotoTable
+  markRepair: MarkRepairTable
+  markJoining: MarkJoiningTable
+  markJoiningPart: MarkJoiningPartTable
 }
 
 type StainState = 'dry' | 'damp' | 'dripping'
@@ -37,6 +40,38 @@ export interface MarkTable {
   createdBy: string
   createdAt: Instant
   version: Defaulted<number>
+  /** Set while it counts as part of another mark; its state is then 'closed'. */
+  joinedInto: string | null
+}
+
+export interface MarkRepairTable {
+  id: string
+  organisationId: string
+  markId: string
+  repairedOn: Day
+  reason: string
+  recordedBy: string
+  recordedAt: Instant
+}
+
+export interface MarkJoiningTable {
+  id: string
+  organisationId: string
+  markId: string
+  intoId: string
+  reason: string
+  stateBefore: 'open' | 'repaired' | 'closed'
+  joinedBy: string
+  joinedAt: Instant
+  undoneBy: string | null
+  undoneAt: Instant | null
+}
+
+export interface MarkJoiningPartTable {
+  joiningId: string
+  organisationId: string
+  kind: 'reading' | 'observation' | 'photo' | 'job' | 'mark_repair'
+  partId: string
 }
 
 /** `answers` is ObservationAnswers of shared/types/mark.ts; received_at is the server's clock and starts every response time. */
@@ -68,6 +103,9 @@ export interface ReadingTable {
   sigma: number | null
   low: number | null
   high: number | null
+  /** Of a double reading; `value` is their mean. */
+  firstValue: number | null
+  secondValue: number | null
   lengthMm: number | null
   method: 'guess' | 'coin-or-card' | 'ruler' | 'photo-with-scale' | 'gauge-card' | 'tell-tale' | 'calipers' | 'count' | 'string-line' | 'could-not-measure'
   couldNotMeasureReason: string | null

@@ -30,3 +30,13 @@ export function sigmaFromDoubleReadings(pairs: readonly (readonly [number, numbe
   const variance = differences.reduce((sum, value) => sum + (value - mean) ** 2, 0) / (differences.length - 1)
   return Math.sqrt(variance / 2)
 }
+
+/** Ours: repeating a reading does not show what is the same wrong in both, so nobody counts as more than twice as sure as the method. */
+const LEAST_SHARE_OF_METHOD = 0.5
+
+/** What one person's readings by this method are worth: their own, where enough double readings show it, else the method's. */
+export function personSigma(kind: MarkKind, method: ReadingMethod, pairs: readonly (readonly [number, number])[]): number {
+  const usual = readingSigma(kind, method)
+  const own = sigmaFromDoubleReadings(pairs)
+  return own === null ? usual : Math.max(own, usual * LEAST_SHARE_OF_METHOD)
+}

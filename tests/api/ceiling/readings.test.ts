@@ -138,6 +138,76 @@ describe('recording a reading', () => {
     expect(await read(markId, { method: 'ruler', value: 1 })).toMatchObject({ status: 409, body: { data: { code: 'mark-closed' } } })
   })
 
+  it('satisfies the reading plan when it could not be measured, without a value', async () => {
+    const markId = await openMark('crack', { widthMm: 1.2, widthMethod: 'ruler' })
+    await home.db.updateTable('reading').set({ takenOn: addDays(home.today, -30) }).where('markId', '=', markId).execute()
+    const { body } = await read(markId, { method: 'could-not-measure', reason: 'No ladder' })
+    expect(body).toMatchObject({ value: null, nextReadingOn: addDays(home.today, 14) })
+    expect(await home.db.selectFrom('mark').select(['lastValue', 'lastReadOn']).where('id', '=', markId).executeTakeFirst()).toEqual({ lastValue: 1.2, lastReadOn: home.today })
+  })
+
+  it('keeps both numbers where one was asked about, and both of a double reading', async () => {
+    const markId = await openMark('crack', { widthMm: 1.2, widthMethod: 'ruler' })
+    const mended = await read(markId, { method: 'ruler', value: 1.3, wroteFirst: 12 })
+    expect(await rowOf(mended.body.id)).toMatchObject({ value: 1.3, detail: { wroteFirst: 12 } })
+    const stoodBy = await read(markId, { method: 'ruler', value: 12, confirmed: true })
+    expect(await rowOf(stoodBy.body.id)).toMatchObject({ value: 12, detail: { askedAgainstUsual: 1.25 } })
+    const apart = await read(markId, { method: 'gauge-card', value: 1.2, second: 3 })
+    expect(apart.body.data).toMatchObject({ code: 'ask-again', fields: { second: expect.stringContaining('far apart') } })
+    const twice = await read(markId, { method: 'gauge-card', value: 1.2, second: 1.4 })
+    expect(await rowOf(twice.body.id)).toMatchObject({ firstValue: 1.2, secondValue: 1.4, value: expect.closeTo(1.3, 9), sigma: 0.2 })
+  })
+
+  it('judges a reader by five of their own double readings', async () => {
+    const markId = await openMark()
+    for (const second of [1.9, 0.3, 1.9, 0.3, 1.9]) expect((await read(markId, { method: 'ruler', value: 1.1, second })).status).toBe(200)
+    const { body } = await read(markId, { method: 'ruler', value: 1.1 })
+    // Differences of ∓0.8: standard deviation √(0.64·4.8/4) over √2.
+    expect((await rowOf(body.id)).sigma).toBeCloseTo(Math.sqrt(0.64 * 4.8 / 4 / 2), 9)
+    expect((await rowOf((await read(markId, { method: 'ruler', value: 1.1 }, { as: home.owner })).body.id)).sigma).toBe(0.4)
+  })
+
+  it('works the width out from points in the photo that came along, and refuses points in any other', async () => {
+    const markId = await openMark()
+    const photoId = (await home.tenant.post<PhotoRef>(`/api/units/${home.unitId}/photos`, photoForm(await drawnPhoto(70)))).body.id
+    const at = (xPx: number, yPx: number) => ({ xPx, yPx })
+    const photo = { photoId, widthPx: 640, heightPx: 480, a: at(0, 0), b: at(428, 0), distanceMm: 85.6, stations: [100, 200, 300].map(x => ({ p: at(x, 100), q: at(x, 107.5) })) }
+    const loose = await read(markId, { method: 'photo-with-scale', photo })
+    expect(loose.body.data.fields).toHaveProperty('photo')
+    expect((await read(markId, { method: 'photo-with-scale', photo: { ...photo, stations: [] }, photoIds: [photoId] })).body.data.fields).toEqual({ photo: 'Measure across it at three places or more.' })
+    const { body } = await read(markId, { method: 'photo-with-scale', photo, photoIds: [photoId] })
+    expect(await rowOf(body.id)).toMatchObject({ value: expect.closeTo(1.5, 6), sigma: 0.18, detail: { photo: { photoId, distanceMm: 85.6 }, stationsMm: [1.5, 1.5, 1.5].map(mm => expect.closeTo(mm, 6)) } })
+  })
+
+  it('adds what is past the dated pencil marks to the last length', async () => {
+    const markId = await openMark('crack', { lengthMm: 400, widthMm: 1, widthMethod: 'ruler' })
+    const { body } = await read(markId, { method: 'ruler', value: 1, tip: 'past', tipPastMm: 25 })
+    expect(await rowOf(body.id)).toMatchObject({ lengthMm: 425, detail: { tip: 'past', tipPastMm: 25 } })
+  })
+
+  it('takes readings out of order into the segment of their own day', async () => {
+    const markId = await openMark()
+    const on = (days: number, value: number) => read(markId, { method: 'ruler', value, takenOn: addDays(home.today, -days) }, { as: home.owner })
+    const late = await on(5, 0.4)
+    expect((await home.owner.patch(`/api/marks/${markId}`, { version: 1, change: { to: 'repaired', happenedOn: addDays(home.today, -10), reason: 'Filled' } })).status).toBe(200)
+    const early = await on(40, 1.5)
+    expect([(await rowOf(late.body.id)).segment, (await rowOf(early.body.id)).segment]).toEqual([2, 1])
+    expect(await home.db.selectFrom('mark').select(['state', 'segment', 'lastValue']).where('id', '=', markId).executeTakeFirst()).toEqual({ state: 'repaired', segment: 2, lastValue: 0.4 })
+  })
+
+  it('keeps the server\'s clock and the phone\'s, and asks when the camera tells another day', async () => {
+    const markId = await openMark()
+    const { body } = await read(markId, { method: 'ruler', value: 1, phoneAt: '2019-05-01T10:00:00Z' })
+    expect((await rowOf(body.id)).detail).toMatchObject({ phoneAt: '2019-05-01T10:00:00Z' })
+    expect((await rowOf((await read(markId, { method: 'ruler', value: 1, phoneAt: new Date().toISOString() })).body.id)).detail).not.toHaveProperty('phoneAt')
+    const photoId = (await home.tenant.post<PhotoRef>(`/api/units/${home.unitId}/photos`, photoForm(await drawnPhoto(71)))).body.id
+    await home.db.updateTable('photo').set({ cameraTime: '2019-05-01 10:00:00' }).where('id', '=', photoId).execute()
+    const asked = await read(markId, { method: 'ruler', value: 1, photoIds: [photoId] })
+    expect(asked).toMatchObject({ status: 422, body: { data: { code: 'ask-day', cameraOn: '2019-05-01', fields: { takenOn: expect.stringContaining('2019') } } } })
+    const sure = await read(markId, { method: 'ruler', value: 1, photoIds: [photoId], dayConfirmed: true })
+    expect(await rowOf(sure.body.id)).toMatchObject({ takenOn: home.today, detail: { cameraOn: '2019-05-01' } })
+  })
+
   it('is for those who live there or run it', async () => {
     const markId = await openMark()
     const status = async (as: CeilingHome['owner']) => (await read(markId, { method: 'ruler', value: 1 }, { as })).status

@@ -12,11 +12,12 @@ import { markTrend } from '../../../shared/utils/movement/trend'
 const mark = (more: Partial<MarkFacts> = {}): MarkFacts => ({
   id: 'm', organisationId: 'o', unitId: 'u', roomId: 'r', atticId: null, number: 7, kind: 'crack', label: 'Crack, Hall', pinX: 0.5, pinY: 0.5, place: null, shape: null, direction: null,
   firstSeenOn: '2026-01-01', state: 'open', segment: 1, activity: 'too-few-readings', widthClass: null, lastValue: null, lastReadOn: null, slopePerYear: null, nextReadingOn: '2026-02-01', stainState: null,
-  notes: '', createdAt: '2026-01-01T00:00:00Z', version: 1, ...more,
+  notes: '', createdAt: '2026-01-01T00:00:00Z', version: 1, joinedInto: null, ...more,
 })
 const reading = (takenOn: string, value: number | null, segment = 1): ReadingRow => ({
   id: takenOn, takenOn, receivedAt: `${takenOn}T00:00:00Z`, takenBy: 'Invented', segment, method: value === null ? 'could-not-measure' : 'ruler', value, sigma: value === null ? null : 0.4, low: null, high: null,
-  lengthMm: null, spanMm: null, tip: null, stainState: null, reportId: null, couldNotMeasureReason: null, note: '',
+  firstValue: null, secondValue: null, lengthMm: null, spanMm: null, tip: null, tipPastMm: null, photo: null, stationsMm: null, sinceSet: null, wroteFirst: null, askedAgainstUsual: null, phoneAt: null, cameraOn: null, fromMark: null,
+  stainState: null, reportId: null, couldNotMeasureReason: null, note: '',
 })
 
 describe('a mark in words', () => {
