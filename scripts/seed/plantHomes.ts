@@ -81,6 +81,6 @@ function itemOf({ find, quantity, field = 1, xFt, yFt, weighedLb, tenantOwns }: 
   const round = (feet: number) => Math.round(feet * 100) / 100
   return {
     name: row.label, catalogueKey: row.key, category: row.category, quantity, ...weight, belongsTo: tenantOwns ? 'tenant' as const : 'landlord' as const,
-    fieldNumber: field, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', placedOn,
+    fieldNumber: field, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', keptDespite: '', photoIds: [], placedOn,
   }
 }

@@ -17,6 +17,8 @@ export const policy = {
   'see unit': { ...staff, tenant: 'own units', engineer: 'own units' },
   'see attic': { ...staff, tenant: 'own units', engineer: 'own units' },
   'edit attic': staff,
+  'confirm inventory': { ...staff, tenant: 'own units' },
+  'sign terms': { tenant: 'own units' },
   'see mark': { ...staff, tenant: 'own units', engineer: 'own units' },
   'edit mark': staff,
   'report observation': { ...staff, tenant: 'own units' },

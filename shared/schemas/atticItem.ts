@@ -24,6 +24,9 @@ const item = {
   widthFt: measure('the width across the joists in feet', 40),
   heightFt: measure('the height in feet', 20).nullable(),
   notes: longText(2000),
+  keptDespite: longText(500).default(''),
+  /** Pictures sent before, now shown with this item. */
+  photoIds: z.array(z.uuid()).max(6, 'At most 6 photos at a time.').default([]),
 }
 
 interface Weights { weightSource: WeightSource, lowLb: number, typicalLb: number, highLb: number }
@@ -49,6 +52,26 @@ export const AtticItemMoves = z.strictObject({
 })
 
 export const AtticItemRemoval = z.strictObject({ removedOn: day('When was it taken out?'), version })
+/** Several things changed in one go, all or none. */
+export const AtticItemBulk = z.strictObject({
+  items: z.array(z.strictObject({ itemId: z.uuid(), version })).min(1, 'Choose at least one.').max(500)
+    .refine(items => new Set(items.map(item => item.itemId)).size === items.length, 'Each thing once.'),
+  change: z.discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('take-out'), removedOn: day('When were they taken out?') }),
+    z.strictObject({ kind: z.literal('owner'), belongsTo: z.enum(ITEM_OWNERS) }),
+  ]),
+})
+export type AtticItemBulkValue = z.output<typeof AtticItemBulk>
+
+export const TermsSignatureInput = z.strictObject({
+  signedName: shortText('Write your name as you sign.', 120),
+  /** The text that was read, so that nobody signs what changed meanwhile. */
+  rules: z.array(z.string().max(600)).min(1).max(40),
+})
+
+export const InventoryListInput = z.strictObject({ csv: z.string({ error: 'Choose a CSV file.' }).min(1, 'The file is empty.').max(240_000, 'The file is too long. Split it into several.') })
+export const InventoryImportInput = InventoryListInput.extend({ skipBad: z.boolean() })
+
 export const InventoryConfirmation = z.strictObject({ confirmedOn: day('When did you look?') })
 
 export type AtticItemValue = z.output<typeof AtticItemInput>

@@ -39,6 +39,9 @@ export interface LoadEventRow {
   recordedAt: string
 }
 
+/** `medianRatio`: weighed over noted before; above 1 the person guesses too little. */
+export interface GuessRecord { count: number, medianRatio: number | null }
+
 /** What GET /api/attics/:id answers. */
 export interface AtticDetail {
   today: string
@@ -50,6 +53,9 @@ export interface AtticDetail {
   documents: DocumentRow[]
   items: StoredItem[]
   events: LoadEventRow[]
+  itemPhotos: { id: string, itemId: string }[]
+  /** The asker's own weighings so far against what was noted before. */
+  guesses: GuessRecord
   contents: JudgedContents
   abilities: string[]
 }

@@ -61,6 +61,8 @@ export interface StoredItem {
   placedOn: string
   removedOn: string | null
   notes: string
+  /** Why it stays up though it should not; empty for what nothing speaks against. */
+  keptDespite: string
 }
 
 /** What judging, drawing and listing read of a stored item. */

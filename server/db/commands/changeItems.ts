@@ -1,16 +1,19 @@
 import type { Db, Trx } from '../connect'
+import type { FieldSpot } from '../../../shared/utils/structure/outsideField'
+import { keptDespiteProblem } from '../../../shared/utils/goods/refusals'
 import type { AtticItemEditValue, AtticItemMovesValue, AtticItemRemovalValue, AtticItemValue } from '../../../shared/schemas/atticItem'
 import { nowInstant } from '../../utils/clock'
 import { newId } from '../../utils/newId'
-import { notFound } from '../../utils/problems'
+import { notFound, unsound } from '../../utils/problems'
 import { appendLoadEvent } from './appendLoadEvent'
 import { appendRecord, type RecordActor } from './appendRecord'
+import { attachPhotos } from './attachPhotos'
 import { editRow } from './editRow'
 import { judgeAttic } from './judgeAttic'
 import { lockAttic, type AtticRef } from './lockAttic'
 import { lockItem, refuseBeforeLastStep, type ItemRow } from './lockItem'
 import { refuseFuture } from './refuseFuture'
-import { refuseOutsideField, type FieldSpot } from './refuseOutsideField'
+import { refuseOutsideField } from './refuseOutsideField'
 
 type Person = RecordActor & { userId: string, timeZone: string }
 
@@ -20,25 +23,41 @@ export function addItem(db: Db, actor: Person, attic: AtticRef, input: AtticItem
   return db.transaction().execute(async (trx) => {
     await lockAttic(trx, attic)
     await refuseOutsideField(trx, attic.id, input)
-    const item = await trx.insertInto('atticItem').values({
-      id: newId(), organisationId: attic.organisationId, unitId: attic.unitId, atticId: attic.id, ...input, removedOn: null, createdAt: nowInstant(),
-    }).returningAll().executeTakeFirstOrThrow()
-    await appendLoadEvent(trx, actor, { item, kind: 'in', happenedOn: input.placedOn, deltaLb: weightLb(item), detail: spotOf(item) })
-    await appendRecord(trx, actor, {
-      organisationId: attic.organisationId, unitId: attic.unitId, subjectKind: 'item', subjectId: item.id, action: 'item put in the attic', after: { atticId: attic.id, ...input },
-    })
+    const item = await putItem(trx, actor, attic, input)
     await judgeAttic(trx, actor, attic.id)
     return item
   })
 }
 
+/** The same for callers that hold the attic, know the place to be sound and judge the attic themselves. */
+export async function putItem(trx: Trx, actor: Person, attic: AtticRef, { photoIds, ...input }: AtticItemValue): Promise<ItemRow> {
+  refuseRefused(input)
+  const item = await trx.insertInto('atticItem').values({
+    id: newId(), organisationId: attic.organisationId, unitId: attic.unitId, atticId: attic.id, ...input, removedOn: null, createdAt: nowInstant(),
+  }).returningAll().executeTakeFirstOrThrow()
+  const photos = await attachPhotos(trx, actor, attic.unitId, photoIds, { itemId: item.id })
+  await appendLoadEvent(trx, actor, { item, kind: 'in', happenedOn: input.placedOn, deltaLb: weightLb(item), detail: spotOf(item) })
+  await appendRecord(trx, actor, {
+    organisationId: attic.organisationId, unitId: attic.unitId, subjectKind: 'item', subjectId: item.id, action: 'item put in the attic',
+    after: { atticId: attic.id, ...input, photos: photos.map(({ id, sha256 }) => ({ id, sha256 })) },
+  })
+  return item
+}
+
+function refuseRefused(item: Parameters<typeof keptDespiteProblem>[0]) {
+  const fields = keptDespiteProblem(item)
+  if (Object.keys(fields).length > 0) throw unsound(fields)
+}
+
 /** Changes an item; a new weight or place is a step of the load history. */
-export function editItem(db: Db, actor: Person, item: ItemRow, { version, happenedOn, ...patch }: AtticItemEditValue) {
+export function editItem(db: Db, actor: Person, item: ItemRow, { version, happenedOn, photoIds, ...patch }: AtticItemEditValue) {
   refuseFuture('happenedOn', happenedOn, actor)
+  refuseRefused(patch)
   return db.transaction().execute(async (trx) => {
     const before = await lockItem(trx, item)
     await refuseOutsideField(trx, item.atticId, patch)
     const after = await writeItem(trx, actor, { before, version, patch, happenedOn })
+    await attachPhotos(trx, actor, item.unitId, photoIds, { itemId: item.id })
     await judgeAttic(trx, actor, item.atticId)
     return after
   })
@@ -97,7 +116,7 @@ export function confirmInventory(db: Db, actor: Person, attic: AtticRef, confirm
   })
 }
 
-interface ItemChange { before: ItemRow, version: number, patch: Partial<AtticItemValue>, happenedOn: string }
+interface ItemChange { before: ItemRow, version: number, patch: Partial<Omit<AtticItemValue, 'photoIds'>>, happenedOn: string }
 
 async function writeItem(trx: Trx, actor: Person, { before, version, patch, happenedOn }: ItemChange) {
   const after = await editRow<ItemRow>(trx, actor, {
@@ -108,7 +127,7 @@ async function writeItem(trx: Trx, actor: Person, { before, version, patch, happ
   const moved = JSON.stringify(spotOf(after)) !== JSON.stringify(spotOf(before))
   if (moved || deltaLb !== 0) await refuseBeforeLastStep(trx, 'happenedOn', happenedOn, before.id)
   if (moved) await appendLoadEvent(trx, actor, { item: before, kind: 'moved', happenedOn, deltaLb: 0, detail: { from: spotOf(before), to: spotOf(after) } })
-  if (deltaLb !== 0) await appendLoadEvent(trx, actor, { item: before, kind: 'reweighed', happenedOn, deltaLb, detail: { fromLb: weightLb(before), toLb: weightLb(after), weightSource: after.weightSource } })
+  if (deltaLb !== 0) await appendLoadEvent(trx, actor, { item: before, kind: 'reweighed', happenedOn, deltaLb, detail: { fromLb: weightLb(before), toLb: weightLb(after), fromSource: before.weightSource, weightSource: after.weightSource } })
   return after
 }
 

@@ -10,6 +10,7 @@ import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
+import * as inventory from './0024Inventory'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
 import * as markRepairs from './0032MarkRepairs'
@@ -30,6 +31,7 @@ export const migrations: Record<string, Migration> = {
   '0009InvitationTerms': invitationTerms,
   '0012LookedBefore': lookedBefore,
   '0013FollowedChanges': followedChanges,
+  '0024Inventory': inventory,
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
   '0032MarkRepairs': markRepairs,

@@ -50,6 +50,21 @@ const loadEventsOf = compiledOnce((db, { atticId }: { atticId: string }) =>
 /** The load history, newest first. */
 export const findLoadEvents = (db: Db, atticId: string) => loadEventsOf.rows(db, { atticId })
 
+const itemPhotosIn = compiledOnce((db, { atticId }: { atticId: string }) =>
+  db.selectFrom('photo as p').innerJoin('atticItem as i', 'i.id', 'p.itemId').select(['p.id', 'p.itemId', 'p.uploadedAt'])
+    .where('i.atticId', '=', atticId).where('i.removedOn', 'is', null).orderBy('p.uploadedAt').limit(500))
+
+export const findItemPhotos = (db: Db, atticId: string) => itemPhotosIn.rows(db, { atticId })
+
+const weighedByPerson = compiledOnce((db, { organisationId, userId }: { organisationId: string, userId: string }) =>
+  db.selectFrom('loadEvent as e')
+    .select([sql<number>`count(*)`.as('count'), sql<number | null>`percentile_cont(0.5) within group (order by (e.detail->>'toLb')::float8 / (e.detail->>'fromLb')::float8)`.as('medianRatio')])
+    .where('e.organisationId', '=', organisationId).where('e.recordedBy', '=', userId).where('e.kind', '=', 'reweighed')
+    .where(sql<boolean>`e.detail->>'weightSource' = 'weighed' and coalesce(e.detail->>'fromSource', 'estimate') <> 'weighed' and (e.detail->>'fromLb')::float8 > 0`))
+
+/** How a person's earlier weights compared with the scale: weighed over noted, in the middle of all. */
+export const findGuessRecord = (db: Db, organisationId: string, userId: string) => weighedByPerson.first(db, { organisationId, userId })
+
 export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
   const row = await db.selectFrom('atticItem').select(sql<string | null>`sum(quantity * typical_lb)`.as('lb'))
     .where('atticId', '=', atticId).where('removedOn', 'is', null).executeTakeFirstOrThrow()

@@ -1,5 +1,6 @@
 import type { AtticSurvey, DocumentKind } from '../../../shared/types/attic'
 import type { ItemCategory } from '../../../shared/types/item'
+import type { StorageTerms } from '../../../shared/types/storageTerms'
 import type { Day, Defaulted, Instant, Json } from '../schema'
 
 export interface AtticTables {
@@ -8,6 +9,8 @@ export interface AtticTables {
   atticDocument: AtticDocumentTable
   atticItem: AtticItemTable
   loadEvent: LoadEventTable
+  inventoryImport: InventoryImportTable
+  termsSignature: TermsSignatureTable
 }
 
 export interface AtticTable {
@@ -84,6 +87,7 @@ export interface AtticItemTable {
   placedOn: Day
   removedOn: Day | null
   notes: Defaulted<string>
+  keptDespite: Defaulted<string>
   createdAt: Instant
   version: Defaulted<number>
 }
@@ -101,4 +105,29 @@ export interface LoadEventTable {
   detail: Json<object>
   recordedBy: string
   recordedAt: Instant
+}
+
+/** A list that was read in; the key makes a second sending answer the first. */
+export interface InventoryImportTable {
+  id: string
+  organisationId: string
+  unitId: string
+  atticId: string
+  importedBy: string
+  clientKey: string
+  items: number
+  skipped: number
+  importedAt: Instant
+}
+
+/** Append-only: what was signed stays as it was. */
+export interface TermsSignatureTable {
+  id: string
+  organisationId: string
+  unitId: string
+  atticId: string
+  userId: string
+  signedName: string
+  terms: Json<StorageTerms>
+  signedAt: Instant
 }

@@ -4,8 +4,8 @@ import { ITEM_OWNER_WORDS } from '../messages/goodsMessages'
 import { formatLength, formatWeight, type UnitSystem } from '../units'
 
 /** The part of a stored item that a person may change. */
-export const itemFacts = ({ name, catalogueKey, category, quantity, lowLb, typicalLb, highLb, weightSource, belongsTo, fieldNumber, xFt, yFt, lengthFt, widthFt, heightFt, notes }: StoredItem): ItemFacts =>
-  ({ name, catalogueKey, category, quantity, lowLb, typicalLb, highLb, weightSource, belongsTo, fieldNumber, xFt, yFt, lengthFt, widthFt, heightFt, notes })
+export const itemFacts = ({ name, catalogueKey, category, quantity, lowLb, typicalLb, highLb, weightSource, belongsTo, fieldNumber, xFt, yFt, lengthFt, widthFt, heightFt, notes, keptDespite }: StoredItem): ItemFacts =>
+  ({ name, catalogueKey, category, quantity, lowLb, typicalLb, highLb, weightSource, belongsTo, fieldNumber, xFt, yFt, lengthFt, widthFt, heightFt, notes, keptDespite, photoIds: [] })
 
 /** Mine and theirs side by side, in words. */
 export function clashRows(mine: ItemFacts, theirs: ItemFacts, system: UnitSystem = 'us') {

@@ -46,7 +46,7 @@ const DENSE_LB_PER_FT3 = 25
 
 export type RefusalInput = Pick<AtticItem, 'catalogueKey' | 'label' | 'count' | 'typicalLb' | 'lengthFt' | 'widthFt' | 'heightFt'>
 
-function byName(item: RefusalInput): Refusal[] {
+function byName(item: Pick<RefusalInput, 'catalogueKey' | 'label'>): Refusal[] {
   if (item.catalogueKey !== null) {
     const refused = REFUSED_KEYS[item.catalogueKey]
     if (refused) return [{ level: 'refuse', reason: refused }]
@@ -67,4 +67,10 @@ export function refusalsFor(item: RefusalInput, ratedPsf: number | null): Refusa
     refusals.push({ level: 'question', reason: 'presses-more-than-rated' })
   }
   return refusals
+}
+
+/** What is refused is noted only with the reason why it is up there all the same: the list has to tell the truth. By field of the form. */
+export function keptDespiteProblem({ catalogueKey, name, keptDespite }: { catalogueKey: string | null, name: string, keptDespite: string }): Record<string, string> {
+  const isRefused = byName({ catalogueKey, label: name }).some(({ level }) => level === 'refuse')
+  return isRefused && keptDespite.trim() === '' ? { keptDespite: 'This does not belong in an attic. If it is there all the same, say why it cannot come down.' } : {}
 }

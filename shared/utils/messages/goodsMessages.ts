@@ -1,3 +1,4 @@
+import type { GuessRecord } from '../../types/atticDetail'
 import type { ItemCategory, ItemOwner, WeightSource } from '../../types/item'
 import type { Contents } from '../goods/goodsDensities'
 import type { InventoryTotal } from '../goods/inventoryTotal'
@@ -54,4 +55,17 @@ export function guessSentence(guess: { name: string, typicalLb: number, lowLb: n
   if (Math.abs(off) < 0.05) return `${weighed}. That was right.`
   const inside = weighedLb >= guess.lowLb && weighedLb <= guess.highLb ? 'still inside the range' : 'outside the range'
   return `${weighed}: ${formatShare(Math.abs(off))} too ${off > 0 ? 'little' : 'much'}, ${inside}.`
+}
+
+/** Ours: fewer weighings say nothing about a person. */
+const FEWEST_WEIGHINGS = 3
+
+/** After some weighings: which way this person's weights lean; null while it is too early or they do not lean. */
+export function leaningSentence({ count, medianRatio }: GuessRecord): string | null {
+  if (count < FEWEST_WEIGHINGS || medianRatio === null) return null
+  const off = medianRatio - 1
+  if (Math.abs(off) < 0.1) return `Your last ${count} weights were about right in the middle. Keep guessing the way you do.`
+  return off > 0
+    ? `Of your ${count} weights checked on a scale, the middle one was ${formatShare(off)} heavier than noted. Guess higher, or weigh.`
+    : `Of your ${count} weights checked on a scale, the middle one was ${formatShare(-off)} lighter than noted.`
 }

@@ -6,7 +6,7 @@ export type AtticCautionCode = 'trusses' | 'hold' | 'unload-first' | 'estimate'
 /** What may go into an attic, for a person who lives below it. */
 export interface TenantAtticRule { word: string, sentences: string[], cautions: AtticCautionCode[] }
 
-type RatedAttic = Pick<AtticOfUnit, 'surveyedOn' | 'ratedPsf' | 'onHold' | 'basis' | 'loadState' | 'storedLb'> & { isTrussed: boolean }
+export type RatedAttic = Pick<AtticOfUnit, 'surveyedOn' | 'ratedPsf' | 'onHold' | 'basis' | 'loadState' | 'storedLb'> & { isTrussed: boolean }
 
 const NOTHING = 'Keep nothing in it.'
 const ASK = 'Ask your landlord before anything goes up.'

@@ -19,7 +19,7 @@ export const survey = (surveyedOn: string, change: Partial<AtticSurvey> = {}): A
 
 export const item = (placedOn: string, change: Partial<AtticItemValue> = {}): AtticItemValue => ({
   name: 'Invented boxes', catalogueKey: null, category: 'boxes', quantity: 2, lowLb: 20, typicalLb: 30, highLb: 45, weightSource: 'estimate', belongsTo: 'tenant',
-  fieldNumber: 1, xFt: 0, yFt: 4, lengthFt: 2, widthFt: 2, heightFt: 2, notes: '', placedOn, ...change,
+  fieldNumber: 1, xFt: 0, yFt: 4, lengthFt: 2, widthFt: 2, heightFt: 2, notes: '', keptDespite: '', photoIds: [], placedOn, ...change,
 })
 
 export const about = (writtenOn: string, change: object = {}) => ({

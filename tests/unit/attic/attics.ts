@@ -12,5 +12,5 @@ export const survey = (change: Partial<AtticSurvey> = {}): AtticSurvey => ({
 
 export const item = (change: Partial<StoredItem> = {}): StoredItem => ({
   id: 'a', version: 1, fieldNumber: 1, catalogueKey: null, name: 'Invented box', category: 'boxes', quantity: 1, lowLb: 50, typicalLb: 50, highLb: 50, weightSource: 'weighed',
-  belongsTo: 'landlord', xFt: 0, yFt: 4, lengthFt: 2, widthFt: 2, heightFt: 2, placedOn: '2026-11-02', removedOn: null, notes: '', ...change,
+  belongsTo: 'landlord', xFt: 0, yFt: 4, lengthFt: 2, widthFt: 2, heightFt: 2, placedOn: '2026-11-02', removedOn: null, notes: '', keptDespite: '', ...change,
 })

@@ -16,6 +16,8 @@ const EXPECTED: Record<Ability, Row> = {
   'see unit': ['all', 'all', 'own units', '-', 'own units'],
   'see attic': ['all', 'all', 'own units', '-', 'own units'],
   'edit attic': ['all', 'all', '-', '-', '-'],
+  'confirm inventory': ['all', 'all', 'own units', '-', '-'],
+  'sign terms': ['-', '-', 'own units', '-', '-'],
   'see mark': ['all', 'all', 'own units', '-', 'own units'],
   'edit mark': ['all', 'all', '-', '-', '-'],
   'report observation': ['all', 'all', 'own units', '-', '-'],

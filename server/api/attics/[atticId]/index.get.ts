@@ -5,5 +5,5 @@ export default apiRoute({
   can: 'see attic',
   on: { attic: 'atticId' },
   kept: true,
-  handle: async ({ db, actor, attic }) => ({ ...await readAttic(db, attic), abilities: abilitiesFor(actor) }),
+  handle: async ({ db, actor, attic }) => ({ ...await readAttic(db, actor, attic), abilities: abilitiesFor(actor) }),
 })
