@@ -1,4 +1,4 @@
-import { kgToLb, mToFt, mmToIn, type UnitSystem } from '../../shared/utils/units'
+import { kgToLb, mToFt, mmToIn, type UnitSystem } from '~/shared/utils/units'
 import { quantityFromText } from './quantityText'
 
 /** The unit a quantity is kept in. */

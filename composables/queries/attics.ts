@@ -1,7 +1,9 @@
 import type { AtticDetail, AtticListRow } from '~/shared/types/atticDetail'
 import type { AtticSurvey } from '~/shared/types/attic'
 import type { AtticEditValue } from '~/shared/schemas/attic'
-import type { AtticItemEditValue, AtticItemMovesValue, AtticItemValue } from '~/shared/schemas/atticItem'
+import type { ListImported, ListPreview } from '~/shared/types/inventoryList'
+import type { TermsPage } from '~/shared/types/storageTerms'
+import type { AtticItemBulkValue, AtticItemEditValue, AtticItemMovesValue, AtticItemValue } from '~/shared/schemas/atticItem'
 
 export const atticKey = (atticId: string) => ['attics', atticId]
 
@@ -23,8 +25,7 @@ export const useKeepSurvey = (atticId: string) => post<AtticSurvey>(() => `/api/
 export const useAddItem = (atticId: string) => post<AtticItemValue>(() => `/api/attics/${atticId}/items`)
 export const useMoveItems = (atticId: string) => post<AtticItemMovesValue>(() => `/api/attics/${atticId}/moves`)
 export const useConfirmInventory = (atticId: string) => post<{ confirmedOn: string }>(() => `/api/attics/${atticId}/inventory-confirmation`)
-export const useRemoveItem = () =>
-  post<{ itemId: string, removedOn: string, version: number }>(({ itemId }) => `/api/items/${itemId}/removal`, ({ removedOn, version }) => ({ removedOn, version }))
+export const useChangeSeveral = (atticId: string) => post<AtticItemBulkValue>(() => `/api/attics/${atticId}/bulk`)
 export const useWithdrawDocument = () => post<{ documentId: string }>(({ documentId }) => `/api/documents/${documentId}/withdrawal`, () => ({}))
 
 export const useEditAttic = (atticId: string) => useServerChange<AtticEditValue, unknown>({
@@ -46,3 +47,13 @@ export const useAddDocument = (atticId: string) => useServerChange<{ file: File,
     return request(`/api/attics/${atticId}/documents`, { method: 'POST', body: form })
   },
 })
+
+export const usePreviewList = (atticId: string) => (csv: string) =>
+  $fetch<ListPreview>(`/api/attics/${atticId}/inventory-preview`, { method: 'POST', body: { csv } })
+export const useImportList = (atticId: string) => useServerChange<{ csv: string, skipBad: boolean, key: string }, ListImported>({
+  stale: STALE,
+  send: (request, { key, ...body }) => request(`/api/attics/${atticId}/inventory-import`, { method: 'POST', body, headers: { 'idempotency-key': key } }),
+})
+
+export const useTerms = (atticId: string) => useServerQuery<TermsPage>({ key: ['attics', atticId, 'terms'], path: `/api/attics/${atticId}/terms`, essential: true })
+export const useSignTerms = (atticId: string) => post<{ signedName: string, rules: string[] }>(() => `/api/attics/${atticId}/terms-signature`)

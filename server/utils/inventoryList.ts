@@ -59,7 +59,9 @@ function readRow({ record, line, columns }: { record: string[], line: number, co
   const { item, problems } = readListRow(cells, today)
   if (record.length > columns.length) problems.push({ column: '', message: 'This row has more cells than the header has columns.' })
   const parsed = AtticItemInput.safeParse(item)
-  if (!parsed.success) problems.push(...newProblems(parsed.error.issues.map(({ path, message }) => ({ column: columnOf(String(path[0] ?? '')), message })), problems))
+  // Without a weight there is no range to speak of.
+  const issues = parsed.error?.issues.filter(({ path }) => item.typicalLb !== undefined || !['lowLb', 'highLb'].includes(String(path[0]))) ?? []
+  if (!parsed.success) problems.push(...newProblems(issues.map(({ path, message }) => ({ column: columnOf(String(path[0] ?? '')), message })), problems))
   else problems.push(...soundProblems(parsed.data, survey, today))
   return { line, problems, value: parsed.success && problems.length === 0 ? parsed.data : null }
 }

@@ -17,7 +17,7 @@ export type DangerTick = DangerSign | 'none'
 export interface DraftPhoto {
   /** Under which the picture is kept on this phone. */
   localId: string
-  view: Extract<PhotoView, 'wide' | 'close'>
+  view: Extract<PhotoView, 'wide' | 'close' | 'item'>
   name: string
   state: 'kept' | 'uploaded' | 'refused'
   /** The server's own, once it has the picture. */

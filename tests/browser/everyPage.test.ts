@@ -19,6 +19,8 @@ const PAGES: Record<string, Sample[]> = {
   'attics/[atticId]/hatch-card.vue': both('/attics/:attic/hatch-card'),
   'attics/[atticId]/items/new.vue': one('maren', '/attics/:attic/items/new'),
   'attics/[atticId]/items/[itemId].vue': one('maren', '/attics/:attic/items/:item'),
+  'attics/[atticId]/list.vue': one('maren', '/attics/:attic/list'),
+  'attics/[atticId]/terms.vue': both('/attics/:attic/terms'),
   'attics/[atticId]/load-plan.vue': one('maren', '/attics/:attic/load-plan'),
   'attics/[atticId]/survey.vue': one('maren', '/attics/:attic/survey'),
   'attics/index.vue': one('maren', '/attics'),

@@ -2,7 +2,7 @@ import { sql } from 'kysely'
 import { compiledOnce } from '../compiledOnce'
 import type { Db } from '../connect'
 import type { AtticDocument } from '../../../shared/types/attic'
-import type { AtticListRow } from '../../../shared/types/atticDetail'
+import type { AtticListRow, GuessRecord } from '../../../shared/types/atticDetail'
 import type { Page } from '../../../shared/types/home'
 import { visibleUnits, type Actor } from './actor'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
@@ -63,7 +63,9 @@ const weighedByPerson = compiledOnce((db, { organisationId, userId }: { organisa
     .where(sql<boolean>`e.detail->>'weightSource' = 'weighed' and coalesce(e.detail->>'fromSource', 'estimate') <> 'weighed' and (e.detail->>'fromLb')::float8 > 0`))
 
 /** How a person's earlier weights compared with the scale: weighed over noted, in the middle of all. */
-export const findGuessRecord = (db: Db, organisationId: string, userId: string) => weighedByPerson.first(db, { organisationId, userId })
+export async function findGuessRecord(db: Db, { organisationId, userId }: Pick<Actor, 'organisationId' | 'userId'>): Promise<GuessRecord> {
+  return await weighedByPerson.first(db, { organisationId, userId }) ?? { count: 0, medianRatio: null }
+}
 
 export async function sumStoredLb(db: Db, atticId: string): Promise<number> {
   const row = await db.selectFrom('atticItem').select(sql<string | null>`sum(quantity * typical_lb)`.as('lb'))

@@ -5,8 +5,7 @@ import type { AtticDetail } from '../../../shared/types/atticDetail'
 import type { RatingBasis } from '../../../shared/types/atticRating'
 import { dayIn } from '../../utils/clock'
 import { notFound } from '../../utils/problems'
-import type { Actor } from './actor'
-import { asAtticDocument, findDocuments, findGuessRecord, findItemPhotos, findItemsIn, findLoadEvents, findSurveys } from './attics'
+import { asAtticDocument, findDocuments, findItemPhotos, findItemsIn, findLoadEvents, findSurveys } from './attics'
 
 interface AtticRow { id: string, unitId: string, name: string, notes: string, inventoryConfirmedOn: string | null, archivedAt: string | null, version: number }
 
@@ -16,11 +15,11 @@ const placeOf = compiledOnce((db, { unitId }: { unitId: string }) =>
     .where('u.id', '=', unitId))
 
 /** Everything an attic's page shows, judged as it stands now. */
-export async function readAttic(db: Db, actor: Pick<Actor, 'organisationId' | 'userId'>, attic: AtticRow): Promise<Omit<AtticDetail, 'abilities'>> {
-  const [place, surveys, documents, items, events, photos, guesses] = await Promise.all([
+export async function readAttic(db: Db, attic: AtticRow): Promise<Omit<AtticDetail, 'abilities' | 'guesses'>> {
+  const [place, surveys, documents, items, events, photos] = await Promise.all([
     placeOf.first(db, { unitId: attic.unitId }),
     findSurveys(db, attic.id), findDocuments(db, attic.id), findItemsIn(db, attic.id), findLoadEvents(db, attic.id),
-    findItemPhotos(db, attic.id), findGuessRecord(db, actor.organisationId, actor.userId),
+    findItemPhotos(db, attic.id),
   ])
   if (!place) throw notFound()
   const survey = surveys[0]?.answers ?? null
@@ -39,7 +38,6 @@ export async function readAttic(db: Db, actor: Pick<Actor, 'organisationId' | 'u
     items,
     events,
     itemPhotos: photos.map(({ id: photoId, itemId }) => ({ id: photoId, itemId: itemId! })),
-    guesses: { count: guesses?.count ?? 0, medianRatio: guesses?.medianRatio ?? null },
     contents: judgeContents({ survey, documents: documents.map(asAtticDocument), items }),
   }
 }

@@ -50,7 +50,7 @@ export function columnReader(column: string): Reader | string | undefined {
   return undefined
 }
 
-const NUMBER = /^-?\d+(\.\d+)?$/
+const NUMBER = /^-?\d+(\.\d+)?(e[-+]?\d+)?$/i
 
 const measureReader = (key: keyof ListItem, factor: number): Reader => (cell, item) => {
   if (cell === '') return undefined

@@ -1,6 +1,6 @@
 import type { AtticItem } from '../../types/item'
 import { pressurePsf } from './footprint'
-import { ONE_PERSON_LIFT_LB } from './goodsDensities'
+import { ONE_PERSON_LIFT_LB, type DENSE_CONTENTS } from './goodsDensities'
 
 export const REFUSAL_REASONS = [
   'holds-water', 'too-heavy-for-any-attic', 'can-burn', 'building-material', 'part-of-the-building',
@@ -73,4 +73,18 @@ export function refusalsFor(item: RefusalInput, ratedPsf: number | null): Refusa
 export function keptDespiteProblem({ catalogueKey, name, keptDespite }: { catalogueKey: string | null, name: string, keptDespite: string }): Record<string, string> {
   const isRefused = byName({ catalogueKey, label: name }).some(({ level }) => level === 'refuse')
   return isRefused && keptDespite.trim() === '' ? { keptDespite: 'This does not belong in an attic. If it is there all the same, say why it cannot come down.' } : {}
+}
+
+/** Contents people under-estimate most, by the words that name them (practice: ask about books, paper, tools, tile and liquids). */
+const DENSE_WORDS: readonly (readonly [RegExp, typeof DENSE_CONTENTS[number]])[] = [
+  [/\b(books?|magazines?|comics|records?|vinyl|lps?)\b/i, 'books'],
+  [/\b(papers?|documents?|files|archive|photos?|albums?)\b/i, 'paper'],
+  [/\b(tools?|hardware|screws|nails|weights?|coins?|batter(y|ies))\b/i, 'tools'],
+  [/\b(tiles?|stones?|bricks?)\b/i, 'tile'],
+  [/\b(liquids?|wine|beer|water|bottles?|jars?|preserves|canned|tins)\b/i, 'liquids'],
+]
+
+/** What a box may be full of, going by its name; null when nothing suggests it. */
+export function suspectedContents(name: string): typeof DENSE_CONTENTS[number] | null {
+  return DENSE_WORDS.find(([words]) => words.test(name))?.[1] ?? null
 }

@@ -32,7 +32,6 @@ const edits: [string, Asking][] = [
   ['POST surveys', as => as.post(`${attic.path}/surveys`, survey(today()))],
   ['POST items', as => as.post(`${attic.path}/items`, item(today()))],
   ['POST moves', as => as.post(`${attic.path}/moves`, { happenedOn: today(), moves: [{ itemId, version: 1, fieldNumber: 1, xFt: 1, yFt: 4, lengthFt: 2, widthFt: 2 }] })],
-  ['POST inventory-confirmation', as => as.post(`${attic.path}/inventory-confirmation`, { confirmedOn: today() })],
   ['POST archive', as => as.post(`${attic.path}/archive`, { version: 1 })],
   ['POST restore', as => as.post(`${attic.path}/restore`, { version: 1 })],
   ['POST documents', as => as.post(`${attic.path}/documents`, paperForm(about(today())))],

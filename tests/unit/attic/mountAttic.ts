@@ -1,12 +1,15 @@
 import { mount, RouterLinkStub } from '@vue/test-utils'
 import type { Component } from 'vue'
+import ItemScale from '../../../components/attic/ItemScale.vue'
 import AtticVerdict from '../../../components/attic/AtticVerdict.vue'
 import UiButton from '../../../components/ui/UiButton.vue'
+import UiCheckbox from '../../../components/ui/UiCheckbox.vue'
 import UiChoice from '../../../components/ui/UiChoice.vue'
 import UiDay from '../../../components/ui/UiDay.vue'
 import UiDisclosure from '../../../components/ui/UiDisclosure.vue'
 import UiEmpty from '../../../components/ui/UiEmpty.vue'
 import UiField from '../../../components/ui/UiField.vue'
+import UiMeasure from '../../../components/ui/UiMeasure.vue'
 import UiNotice from '../../../components/ui/UiNotice.vue'
 import UiNumber from '../../../components/ui/UiNumber.vue'
 import UiSafety from '../../../components/ui/UiSafety.vue'
@@ -15,7 +18,7 @@ import UiStateWord from '../../../components/ui/UiStateWord.vue'
 import UiTable from '../../../components/ui/UiTable.vue'
 import UiVerdict from '../../../components/ui/UiVerdict.vue'
 
-const components = { AtticVerdict, UiButton, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiNotice, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
+const components = { AtticVerdict, ItemScale, UiButton, UiCheckbox, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiMeasure, UiNotice, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
 
 /** Mounts a component of the attic with the pieces Nuxt would have found for it. */
 export function mountAttic(component: unknown, props: Record<string, unknown>) {

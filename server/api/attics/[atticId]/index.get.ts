@@ -1,3 +1,4 @@
+import { findGuessRecord } from '../../../db/queries/attics'
 import { readAttic } from '../../../db/queries/readAttic'
 import { apiRoute, abilitiesFor } from '../../../utils/apiRoute'
 
@@ -5,5 +6,8 @@ export default apiRoute({
   can: 'see attic',
   on: { attic: 'atticId' },
   kept: true,
-  handle: async ({ db, actor, attic }) => ({ ...await readAttic(db, actor, attic), abilities: abilitiesFor(actor) }),
+  handle: async ({ db, actor, attic }) => {
+    const [detail, guesses] = await Promise.all([readAttic(db, attic), findGuessRecord(db, actor)])
+    return { ...detail, guesses, abilities: abilitiesFor(actor) }
+  },
 })
