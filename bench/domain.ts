@@ -3,6 +3,7 @@ import { addDays } from '../shared/utils/days.ts'
 import type { TrendReading } from '../shared/utils/movement/series.ts'
 import { markTrend } from '../shared/utils/movement/trend.ts'
 import { weakestMember } from '../shared/utils/structure/loadField.ts'
+import { judgeLoadPlan } from '../shared/utils/structure/judgeLoadPlan.ts'
 import { loadPlan } from '../shared/utils/structure/loadPlan.ts'
 import { whereMayItGo } from '../shared/utils/structure/whereMayItGo.ts'
 import { stationMap, stationPlan } from './stationByStation.ts'
@@ -48,6 +49,7 @@ console.log(JSON.stringify([
     name: 'load plan of 13 joists and 200 items', mostP50Ms: 4, ...timeOf(() => loadPlan(field, items)),
     plainP50Ms: timeOf(() => stationPlan(field, items), 20, 5).p50Ms,
   },
+  { name: 'the whole verdict on 13 joists and 200 items', mostP50Ms: 4, ...timeOf(() => judgeLoadPlan(field, items, { member })) },
   {
     name: 'where it may go: 20 × 20 ft, ½ ft grid, 60 items', mostP50Ms: 40, ...timeOf(() => whereMayItGo(wide, sixty, trunk, { member })),
     plainP50Ms: timeOf(() => stationMap(wide, sixty, trunk, member), 3, 1).p50Ms,

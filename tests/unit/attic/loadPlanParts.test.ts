@@ -4,6 +4,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import LoadPlanAdvice from '../../../components/attic/LoadPlanAdvice.vue'
 import LoadPlanFields from '../../../components/attic/LoadPlanFields.vue'
 import LoadPlanItemFacts from '../../../components/attic/LoadPlanItemFacts.vue'
+import LoadPlanKey from '../../../components/attic/LoadPlanKey.vue'
 import LoadPlanNewThing from '../../../components/attic/LoadPlanNewThing.vue'
 import LoadPlanNudge from '../../../components/attic/LoadPlanNudge.vue'
 import LoadPlanNumbers from '../../../components/attic/LoadPlanNumbers.vue'
@@ -43,10 +44,25 @@ describe('the first rule', () => {
 describe('several groups of joists', () => {
   it('each say how they stand, and are chosen by a press', async () => {
     const contents = judgeContents({ survey: survey({ joistFields: [field, { ...field, name: 'South', spanFt: null }] }), documents: [], items: [books] })
-    const shown = mountAttic(LoadPlanFields, { modelValue: 1, fields: contents.fields })
+    const shown = mountAttic(LoadPlanFields, { modelValue: 1, fields: contents.fields, joistFields: [field] })
     expect(shown.findAll('button').map(button => plain(button.text().replace(/\s+/g, ' ')))).toEqual([expect.stringMatching(/^North over, \d+ %$/), 'South not measured'])
     await shown.findAll('button')[1]!.trigger('click')
     expect(shown.emitted('update:modelValue')).toEqual([[2]])
+  })
+})
+
+describe('the key to several groups', () => {
+  const lying = (name: string, leftFt: number, joistsRun: 'left-right' | 'front-back' = 'left-right') => ({ ...field, name, layout: { leftFt, frontFt: 0, joistsRun } })
+
+  it('draws them where they lie, the chosen one heavier, their joists as they run', () => {
+    const shown = mountAttic(LoadPlanKey, { joistFields: [lying('North', 0), lying('South', 12, 'front-back')], chosen: 2 })
+    expect(shown.get('svg').attributes('viewBox')).toBe('-1 -1 30 18')
+    expect(shown.findAll('rect').map(rect => [rect.attributes('width'), rect.attributes('stroke-width')])).toEqual([['12', '1.5'], ['16', '3']])
+    expect(shown.findAll('path').map(path => /H/.test(path.attributes('d') ?? ''))).toEqual([true, false])
+  })
+
+  it('draws nothing where fewer than two are told', () => {
+    expect(mountAttic(LoadPlanKey, { joistFields: [lying('North', 0), field], chosen: 1 }).find('svg').exists()).toBe(false)
   })
 })
 

@@ -179,6 +179,14 @@ describe('strongbacks', () => {
     withStrongbacks.forEach((joist, index) => expect(joist.deflectionRatio / (joists[index]?.deflectionRatio ?? 0)).toBeCloseTo(1, 3))
   })
 
+  it('with a strongback more weight may relieve a far joist: it is lifted, so such a plan is never judged by parts', () => {
+    const plan = { ...field, strongbacks: [{ atFt: 8, eiLbIn2: 2.9e7 }] }
+    const [edge, middle] = [item({ yFt: 0, widthFt: 0.1, weightLb: 60 }), item({ id: 'pile', yFt: 7.95, widthFt: 0.1, weightLb: 300 })]
+    const ratioOf = (items: PlacedItem[]) => loadPlan(plan, items).withStrongbacks[0]?.momentRatio ?? 0
+    expect(ratioOf([edge, middle])).toBeLessThan(ratioOf([edge]))
+    expect(ratioOf([edge])).toBeLessThan(loadPlan(plan, [edge]).joists[0]?.momentRatio ?? 0)
+  })
+
   it('a stiffer strongback never leaves more on the joist under a pile', () => {
     const most = [1e5, 1e6, 1e7, 1e8, 1e9, 1e12].map(eiLbIn2 =>
       loadPlan({ ...field, strongbacks: [{ atFt: 8, eiLbIn2 }] }, [item({ yFt: 8 - 1e-3, widthFt: 2e-3, xFt: 7.9, lengthFt: 0.2 })]).withStrongbacks[4]?.deflectionRatio ?? 0)
