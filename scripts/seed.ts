@@ -9,6 +9,7 @@ import { PROPERTIES } from './seed/homes'
 import { atticSteps, plantProperty } from './seed/plantHomes'
 import { jobSteps } from './seed/plantJobs'
 import { markSteps } from './seed/plantMarks'
+import { noticeSteps } from './seed/plantNotices'
 import { DEMO_PASSWORD, plantPeople } from './seed/plantPeople'
 import { seeded } from './seed/readings'
 import { ORGANISATION, PEOPLE } from './seed/scenario'
@@ -36,7 +37,7 @@ async function plantDemo(db: Db, photoDir: string) {
       for (const mark of home.demo.marks) steps.push(...markSteps({ db, store, cast, random }, home, mark))
     }
   }
-  await playSteps(today, [...steps, ...jobSteps({ db, cast, homes })])
+  await playSteps(today, [...steps, ...jobSteps({ db, cast, homes }), ...noticeSteps({ db, cast, homes })])
   endDemoTime()
   await db.updateTable('message').set({ state: 'sent', sentAt: eb => eb.ref('createdAt') })
     .where('createdAt', '<', new Date(Date.now() - FRESH_MAIL_DAYS * 86_400_000).toISOString()).execute()

@@ -25,6 +25,8 @@ export const policy = {
   'record reading': { ...staff, tenant: 'own units' },
   'add photo': { ...staff, tenant: 'own units' },
   'see finding': { ...staff, engineer: 'own units' },
+  'see notice': { ...staff, tenant: 'own units', engineer: 'own units' },
+  'raise notice': staff,
   'acknowledge finding': staff,
   'judge finding': staff,
   'see ledger': staff,

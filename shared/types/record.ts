@@ -1,7 +1,7 @@
 /** What an entry of the record can be about. */
 export const RECORD_SUBJECTS = [
   'property', 'unit', 'room', 'tenancy', 'attic', 'survey', 'document', 'item', 'mark', 'observation', 'reading', 'photo',
-  'finding', 'trial', 'job', 'person', 'invitation', 'organisation', 'review', 'message',
+  'finding', 'notice', 'trial', 'job', 'person', 'invitation', 'organisation', 'review', 'message',
 ] as const
 export type RecordSubjectKind = typeof RECORD_SUBJECTS[number]
 

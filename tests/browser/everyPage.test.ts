@@ -38,6 +38,7 @@ const PAGES: Record<string, Sample[]> = {
   'marks/[markId]/reading.vue': both('/marks/:mark/reading'),
   'my-home.vue': one('tomas', '/my-home'),
   'no-membership.vue': one('maren', '/no-membership'),
+  'notices/[noticeId].vue': both('/notices/:notice'),
   'overview.vue': one('maren', '/overview'),
   'people/index.vue': one('maren', '/people'),
   'people/invite.vue': one('maren', '/people/invite'),

@@ -11,6 +11,7 @@ import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
 import * as inventory from './0024Inventory'
+import * as keepClearNotices from './0027KeepClearNotices'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
 import * as markRepairs from './0032MarkRepairs'
@@ -32,6 +33,7 @@ export const migrations: Record<string, Migration> = {
   '0012LookedBefore': lookedBefore,
   '0013FollowedChanges': followedChanges,
   '0024Inventory': inventory,
+  '0027KeepClearNotices': keepClearNotices,
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
   '0032MarkRepairs': markRepairs,

@@ -19,6 +19,7 @@ const invitationRow = compiledOnce((db, { id }: Given) => db.selectFrom('invitat
 const membershipRow = compiledOnce((db, { id }: Given) => db.selectFrom('membership').selectAll().where('id', '=', id))
 const messageRow = compiledOnce((db, { id }: Given) => db.selectFrom('message').selectAll().where('id', '=', id).where('organisationId', 'is not', null))
 
+const noticeRow = compiledOnce((db, { id }: Given) => db.selectFrom('keepClearNotice').selectAll().where('id', '=', id))
 const unloadTrialRow = compiledOnce((db, { id }: Given) => db.selectFrom('unloadTrial').selectAll().where('id', '=', id))
 
 /** One statement each: the row a route is about, with its organisation and unit. */
@@ -40,6 +41,7 @@ export const things = {
   observation: (db: Db, id: string) => observationRow.first(db, { id }),
   photo: (db: Db, id: string) => photoRow.first(db, { id }),
   finding: (db: Db, id: string) => findingRow.first(db, { id }),
+  notice: (db: Db, id: string) => noticeRow.first(db, { id }),
   unloadTrial: (db: Db, id: string) => unloadTrialRow.first(db, { id }),
   job: (db: Db, id: string) => jobRow.first(db, { id }),
   invitation: (db: Db, id: string) => invitationRow.first(db, { id }),

@@ -6,7 +6,7 @@ import { formatInches, formatLength, formatLoad, formatNumber, formatShare, form
 /** What each kind of entry is about, for the filter of the record. */
 export const RECORD_SUBJECT_WORDS: Record<string, string> = {
   property: 'Property', unit: 'Unit', room: 'Rooms', tenancy: 'Tenancies', attic: 'Attics', survey: 'Attic surveys', document: 'Documents',
-  item: 'Stored items', mark: 'Marks', observation: 'Reports', reading: 'Readings', photo: 'Photos', finding: 'Findings', trial: 'Unload trials', job: 'Jobs',
+  item: 'Stored items', mark: 'Marks', observation: 'Reports', reading: 'Readings', photo: 'Photos', finding: 'Findings', notice: 'Keep-clear notices', trial: 'Unload trials', job: 'Jobs',
   person: 'People', invitation: 'Invitations', organisation: 'Organisation', review: 'Daily reviews', message: 'Mail',
 }
 

@@ -24,6 +24,8 @@ const EXPECTED: Record<Ability, Row> = {
   'record reading': ['all', 'all', 'own units', '-', '-'],
   'add photo': ['all', 'all', 'own units', '-', '-'],
   'see finding': ['all', 'all', '-', '-', 'own units'],
+  'see notice': ['all', 'all', 'own units', '-', 'own units'],
+  'raise notice': ['all', 'all', '-', '-', '-'],
   'acknowledge finding': ['all', 'all', '-', '-', '-'],
   'judge finding': ['all', 'all', '-', '-', '-'],
   'see ledger': ['all', 'all', '-', '-', '-'],
