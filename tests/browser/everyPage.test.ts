@@ -29,6 +29,7 @@ const PAGES: Record<string, Sample[]> = {
   'findings/[findingId].vue': one('maren', '/findings/:finding'),
   'findings/index.vue': one('maren', '/findings'),
   'forgotten-password.vue': one('nobody', '/forgotten-password'),
+  'gauge-card.vue': [...both('/gauge-card'), { who: 'bram', path: '/gauge-card' }],
   'homes/index.vue': one('maren', '/homes'),
   'index.vue': [...both('/'), { who: 'bram', path: '/' }],
   'invitation/[token].vue': one('nobody', '/invitation/not-a-token'),
