@@ -12,7 +12,7 @@ import { judgeAttic } from './judgeAttic'
 import { lockAttic } from './lockAttic'
 import { refuseBeforeLastStep } from './lockItem'
 import { lockUnit } from './lockUnit'
-import { refuseUnless } from './planUnloadTrial'
+import { judgeTrialMarks, refuseUnless } from './planUnloadTrial'
 import { refuseFuture } from './refuseFuture'
 
 type Trial = Thing<'unloadTrial'>
@@ -28,6 +28,7 @@ export async function carryOutUnloadTrial(db: Db, actor: Actor, trial: Trial, { 
     await takeOutAll(trx, actor, trial, itemIds, unloadedOn)
     await editRow<Trial>(trx, actor, { table: 'unloadTrial', id: trial.id, version, patch: { state: 'unloaded', unloadedOn }, record: recordOf(trial, 'unload trial carried out') })
     await judgeAttic(trx, actor, trial.atticId)
+    await judgeTrialMarks(trx, actor, trial.id)
   })
   return findUnloadTrialView(db, actor, trial.id)
 }
@@ -57,6 +58,7 @@ export async function endUnloadTrial(db: Db, actor: Actor, trial: Trial, { ended
       table: 'unloadTrial', id: trial.id, version, patch: { state: now.state === 'unloaded' ? 'ended' : 'given-up', endedOn, conclusion },
       record: recordOf(trial, now.state === 'unloaded' ? 'unload trial ended' : 'unload trial given up'),
     })
+    await judgeTrialMarks(trx, actor, trial.id)
   })
   return findUnloadTrialView(db, actor, trial.id)
 }

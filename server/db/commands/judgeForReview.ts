@@ -51,7 +51,7 @@ function dueIn({ unit, attics, marks, jobs }: UnitUnderReview, judged: JudgedMar
   const changes = new Map(attics.map(({ attic, lastLoadChangeOn }) => [attic.id, attic.archivedAt ? null : lastLoadChangeOn]))
   return dueItems({
     marks: marks.map(({ mark, sources }, i) => ({
-      id: mark.id, unitId: unit.id, activity: judged[i]!.status.activity, closed: false, reportedOn: dayIn(unit.timeZone, new Date(mark.createdAt)),
+      id: mark.id, unitId: unit.id, activity: judged[i]!.status.activity, inTrial: mark.inTrial, closed: false, reportedOn: dayIn(unit.timeZone, new Date(mark.createdAt)),
       lastEventOn: mark.atticId ? changes.get(mark.atticId) ?? null : null, readings: sources.readings,
     })),
     attics: attics.filter(({ attic }) => !attic.archivedAt).map(({ attic, survey, documents, items }) => ({

@@ -84,7 +84,7 @@ export function markJudgement(mark: JudgedMark, { readings: rows, reports, frami
     ceilingSpanMm: reports.findLast(report => report.sagSpanMm)?.sagSpanMm ?? (sides.length > 0 ? Math.min(...sides) * MM_PER_FT : null),
     morePops: mark.morePops,
     plaster: /plaster/i.test(mark.ceilingFinish),
-    nextReading: nextReading({ reportedOn, activity: trend.activity, lastEventOn: lastLoadChangeOn, closed: false }, rows, today),
+    nextReading: nextReading({ reportedOn, activity: trend.activity, lastEventOn: lastLoadChangeOn, inTrial: mark.inTrial, closed: false }, rows, today),
   }
 }
 

@@ -9,6 +9,7 @@ import type { Thing } from '../queries/things'
 import { findUnloadTrialView } from '../queries/unloadTrials'
 import { appendRecord } from './appendRecord'
 import { editRow } from './editRow'
+import { judgeMark } from './judgeMark'
 import { lockAttic, type AtticRef } from './lockAttic'
 
 type Trial = Thing<'unloadTrial'>
@@ -26,6 +27,7 @@ export async function planUnloadTrial(db: Db, actor: Actor, attic: AtticRef, inp
       id, organisationId: attic.organisationId, unitId: attic.unitId, atticId: attic.id, purpose, plannedOn, unloadedOn: null, endedOn: null, createdBy: actor.userId, createdAt: nowInstant(),
     }).execute()
     await writeChoice(trx, { id, organisationId: attic.organisationId }, input)
+    await judgeMarks(trx, actor, markIds)
     await appendRecord(trx, actor, {
       organisationId: attic.organisationId, unitId: attic.unitId, subjectKind: 'trial', subjectId: id, action: 'unload trial planned', after: { atticId: attic.id, purpose, plannedOn, itemIds, markIds },
     })
@@ -47,6 +49,7 @@ export async function editUnloadTrial(db: Db, actor: Actor, trial: Trial, { vers
     const isSame = (a: string[], b: string[]) => [...a].sort().join() === [...b].sort().join()
     if (isSame(chosen.itemIds, itemIds) && isSame(chosen.markIds, markIds)) return
     await writeChoice(trx, trial, { itemIds, markIds })
+    await judgeMarks(trx, actor, [...new Set([...chosen.markIds, ...markIds])])
     await trx.updateTable('unloadTrial').set({ version: now + 1 }).where('id', '=', trial.id).execute()
     await appendRecord(trx, actor, {
       organisationId: trial.organisationId, unitId: trial.unitId, subjectKind: 'trial', subjectId: trial.id, action: 'unload trial changed', before: chosen, after: { itemIds, markIds },
@@ -78,6 +81,13 @@ async function checkPlan(trx: Trx, actor: Actor, attic: AtticRef, { plannedOn, i
   const marks = await trx.selectFrom('mark').select('id').where('id', 'in', markIds).where('unitId', '=', attic.unitId).where('state', '!=', 'closed').execute()
   if (marks.length < markIds.length) throw unsound({ markIds: 'Choose marks of this home that are not closed.' })
 }
+
+/** Marks of a trial are read oftener: their next reading changes as they come under it and leave it. */
+async function judgeMarks(trx: Trx, actor: Actor, markIds: readonly string[]) {
+  for (const id of [...markIds].sort()) await judgeMark(trx, actor, id)
+}
+
+export const judgeTrialMarks = async (trx: Trx, actor: Actor, trialId: string) => judgeMarks(trx, actor, (await choiceOf(trx, trialId)).markIds)
 
 async function choiceOf(trx: Trx, trialId: string) {
   const items = await trx.selectFrom('unloadTrialItem').select('itemId').where('trialId', '=', trialId).execute()

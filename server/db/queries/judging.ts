@@ -30,6 +30,7 @@ const fromJudgedMarks = (db: Db) =>
     .leftJoin('atticStatus as s', 's.atticId', 'm.atticId')
     .selectAll('m')
     .select([...limitColumns, 'o.timeZone', 'r.name as roomName', 'r.ceilingFinish', 'r.lengthFt', 'r.widthFt', 's.storedLb as aboveLb', 's.utilisation as aboveUtilisation'])
+    .select(sql<boolean>`exists (select from unload_trial_mark w join unload_trial t on t.id = w.trial_id where w.mark_id = m.id and t.state in ('planned', 'unloaded'))`.as('inTrial'))
 
 export const findJudgedMark = (db: Db, markId: string) => fromJudgedMarks(db).where('m.id', '=', markId).executeTakeFirst()
 

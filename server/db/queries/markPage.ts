@@ -39,7 +39,7 @@ export async function findMarkPage(db: Db, actor: Actor, markId: string): Promis
     loadLinks: loadLinks(points, loadSteps),
     clues: cluesFor({
       kind: mark.kind, place: mark.place, shape: mark.shape, wallType, recentEvents: first?.recentEvents ?? [],
-      mendedBefore: mark.segment > 1, widestOnDayOfYear: trend.kind === 'measured' && trend.season ? trend.season.highestOnDayOfYear : null,
+      mendedBefore: mark.segment > 1, widestOnDayOfYear: trend.kind === 'measured' && trend.season?.isClear ? trend.season.highestOnDayOfYear : null,
     }),
     abilities: abilitiesOf(actor.role), today: dayIn(around.timeZone), timeZone: around.timeZone, contactPhone: around.contactPhone,
   }

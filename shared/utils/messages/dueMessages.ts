@@ -10,7 +10,7 @@ export const DUE_KIND_WORDS: Record<DueKind, string> = {
 
 export const READING_REASON_WORDS: Record<ReadingDueReason, string> = {
   'new-mark': 'a week after it was first reported or read', 'second-reading': 'two weeks after the second reading', 'monthly': 'once a month',
-  'active-weekly': 'every week while it is active', 'dormant-quarterly': 'every three months while it is quiet',
+  'active-weekly': 'every week while it is active', 'trial-fortnightly': 'every two weeks during the unload trial', 'dormant-quarterly': 'every three months while it is quiet',
 }
 
 /** 'Due 14 Mar 2027, 3 days late'. */

@@ -54,13 +54,19 @@ export interface CluePattern {
   recentEvents: readonly RecentEvent[]
   /** The mark was mended before and came back. */
   mendedBefore: boolean
-  /** Day of the year a fitted season is highest; null while the season is not known. */
+  /** Day of the year a fitted season is highest; null while no season stands out from the readings' scatter. */
   widestOnDayOfYear: number | null
 }
 
-/** Heating season of the northern half: November to March. */
+/** Heating season of the northern half: November to March. The other months are the wet ones for air indoors. */
 function isWinter(dayOfYear: number): boolean {
   return dayOfYear < 90 || dayOfYear >= 305
+}
+
+/** Whether the mark is widest when this clue says it would be; false while the season is not known. */
+function isInSeason(clue: CauseClue, widestOnDayOfYear: number | null): boolean {
+  if (clue.widestIn === null || widestOnDayOfYear === null) return false
+  return isWinter(widestOnDayOfYear) === (clue.widestIn === 'winter')
 }
 
 function fits<T>(allowed: readonly T[], value: T | null): boolean {
@@ -74,8 +80,7 @@ function scoreOf(clue: CauseClue, pattern: CluePattern): number | null {
   const events = clue.events.filter(event => pattern.recentEvents.includes(event)).length
   if (clue.cause === 'vibration') return events > 0 ? events : null
   const named = [clue.places, clue.shapes, clue.wallTypes].filter(list => list.length > 0).length
-  const winter = clue.widestIn === 'winter' && pattern.widestOnDayOfYear !== null
-  return named + events + (winter && isWinter(pattern.widestOnDayOfYear!) ? 2 : 0)
+  return named + events + (isInSeason(clue, pattern.widestOnDayOfYear) ? 2 : 0)
 }
 
 /** Clues whose pattern fits, best fit first; among equals the graver one first. */

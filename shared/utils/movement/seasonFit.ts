@@ -13,7 +13,12 @@ export interface SeasonFit {
   /** Day of the year, 0 to 365.25 from 1 January, when the season part is highest. */
   highestOnDayOfYear: number
   residualSd: number
+  /** Whether the season stands out from the scatter; otherwise its highest day means nothing. */
+  isClear: boolean
 }
+
+/** Ours: a season counts when its swing to each side is more than so many of its standard errors. */
+const CLEAR_ERRORS = 2
 
 export const SEASON_LEAST_READINGS = 8
 
@@ -53,13 +58,16 @@ function asSeasonFit(fit: LeastSquaresFit, startDay: number, sigma: number): Sea
   const unit = Math.sqrt(fit.unitVariances[1]!)
   const residualSd = Math.sqrt(fit.residualSumOfSquares / fit.degreesOfFreedom)
   const margin = Math.max(tQuantile975(fit.degreesOfFreedom) * residualSd, Z_975 * sigma) * unit
+  const swing = Math.hypot(sine, cosine)
+  const swingError = Math.max(residualSd, sigma) * Math.sqrt((fit.unitVariances[2]! + fit.unitVariances[3]!) / 2)
   const highestAtYears = Math.atan2(sine, cosine) / (2 * Math.PI)
   return {
     slopePerYear,
     standardError: Math.max(residualSd, sigma) * unit,
     slopeAtLeast: slopePerYear - margin,
-    peakToPeak: 2 * Math.hypot(sine, cosine),
+    peakToPeak: 2 * swing,
     highestOnDayOfYear: dayOfYear(startDay + highestAtYears * DAYS_PER_YEAR),
     residualSd,
+    isClear: swing > CLEAR_ERRORS * swingError,
   }
 }

@@ -27,6 +27,7 @@ async function furnish() {
 const plan = (more: object = {}) => ({ purpose: ' Does the crack stop? ', plannedOn: today(3), itemIds: [books, tiles], markIds: [mark], ...more })
 const path = () => `/api/attics/${home.atticId}/unload-trials`
 const planned = async () => (await home.as.manager.post<UnloadTrialView>(path(), plan())).body
+const nextReadingOn = async () => (await open.db.selectFrom('mark').select('nextReadingOn').where('id', '=', mark).executeTakeFirstOrThrow()).nextReadingOn
 const unload = (trial: UnloadTrialView, more: object = {}) => home.as.owner.post<UnloadTrialView>(`/api/unload-trials/${trial.id}/unloading`, { unloadedOn: today(), itemIds: [books, tiles], version: trial.version, ...more })
 
 describe('planning an unload trial', () => {
@@ -40,6 +41,8 @@ describe('planning an unload trial', () => {
     })
     expect(await open.db.selectFrom('unloadTrial').selectAll().where('id', '=', body.id).executeTakeFirstOrThrow()).toMatchObject({ atticId: home.atticId, unitId: home.unitId, state: 'planned', version: 1 })
     expect(await open.db.selectFrom('recordEntry').select('action').where('subjectId', '=', body.id).execute()).toEqual([{ action: 'unload trial planned' }])
+    // Read every two weeks while it is watched.
+    expect(await nextReadingOn()).toBe(today(-48 + 14))
     const list = (await home.as.owner.get<{ rows: UnloadTrialRow[] }>(`/api/unload-trials?attic=${home.atticId}`)).body
     expect(list.rows).toMatchObject([{ id: body.id, weightLb: 800, markCount: 1 }])
     expect((await home.as.owner.get<{ rows: UnloadTrialRow[] }>('/api/unload-trials?state=ended')).body.rows).toEqual([])
@@ -131,6 +134,7 @@ describe('ending it', () => {
   it('before the unloading gives it up', async () => {
     await furnish()
     expect((await end(await planned(), { conclusion: '' })).body).toMatchObject({ state: 'given-up', unloadedOn: null })
+    expect(await nextReadingOn()).toBe(today(-48 + 30))
   })
 })
 

@@ -111,6 +111,16 @@ describe('Cause clues', () => {
     expect(cluesFor({ ...plain, place: 'middle', shape: 'straight-line' }).map(clue => clue.cause)).toContain('board-joint')
   })
 
+  it('the season of the widest opening sets truss uplift and a board joint apart', () => {
+    const corner = { ...plain, place: 'wall-ceiling-corner', shape: 'straight-line', wallType: 'interior' } as const
+    const seam = { ...plain, place: 'middle', shape: 'straight-line' } as const
+    expect(cluesFor({ ...corner, widestOnDayOfYear: 20 })[0]!.cause).toBe('truss-uplift')
+    const first = (widestOnDayOfYear: number | null) => cluesFor({ ...seam, widestOnDayOfYear }).map(clue => clue.cause).indexOf('board-joint')
+    expect(first(200)).toBe(0)
+    expect(first(20)).toBeGreaterThan(0)
+    expect(first(null)).toBe(first(20))
+  })
+
   it('pops in a row name the board letting go before the harmless cause', () => {
     expect(cluesFor({ ...plain, kind: 'nail-pops', shape: 'bumps-in-a-row' }).map(clue => clue.cause)).toEqual(['board-letting-go', 'fastener-pop'])
   })

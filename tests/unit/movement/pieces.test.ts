@@ -167,6 +167,14 @@ describe('Detectable rate and next best day', () => {
   })
 })
 
+describe('A fitted season', () => {
+  it('is clear when it stands out from the scatter, and not when it is all scatter', () => {
+    expect(seasonFit(seriesOf(monthly(20, years => 3 + Math.sin(2 * Math.PI * years), 0.1)))!.isClear).toBe(true)
+    expect(seasonFit(seriesOf(monthly(20, years => 3 + Math.sin(2 * Math.PI * years), 2)))!.isClear).toBe(false)
+    expect(seasonFit(seriesOf(monthly(20, () => 3, 0.1)))!.isClear).toBe(false)
+  })
+})
+
 describe('What a mark is allowed', () => {
   it('only interior wall corners under trusses get the uplift allowance', () => {
     const corner = { kind: 'crack', place: 'wall-ceiling-corner', wallType: 'interior', framing: 'trusses' } as const

@@ -25,6 +25,8 @@ describe('Reading plan', () => {
     expect(nextReadingDueOn({ ...mark, activity: 'active' }, readings, '2026-03-02')).toBe('2026-03-08')
     expect(nextReadingDueOn({ ...mark, activity: 'dormant' }, readings, '2026-03-02')).toBe('2026-05-31')
     expect(nextReadingDueOn({ ...mark, activity: 'watch' }, readings, '2026-03-02')).toBe('2026-03-31')
+    expect(nextReading({ ...mark, activity: 'dormant', inTrial: true }, readings, '2026-03-02')).toMatchObject({ dueOn: '2026-03-15', reason: 'trial-fortnightly' })
+    expect(nextReadingDueOn({ ...mark, activity: 'active', inTrial: true }, readings, '2026-03-02')).toBe('2026-03-08')
   })
 
   it('counts days late, never below zero', () => {
