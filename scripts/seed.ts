@@ -11,6 +11,7 @@ import { jobSteps } from './seed/plantJobs'
 import { markSteps } from './seed/plantMarks'
 import { noticeSteps } from './seed/plantNotices'
 import { DEMO_PASSWORD, plantPeople } from './seed/plantPeople'
+import { trialSteps } from './seed/plantTrials'
 import { seeded } from './seed/readings'
 import { ORGANISATION, PEOPLE } from './seed/scenario'
 import { HOUSE_AGE_DAYS, playSteps, type Step } from './seed/steps'
@@ -37,7 +38,7 @@ async function plantDemo(db: Db, photoDir: string) {
       for (const mark of home.demo.marks) steps.push(...markSteps({ db, store, cast, random }, home, mark))
     }
   }
-  await playSteps(today, [...steps, ...jobSteps({ db, cast, homes }), ...noticeSteps({ db, cast, homes })])
+  await playSteps(today, [...steps, ...jobSteps({ db, cast, homes }), ...noticeSteps({ db, cast, homes }), ...trialSteps({ db, cast, homes })])
   endDemoTime()
   await db.updateTable('message').set({ state: 'sent', sentAt: eb => eb.ref('createdAt') })
     .where('createdAt', '<', new Date(Date.now() - FRESH_MAIL_DAYS * 86_400_000).toISOString()).execute()

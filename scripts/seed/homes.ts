@@ -113,7 +113,7 @@ export const PROPERTIES: DemoProperty[] = [
       },
       {
         name: 'rear', tenantName: 'Emrik Dahl', rooms: [room('Living room', 14, 12), bedroom('Bedroom', 12, 10)],
-        attic: { name: 'Rear attic', survey: openAttic([J2X6_NO_STAMP], { access: 'hatch', openingWidthIn: 22, openingLengthIn: 30 }), confirmedDaysAgo: 300, items: [{ find: 'Small carton', quantity: 3, xFt: 0, yFt: 2, daysAgo: 260 }] },
+        attic: { name: 'Rear attic', survey: openAttic([J2X6_NO_STAMP], { access: 'hatch', openingWidthIn: 22, openingLengthIn: 30 }), confirmedDaysAgo: 300, items: [{ find: 'Small carton', quantity: 3, xFt: 0, yFt: 2, daysAgo: 260 }, { find: 'Tool chest', quantity: 1, xFt: 0, yFt: 5, daysAgo: 330, weighedLb: 120 }] },
         marks: [{ room: 0, kind: 'stain', shape: 'patch', place: 'middle', startMm: 240, pattern: 'still', readings: 5, sinceDaysAgo: 240, lastDaysAgo: 40, stain: 'dry' }, crack({ room: 1, pattern: 'still', startMm: 0.4 })],
       },
       { name: 'garden room', tenantName: 'Vacant', rooms: [room('Garden room', 14, 12)], marks: [crack({ room: 0, pattern: 'still', startMm: 0.5, readings: 6, sinceDaysAgo: 190, lastDaysAgo: 100 })] },

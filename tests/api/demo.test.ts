@@ -49,6 +49,11 @@ describe('the invented demo', () => {
     expect(kinds).toHaveLength(4)
   })
 
+  it('shows an unload trial to come and one carried out, and findings judged right and wrong', async () => {
+    expect((await connection.db.selectFrom('unloadTrial').select('state').orderBy('createdAt').execute()).map(row => row.state)).toEqual(['unloaded', 'planned'])
+    expect((await connection.db.selectFrom('findingHindsight').select('outcome').distinct().orderBy('outcome').execute()).map(row => row.outcome)).toEqual(['right', 'wrong'])
+  })
+
   it('uses no address outside .example, and everybody signs in with the printed password', async () => {
     const people = await connection.db.selectFrom('appUser').select(['email', 'passwordHash']).execute()
     expect(people.length).toBeGreaterThanOrEqual(9)
