@@ -34,7 +34,7 @@ async function plantDemo(db: Db, photoDir: string) {
     for (const home of await plantProperty({ db, cast, today }, property)) {
       homes.push({ ...home, property: number })
       const attic = await db.selectFrom('attic').select('id').where('unitId', '=', home.unit.id).executeTakeFirst()
-      if (attic && home.demo.attic) steps.push(...atticSteps({ db, cast, today }, attic.id, home.demo.attic))
+      if (attic && home.demo.attic) steps.push(...atticSteps({ db, cast, today }, attic.id, home.demo.attic, home.demo.tenant))
       for (const mark of home.demo.marks) steps.push(...markSteps({ db, store, cast, random }, home, mark))
     }
   }

@@ -20,6 +20,8 @@ export const PROPERTIES: DemoProperty[] = [
             { find: 'Carton of books', quantity: 12, xFt: 3.3, yFt: 9, daysAgo: 270 },
             { find: 'Tool chest', quantity: 1, xFt: 0, yFt: 2, daysAgo: 300, weighedLb: 140 },
             { find: 'Medium carton', quantity: 4, xFt: 4, yFt: 4, daysAgo: 330 },
+            { find: 'Suitcase', quantity: 2, xFt: 0, yFt: 6, daysAgo: 320, weighedLb: 34, removedDaysAgo: 140 },
+            { find: 'Artificial tree 7.5', quantity: 1, xFt: 0, yFt: 13, daysAgo: 350, weighedLb: 61 },
           ],
         },
         marks: [

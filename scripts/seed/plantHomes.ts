@@ -1,5 +1,5 @@
 import type { Db } from '../../server/db/connect'
-import { addItem, confirmInventory } from '../../server/db/commands/changeItems'
+import { confirmInventory } from '../../server/db/commands/changeItems'
 import { createProperty } from '../../server/db/commands/createProperty'
 import { createTenancy } from '../../server/db/commands/createTenancy'
 import { createUnit } from '../../server/db/commands/createUnit'
@@ -7,18 +7,15 @@ import { surveyAttic } from '../../server/db/commands/surveyAttic'
 import { things, type Thing } from '../../server/db/queries/things'
 import { nowInstant } from '../../server/utils/clock'
 import { newId } from '../../server/utils/newId'
-import { suggestFootprint } from '../../shared/utils/goods/footprint'
-import { searchCatalogue } from '../../shared/utils/goods/itemCatalogue'
 import { PropertyCreate, UnitCreate } from '../../shared/schemas/home'
 import { daysBack } from './demoClock'
 import type { Cast } from './plantPeople'
-import type { DemoAttic, DemoItem, DemoProperty, DemoUnit } from './scenario'
+import { itemSteps, signatureStep } from './plantItems'
+import type { DemoAttic, DemoProperty, DemoUnit } from './scenario'
 import { HOUSE_AGE_DAYS, type Step } from './steps'
 
 interface Plot { db: Db, cast: Cast, today: string }
 export interface PlantedUnit { unit: Thing<'unit'>, roomIds: string[], demo: DemoUnit }
-
-const SQUARE_PILE = (count: number) => Math.max(1, Math.ceil(Math.sqrt(count)))
 
 /** Properties, units, rooms and tenancies as they stood before the year begins. */
 export async function plantProperty({ db, cast, today }: Plot, demo: DemoProperty): Promise<PlantedUnit[]> {
@@ -55,13 +52,13 @@ async function plantTenancy({ db, cast, today }: Plot, unit: Thing<'unit'>, demo
   tenant.unitIds.push(unit.id)
 }
 
+const SIGNED_DAYS_AGO = 75
+
 /** Everything that happens in one attic over the year, as steps in time. */
-export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic): Step[] {
+export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic, tenant: string | undefined): Step[] {
   const attic = async () => (await things.attic(db, atticId))!
   const otis = cast.otis!
-  const steps: Step[] = demo.items.map(item => ({
-    daysAgo: item.daysAgo, run: async on => void await addItem(db, otis, await attic(), itemOf(item, on)),
-  }))
+  const steps: Step[] = demo.items.flatMap(item => itemSteps({ db, cast }, atticId, item))
   if (demo.survey) {
     const survey = demo.survey
     const surveyed = (daysAgo: number): Step => ({ daysAgo, run: async on => void await surveyAttic(db, otis, await attic(), { ...survey, surveyedOn: on }) })
@@ -69,18 +66,6 @@ export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic)
     if (demo.surveyAgainDaysAgo !== undefined) steps.push(surveyed(demo.surveyAgainDaysAgo))
   }
   if (demo.confirmedDaysAgo !== undefined) steps.push({ daysAgo: demo.confirmedDaysAgo, run: async on => void await confirmInventory(db, otis, await attic(), on) })
+  if (tenant && demo.survey) steps.push(signatureStep({ db, cast }, atticId, tenant, SIGNED_DAYS_AGO))
   return steps
-}
-
-function itemOf({ find, quantity, field = 1, xFt, yFt, weighedLb, tenantOwns }: DemoItem, placedOn: string) {
-  const row = searchCatalogue(find)[0]
-  if (!row) throw new Error(`The demo asks for "${find}", which the catalogue does not know`)
-  const foot = suggestFootprint(row)
-  const side = SQUARE_PILE(quantity)
-  const weight = weighedLb ? { lowLb: weighedLb, typicalLb: weighedLb, highLb: weighedLb, weightSource: 'weighed' as const } : { lowLb: row.lowLb, typicalLb: row.typicalLb, highLb: row.highLb, weightSource: 'catalogue' as const }
-  const round = (feet: number) => Math.round(feet * 100) / 100
-  return {
-    name: row.label, catalogueKey: row.key, category: row.category, quantity, ...weight, belongsTo: tenantOwns ? 'tenant' as const : 'landlord' as const,
-    fieldNumber: field, xFt, yFt, lengthFt: round(foot.lengthFt * side), widthFt: round(foot.widthFt * Math.ceil(quantity / side)), heightFt: round(foot.heightFt), notes: '', keptDespite: '', photoIds: [], placedOn,
-  }
 }
