@@ -31,7 +31,7 @@ export function tenantAtticRule(attic: RatedAttic, system: UnitSystem = 'us'): T
 }
 
 function ratedRule({ loadState }: RatedAttic, ratedPsf: number, system: UnitSystem): TenantAtticRule {
-  if (loadState === 'over') return { word: 'Over', sentences: ['It holds more than it is rated for.'], cautions: ['unload-first', 'estimate'] }
+  if (loadState === 'over') return { word: 'Over', sentences: ['It holds more than it is rated for.', 'Put nothing more up.'], cautions: ['unload-first', 'estimate'] }
   const spread = `At most ${formatLoad(ratedPsf, system)}, spread out: light things, side by side, near the walls that carry the ceiling.`
   const books = `A full carton of books alone presses ${formatLoad(BOOK_CARTON_PSF, system)} or more where it stands.`
   return {
