@@ -89,6 +89,8 @@ export interface JoistField {
   /** Clear span between bearing walls, not the length of the board. */
   spanFt: number | null
   joistCount: number | null
+  /** Both ends lie on bearing walls. No or null (not sure): the span is not verified. Left out: nobody was asked. */
+  bothEndsBear?: boolean | null
   /** Length of wood on the wall plate; 1.5 in is taken when unknown. */
   bearingLengthIn: number | null
   /** Deck or blocking holds the top edge from rolling. */
@@ -121,6 +123,10 @@ export interface AtticSurvey {
   ceilingFinish: CeilingFinish
   insulation: Insulation
   deck: Deck
+  /** Where boards lie on part of it. */
+  deckAreaFt2?: number | null
+  /** Things will stand longer than ten years: wood under lasting load carries less. */
+  standsOverTenYears?: boolean | null
   /** Empty: somebody looked and found none. Null: nobody has looked. */
   conditions: Condition[] | null
   joistFields: JoistField[]

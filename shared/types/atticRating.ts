@@ -43,6 +43,7 @@ export type RatingReason
     | { code: 'joists-hold-class', psf: number, allowedPsf: number, fieldName: string }
     | { code: 'joists-hold-less', psf: number, classPsf: number, governedBy: CapacityLimit, fieldName: string }
     | { code: 'joists-not-covered', psf: number, classPsf: number, fieldNames: string[] }
+    | { code: 'bearing-walls-unsure', psf: number, classPsf: number, fieldNames: string[] }
     | { code: 'joists-not-measured', psf: number, classPsf: number, fieldNames: string[] }
 
 export type RatingCaution
@@ -57,7 +58,7 @@ export type RatingCaution
     | { code: 'joists-below-access-load', allowedPsf: number, accessPsf: number, fieldName: string }
     | { code: 'insulation-covers-joists', insulationDepthIn: number, joistDepthIn: number, fieldName: string }
     | { code: 'insulation-heavy-for-board', insulationPsf: number, limitPsf: number, fieldName: string }
-    | { code: 'no-deck' }
+    | { code: 'no-deck', deckAreaFt2: number | null }
     | { code: 'notched-within-limits', fieldName: string }
     | { code: 'bored-within-limits', fieldName: string }
     | JoistAssumption
@@ -65,6 +66,8 @@ export type RatingCaution
 /** Something taken because it was not entered, on the safe side. */
 export type JoistAssumption
   = | { code: 'no-stamp-weakest-grade', species: Species, grade: StampedGrade, fieldName: string }
+    | { code: 'bearing-walls-not-asked', fieldName: string }
+    | { code: 'stands-over-ten-years', cd: number, fieldName: string }
     | { code: 'bearing-length-assumed', bearingLengthIn: number, fieldName: string }
     | { code: 'top-edge-unbraced', cl: number, fieldName: string }
     | { code: 'southern-pine-lower-values', fieldName: string }
@@ -88,6 +91,17 @@ export interface JoistInputs {
   insulationMaterial: InsulationMaterial
 }
 
+/** The numbers between what was entered and the four limits, so that each can be followed. */
+export interface CapacityWorking {
+  lumber: { fbPsi: number, fvPsi: number, fcPerpPsi: number, ePsi: number, eminPsi: number, source: string }
+  section: { areaIn2: number, sectionModulusIn3: number, inertiaIn4: number }
+  fbPrimePsi: number
+  fvPrimePsi: number
+  /** From the section where shear is looked at to the middle of the span. */
+  shearArmIn: number
+  dead: { ceilingPsf: number, insulationPsf: number, deckPsf: number, joistsPsf: number }
+}
+
 /** What the joists of one field can take, as stored live load over the whole field. */
 export interface JoistCapacity {
   kind: 'capacity'
@@ -101,6 +115,7 @@ export interface JoistCapacity {
   inputs: JoistInputs
   factors: { cf: number, cr: number, cd: number, cl: number, cm: number, ct: number }
   eiLbIn2: number
+  working: CapacityWorking
   assumptions: JoistAssumption[]
 }
 

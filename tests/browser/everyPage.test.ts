@@ -35,6 +35,7 @@ const PAGES: Record<string, Sample[]> = {
   'invitation/[token].vue': one('nobody', '/invitation/not-a-token'),
   'jobs/[jobId].vue': [...both('/jobs/:job'), { who: 'bram', path: '/jobs/:job' }],
   'jobs/new.vue': one('maren', '/jobs/new?unit=:unit'),
+  'know-your-roof.vue': one('nobody', '/know-your-roof'),
   'marks/[markId]/index.vue': both('/marks/:mark'),
   'marks/[markId]/reading.vue': both('/marks/:mark/reading'),
   'my-home.vue': one('tomas', '/my-home'),

@@ -9,6 +9,8 @@ const PART_WORDS = { ceiling: 'the ceiling', insulation: 'the insulation', deck:
 function assumptionSentence(caution: JoistAssumption): string {
   switch (caution.code) {
     case 'no-stamp-weakest-grade': return `No grade stamp was entered, so ${caution.species} ${caution.grade} is taken (${caution.fieldName}).`
+    case 'bearing-walls-not-asked': return `The span is taken as measured between bearing walls; nobody has said so yet (${caution.fieldName}).`
+    case 'stands-over-ten-years': return `Things will stand for more than ten years: wood under lasting load is taken at ${figure(caution.cd * 100, 0)} % in bending and shear (${caution.fieldName}).`
     case 'bearing-length-assumed': return `${caution.bearingLengthIn} in of bearing on the wall is taken (${caution.fieldName}).`
     case 'top-edge-unbraced': return `Nothing holds the top edge of these joists, which lowers what they take to ${figure(caution.cl * 100, 0)} % (${caution.fieldName}).`
     case 'southern-pine-lower-values': return `Southern pine is taken with the lower values in force since June 2013 (${caution.fieldName}).`
@@ -34,7 +36,7 @@ export function ratingCautionSentence(caution: RatingCaution): string {
     case 'joists-below-access-load': return `The joists take only ${figure(caution.allowedPsf)} psf, less than the ${figure(caution.accessPsf)} psf for a person up there. Do not step into this attic (${caution.fieldName}).`
     case 'insulation-covers-joists': return 'Insulation covers the joists: you cannot see where to step, and nothing stands safely on it.'
     case 'insulation-heavy-for-board': return `The insulation weighs ${figure(caution.insulationPsf)} psf, more than the ${figure(caution.limitPsf)} psf makers advise for this ceiling board. Nothing may rest on board between joists.`
-    case 'no-deck': return 'There is no full deck. Step on joists only, and rest nothing on the ceiling between them.'
+    case 'no-deck': return (caution.deckAreaFt2 === null ? '' : `Boards lie on ${figure(caution.deckAreaFt2, 0)} ft² only. `) + 'There is no full deck. Step on joists only, and rest nothing on the ceiling between them.'
     case 'notched-within-limits': return `Notches are within the limits of the code (${caution.fieldName}).`
     case 'bored-within-limits': return `Holes are within the limits of the code (${caution.fieldName}).`
     default: return assumptionSentence(caution)

@@ -67,6 +67,7 @@ export function ratingReasonSentence(reason: RatingReason): string {
     case 'joists-hold-class': return `The joists can take ${psf(reason.allowedPsf)}, which is enough for the ${psf(reason.psf)} of this class${where(reason.fieldName)}.`
     case 'joists-hold-less': return `The joists can take only ${psf(reason.psf)} of the ${psf(reason.classPsf)} the code asks; ${LIMIT_WORDS[reason.governedBy]} decides${where(reason.fieldName)}.`
     case 'joists-not-covered': return `These joists lie outside what the tables cover, so ${psf(reason.psf)} is taken until an engineer says more.`
+    case 'bearing-walls-unsure': return `Nobody is sure that both ends of the joists lie on bearing walls, so the span may be longer than it looks: ${psf(reason.psf)} is taken (${reason.fieldNames.join(', ')}).`
     case 'joists-not-measured': return `The joists have not been measured, so ${psf(reason.psf)} is taken instead of ${psf(reason.classPsf)}. Measure the joists.`
     default: return isHold(reason) ? holdSentence(reason) : classSentence(reason)
   }

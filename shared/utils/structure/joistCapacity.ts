@@ -1,7 +1,8 @@
 import type { AtticSurvey, JoistField, Species, StampedGrade } from '../../types/attic'
-import type { CapacityLimit, JoistAssumption, JoistCapacity, JoistCapacityAnswer, JoistMeasure } from '../../types/atticRating'
+import type { CapacityLimit, CapacityWorking, JoistAssumption, JoistCapacity, JoistCapacityAnswer, JoistMeasure } from '../../types/atticRating'
 import { GREATEST_SLENDERNESS, beamStability, effectiveLengthIn, needsTopEdgeHeld } from './beamStability'
 import { LONGEST_SPAN_FT } from './checkLoadPlan'
+import type { DeadLoad } from './deadLoad'
 import { deadLoad } from './deadLoad'
 import type { LumberValues } from './lumber'
 import { NO_STAMP, lumberValues, sectionProperties, sizeClassOf } from './lumber'
@@ -98,13 +99,22 @@ function tiesJoists(survey: CapacitySurvey): boolean {
   return survey.deck === 'full' || !['other', 'unknown'].includes(survey.ceilingFinish)
 }
 
+function workingOf(joist: KnownJoist, lumber: LumberValues, dead: DeadLoad, fbPrimePsi: number, cd: number): CapacityWorking {
+  const { fbPsi, fvPsi, fcPerpPsi, ePsi, eminPsi, source } = lumber
+  const { ceilingPsf, insulationPsf, deckPsf, joistsPsf } = dead
+  return {
+    lumber: { fbPsi, fvPsi, fcPerpPsi, ePsi, eminPsi, source }, section: sectionProperties(joist.breadthIn, joist.depthIn), fbPrimePsi, fvPrimePsi: fvPsi * cd,
+    // NDS 3.4.3.1: uniform load within one depth of the support is left out; never less than a quarter span here, for stubby joists.
+    shearArmIn: Math.max(joist.spanIn / 2 - joist.depthIn, joist.spanIn / 4),
+    dead: { ceilingPsf, insulationPsf, deckPsf, joistsPsf },
+  }
+}
+
 /** Live load by each limit, psf over the whole field, less the dead load where it counts; never below 0. */
-function limitsPsf(joist: KnownJoist, fbPrimePsi: number, fvPrimePsi: number, lumber: LumberValues, bearingLengthIn: number, deadPsf: number, divisor: number): Record<CapacityLimit, number> {
-  const { breadthIn, depthIn, spacingIn, spanIn } = joist
-  const { sectionModulusIn3, inertiaIn4, areaIn2 } = sectionProperties(breadthIn, depthIn)
+function limitsPsf(joist: KnownJoist, working: CapacityWorking, bearingLengthIn: number, deadPsf: number, divisor: number): Record<CapacityLimit, number> {
+  const { breadthIn, spacingIn, spanIn } = joist
+  const { lumber, section: { sectionModulusIn3, inertiaIn4, areaIn2 }, fbPrimePsi, fvPrimePsi, shearArmIn } = working
   const psfPerLbIn = 144 / spacingIn
-  // NDS 3.4.3.1: uniform load within one depth of the support is left out; never less than a quarter span here, for stubby joists.
-  const shearArmIn = Math.max(spanIn / 2 - depthIn, spanIn / 4)
   const live = (totalPsf: number): number => Math.max(0, totalPsf - deadPsf)
   return {
     bending: live(8 * fbPrimePsi * sectionModulusIn3 / spanIn ** 2 * psfPerLbIn),
@@ -135,6 +145,8 @@ export function joistCapacity(field: JoistField, survey: CapacitySurvey, options
   const assumptions = lumberAssumptions(joist, lumber, wood, older)
   const finish = deflectionDivisor(survey.ceilingFinish)
   if (finish.assumed) assumptions.push({ code: 'finish-taken-as-plaster', fieldName: field.name })
+  if (field.bothEndsBear === undefined) assumptions.push({ code: 'bearing-walls-not-asked', fieldName: field.name })
+  if (options.overTenYears) assumptions.push({ code: 'stands-over-ten-years', cd: CD_PERMANENT, fieldName: field.name })
   const bearingLengthIn = known(field.bearingLengthIn) ? field.bearingLengthIn : BEARING_LENGTH_IN
   if (!known(field.bearingLengthIn)) assumptions.push({ code: 'bearing-length-assumed', bearingLengthIn, fieldName: field.name })
   const cr = repetitiveFactor(field.joistCount, spacingIn, tiesJoists(survey))
@@ -146,7 +158,8 @@ export function joistCapacity(field: JoistField, survey: CapacitySurvey, options
   const { cl, slenderness, computed } = stability(joist, survey.deck, lumber.eminPsi, fbStarPsi)
   if (slenderness > GREATEST_SLENDERNESS) return { kind: 'not-covered', fieldName: field.name, measure: 'slenderness', value: slenderness, limit: GREATEST_SLENDERNESS }
   if (computed) assumptions.push({ code: 'top-edge-unbraced', cl, fieldName: field.name })
-  const limits = limitsPsf(joist, fbStarPsi * cl, lumber.fvPsi * cd, lumber, bearingLengthIn, dead.psf, finish.divisor)
+  const working = workingOf(joist, lumber, dead, fbStarPsi * cl, cd)
+  const limits = limitsPsf(joist, working, bearingLengthIn, dead.psf, finish.divisor)
   const governedBy = leastLimit(limits)
   return {
     kind: 'capacity', fieldName: field.name, allowedPsf: limits[governedBy], governedBy,
@@ -156,7 +169,8 @@ export function joistCapacity(field: JoistField, survey: CapacitySurvey, options
       deflectionDivisor: finish.divisor, deadPsf: dead.psf, insulationMaterial: survey.insulation.material,
     },
     factors: { cf: lumber.cf, cr, cd, cl, cm: CM_DRY, ct: CT_ORDINARY },
-    eiLbIn2: lumber.ePsi * sectionProperties(breadthIn, depthIn).inertiaIn4,
+    eiLbIn2: lumber.ePsi * working.section.inertiaIn4,
+    working,
     assumptions: [...assumptions, ...dead.assumptions],
   }
 }

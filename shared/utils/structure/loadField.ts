@@ -6,7 +6,7 @@ import { NO_STAMP, lumberValues, sectionProperties, sizeClassOf } from './lumber
 import type { LumberValues } from './lumber'
 import { DRESSED_SIZES } from './lumberValues'
 import { DEAD_PSF_WITH_STORAGE } from './deadLoadValues'
-import { BEARING_LENGTH_IN } from './ndsFactors'
+import { BEARING_LENGTH_IN, CD_PERMANENT, CD_TEN_YEARS } from './ndsFactors'
 
 type Section = { breadthIn: number, depthIn: number }
 
@@ -16,11 +16,11 @@ const WEAKEST_SECTION: Section = DRESSED_SIZES['2x4']
 const known = (value: number | null): value is number => value !== null && Number.isFinite(value) && value > 0
 
 /** Shear by NDS 3.4.2 for a rectangle, bearing by NDS 3.10.2 at the end of a member (no bearing area factor). */
-function memberOf(section: Section, lumber: LumberValues, bearingLengthIn: number, deadPsf: number): JoistMember {
+function memberOf(section: Section, lumber: LumberValues, bearingLengthIn: number, deadPsf: number, cd = CD_TEN_YEARS): JoistMember {
   const { areaIn2 } = sectionProperties(section.breadthIn, section.depthIn)
   return {
     depthIn: section.depthIn,
-    shearLb: 2 / 3 * lumber.fvPsi * areaIn2,
+    shearLb: 2 / 3 * lumber.fvPsi * cd * areaIn2,
     bearingLb: lumber.fcPerpPsi * section.breadthIn * bearingLengthIn,
     deadPsf,
   }
@@ -51,7 +51,7 @@ function strongbacksOf(field: JoistField, spanFt: number, letterAccepts: boolean
  * A surveyed field made ready for a load plan at a rating. Span, spacing and count must be known; an unknown size is taken
  * as the weakest joist. `letterAccepts`: an engineer's letter lets strongbacks share (strongbackOpinion). Trusses and unknown framing get none, whatever is known of them.
  */
-export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish' | 'insulation' | 'deck'>, field: JoistField, ratedPsf: number, letterAccepts = false): LoadFieldAnswer {
+export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish' | 'insulation' | 'deck' | 'standsOverTenYears'>, field: JoistField, ratedPsf: number, letterAccepts = false): LoadFieldAnswer {
   if (survey.framing !== 'rafters-and-joists') return { kind: 'not-joists', fieldName: field.name, framing: survey.framing }
   const { spanFt, spacingIn } = field
   const joistCount = field.joistCount !== null && Number.isInteger(field.joistCount) && field.joistCount >= 2 ? field.joistCount : null
@@ -69,6 +69,6 @@ export function loadFieldOf(survey: Pick<AtticSurvey, 'framing' | 'ceilingFinish
   return {
     kind: 'field', fieldName: field.name, strongbacksCount, memberAssumed: measured === null,
     field: { spanFt, spacingIn, joistCount, ratedPsf, joistEiLbIn2: lumber.ePsi * sectionProperties(section.breadthIn, section.depthIn).inertiaIn4, strongbacks },
-    member: memberOf(section, lumber, known(field.bearingLengthIn) ? field.bearingLengthIn : BEARING_LENGTH_IN, dead.psf),
+    member: memberOf(section, lumber, known(field.bearingLengthIn) ? field.bearingLengthIn : BEARING_LENGTH_IN, dead.psf, survey.standsOverTenYears ? CD_PERMANENT : CD_TEN_YEARS),
   }
 }

@@ -31,7 +31,7 @@ function insulationCautions(survey: AtticSurvey): RatingCaution[] {
 function surveyCautions(survey: AtticSurvey, cutsAllowed: boolean): RatingCaution[] {
   const cautions: RatingCaution[] = [{ code: 'estimate-only' }]
   if (survey.conditions === null) cautions.push({ code: 'condition-not-inspected' })
-  if (survey.deck !== 'full') cautions.push({ code: 'no-deck' })
+  if (survey.deck !== 'full') cautions.push({ code: 'no-deck', deckAreaFt2: survey.deck === 'partial' ? survey.deckAreaFt2 ?? null : null })
   if (!cutsAllowed) return cautions
   for (const field of survey.joistFields) {
     if (field.notches.length > 0) cautions.push({ code: 'notched-within-limits', fieldName: field.name })
@@ -50,7 +50,8 @@ function decideByJoists(survey: AtticSurvey, code: CodeClass, answers: JoistCapa
   const reasons: RatingReason[] = []
   const joistsLess = weakest !== null && weakest.allowedPsf < classPsf
   if (weakest && joistsLess) reasons.push({ code: 'joists-hold-less', psf: weakest.allowedPsf, classPsf, governedBy: weakest.governedBy, fieldName: weakest.fieldName })
-  const unverified = answers.length === 0 || !answers.every(isCapacity)
+  const unsure = survey.joistFields.filter(field => field.bothEndsBear === null || field.bothEndsBear === false).map(field => field.name)
+  const unverified = answers.length === 0 || !answers.every(isCapacity) || unsure.length > 0
   if (!unverified) {
     if (weakest && !joistsLess) reasons.push({ code: 'joists-hold-class', psf: classPsf, allowedPsf: weakest.allowedPsf, fieldName: weakest.fieldName })
     return { ratedPsf: Math.min(classPsf, weakest?.allowedPsf ?? 0), basis: joistsLess ? 'joists' : 'class', reasons, cautions }
@@ -59,6 +60,7 @@ function decideByJoists(survey: AtticSurvey, code: CodeClass, answers: JoistCapa
   const missing = answers.filter(answer => answer.kind === 'measures-missing').map(answer => answer.fieldName)
   const outside = answers.filter(answer => answer.kind === 'not-covered').map(answer => answer.fieldName)
   if (missing.length > 0 || survey.joistFields.length === 0) reasons.push({ code: 'joists-not-measured', psf, classPsf, fieldNames: missing })
+  if (unsure.length > 0) reasons.push({ code: 'bearing-walls-unsure', psf, classPsf, fieldNames: unsure })
   if (outside.length > 0) reasons.push({ code: 'joists-not-covered', psf, classPsf, fieldNames: outside })
   return { ratedPsf: psf, basis: 'unverified', reasons, cautions }
 }
@@ -66,7 +68,7 @@ function decideByJoists(survey: AtticSurvey, code: CodeClass, answers: JoistCapa
 function rateJoisted(survey: AtticSurvey, basis: CodeBasis): AtticRating {
   const code = codeClass(survey, basis)
   const withStorage = code.atticClass !== 'no-storage'
-  const joistCheck = survey.joistFields.map(field => joistCapacity(field, survey, { withStorage }))
+  const joistCheck = survey.joistFields.map(field => joistCapacity(field, survey, { withStorage, overTenYears: survey.standsOverTenYears === true }))
   const common = { hold: false, classPsf: code.classPsf, atticClass: code.atticClass, joistCheck }
   const general: RatingCaution[] = [{ code: 'local-amendments', basisName: basis.name }, ...insulationCautions(survey)]
   if (withStorage) {
