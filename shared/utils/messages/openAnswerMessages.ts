@@ -19,8 +19,8 @@ const WORDS: Record<OpenAnswerCode, string> = {
 
 /** What an open answer does now, and what it could be worth at best. */
 export function openAnswerSentence(answer: OpenAnswer, nowPsf: number, system: UnitSystem): string {
-  const where = answer.fieldName ? ` (${answer.fieldName})` : ''
-  if (answer.atBestPsf === null) return `${WORDS[answer.code]}${where}`
-  const worth = answer.atBestPsf > nowPsf + 0.05 ? `At best the rating becomes ${formatLoad(answer.atBestPsf, system)}.` : 'Alone it changes nothing in the rating.'
-  return `${WORDS[answer.code]}${where} ${worth}`
+  const words = answer.fieldName ? `${answer.fieldName}: ${WORDS[answer.code].charAt(0).toLowerCase()}${WORDS[answer.code].slice(1)}` : WORDS[answer.code]
+  if (answer.atBestPsf === null) return words
+  const worth = answer.atBestPsf > nowPsf + 0.05 ? `At best the rating becomes ${formatLoad(answer.atBestPsf, system)}.` : 'Alone it would not raise the rating.'
+  return `${words} ${worth}`
 }

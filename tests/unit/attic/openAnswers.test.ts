@@ -36,7 +36,7 @@ describe('what a survey leaves open', () => {
     const open = openAnswers(survey({ clearHeightIn: null, openingWidthIn: null, joistFields: [sound] }))
     expect(open.answers.map(answer => answer.atBestPsf)).toEqual([0, 0])
     expect(open.allAtBestPsf).toBe(20)
-    expect(openAnswerSentence(open.answers[0]!, 0, 'us')).toMatch(/Alone it changes nothing/)
+    expect(openAnswerSentence(open.answers[0]!, 0, 'us')).toMatch(/Alone it would not raise the rating/)
   })
 
   it('leads to the box where it is answered, by its group of joists', () => {
