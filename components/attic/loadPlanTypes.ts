@@ -13,6 +13,8 @@ export interface LoadPlanItem {
   widthFt: number
   weightLb: number
   state: LoadTone
+  /** Presses more than the rating in the middle half, whatever the joists say. */
+  dense?: boolean
 }
 
 /** `utilisation` is null while nothing is rated: there is nothing to hold the load against. */

@@ -1,13 +1,13 @@
 import { onMounted, onUnmounted, ref, watch } from 'vue'
 import type { LoadField, PlacedItem } from '~/shared/types/loadPlan'
 import type { JudgeOptions } from '~/shared/utils/structure/judgeLoadPlan'
-import { suggestingMoves, type SuggestedMoves } from '~/shared/utils/structure/suggestMoves'
+import { suggestingMoves, type OtherField, type SuggestedMoves } from '~/shared/utils/structure/suggestMoves'
 
 /** The plan has to rest so long before moves are looked for; and so long at a stretch the screen may wait. */
 const REST_MS = 180
 const STRETCH_MS = 10
 
-export interface PlanToMend { field: LoadField, items: readonly PlacedItem[], options: JudgeOptions }
+export interface PlanToMend { field: LoadField, items: readonly PlacedItem[], options: JudgeOptions, others: readonly OtherField[] }
 
 /** Moves for a plan, looked for in the pauses between drags and in short stretches, so that nothing stutters. */
 export function useSuggestedMoves(plan: () => PlanToMend | null) {
@@ -20,7 +20,7 @@ export function useSuggestedMoves(plan: () => PlanToMend | null) {
     found.value = null
     const now = plan()
     looking.value = now !== null
-    if (now) rest = setTimeout(() => walk(suggestingMoves(now.field, now.items, now.options)), REST_MS)
+    if (now) rest = setTimeout(() => walk(suggestingMoves(now.field, now.items, now.options, now.others)), REST_MS)
   }
   function walk(search: ReturnType<typeof suggestingMoves>) {
     const until = performance.now() + STRETCH_MS

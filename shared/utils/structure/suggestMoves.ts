@@ -19,6 +19,8 @@ export interface SuggestedMove {
   widthFt: number
   /** Length and width changed places. */
   turned: boolean
+  /** To another field of the same attic; null within its own. */
+  toField: number | null
   fromWallFt: number
   /** Of the item, where it then stands. */
   itemUtilisation: number
@@ -37,6 +39,9 @@ export type SuggestedMoves
     | { kind: 'nothing-allowed' }
     | { kind: 'refused', problems: LoadPlanProblem[] }
 
+/** Another field of the same attic that may take something over. */
+export interface OtherField { number: number, field: LoadField, items: readonly PlacedItem[], options: JudgeOptions }
+
 type Judged = JudgedPlan & { kind: 'judged' }
 
 /** What is wrong, the worst first: things too dense for the middle, then the most used joist. */
@@ -52,10 +57,16 @@ function suspects(field: LoadField, plan: Judged, items: readonly PlacedItem[]):
     .slice(0, MOST_TRIED)
 }
 
-interface Step { move: SuggestedMove, plan: Judged, items: PlacedItem[] }
+const heaviest = (items: readonly PlacedItem[]): PlacedItem[] => [...items].sort((a, b) => b.weightLb - a.weightLb).slice(0, MOST_TRIED)
 
-function tryOut(field: LoadField, items: readonly PlacedItem[], before: PlacedItem, turned: boolean, options: JudgeOptions): Step | null {
-  const item = turned ? { ...before, lengthFt: before.widthFt, widthFt: before.lengthFt } : before
+interface Step { move: SuggestedMove, plan: Judged, items: PlacedItem[], others: readonly OtherField[] }
+
+interface Standing { field: LoadField, items: readonly PlacedItem[], options: JudgeOptions, others: readonly OtherField[] }
+
+const turnedOver = (item: PlacedItem, turned: boolean): PlacedItem => turned ? { ...item, lengthFt: item.widthFt, widthFt: item.lengthFt } : item
+
+function tryOut({ field, items, options, others }: Standing, before: PlacedItem, turned: boolean): Step | null {
+  const item = turnedOver(before, turned)
   const { id, lengthFt, widthFt } = item
   const places = whereMayItGo(field, items.filter(other => other.id !== id), item, options)
   const [spot] = places.kind === 'places' ? places.best : []
@@ -65,50 +76,90 @@ function tryOut(field: LoadField, items: readonly PlacedItem[], before: PlacedIt
   const plan = judgeLoadPlan(field, moved, options)
   if (plan.kind !== 'judged') return null
   const itemUtilisation = plan.items.find(one => one.id === id)?.utilisation ?? 0
-  return { plan, items: moved, move: { id, xFt, yFt, lengthFt, widthFt, turned, fromWallFt, itemUtilisation, itemState, utilisation: plan.utilisation, state: plan.state } }
+  return { plan, items: moved, others, move: { id, xFt, yFt, lengthFt, widthFt, turned, toField: null, fromWallFt, itemUtilisation, itemState, utilisation: plan.utilisation, state: plan.state } }
+}
+
+/** Carried over to another field that then still is not over. */
+function tryElsewhere({ field, items, options, others }: Standing, before: PlacedItem, turned: boolean, to: OtherField): Step | null {
+  const item = turnedOver(before, turned)
+  const places = whereMayItGo(to.field, [...to.items], item, to.options)
+  const [spot] = places.kind === 'places' ? places.best : []
+  if (!spot) return null
+  const left = items.filter(other => other.id !== item.id)
+  const itemsThere = [...to.items, { ...item, xFt: spot.xFt, yFt: spot.yFt }]
+  const [plan, there] = [judgeLoadPlan(field, left, options), judgeLoadPlan(to.field, itemsThere, to.options)]
+  if (plan.kind !== 'judged' || there.kind !== 'judged' || there.state === 'over') return null
+  const { id, lengthFt, widthFt } = item
+  const { xFt, yFt, fromWallFt, state: itemState, utilisation: itemUtilisation } = spot
+  const worse = there.utilisation > plan.utilisation ? there : plan
+  return {
+    plan, items: left, others: others.map(other => other.number === to.number ? { ...other, items: itemsThere } : other),
+    move: { id, xFt, yFt, lengthFt, widthFt, turned, toField: to.number, fromWallFt, itemUtilisation, itemState, utilisation: worse.utilisation, state: worse.state },
+  }
 }
 
 /** As it lies, and turned where that makes a difference. */
 const ways = (item: PlacedItem): boolean[] => item.lengthFt === item.widthFt ? [false] : [false, true]
 
-function* bestStep(field: LoadField, plan: Judged, items: readonly PlacedItem[], options: JudgeOptions): Generator<void, Step | null> {
-  const [denseNow, utilisationNow] = troubleOf(plan)
-  let best: Step | null = null
-  for (const suspect of suspects(field, plan, items)) {
+/** What moves a step would be chosen from: first within the field, then over to others. */
+function* steps(standing: Standing, suspected: readonly PlacedItem[], elsewhere: boolean): Generator<Step | null, void> {
+  for (const suspect of suspected) {
     for (const turned of ways(suspect)) {
-      const step = tryOut(field, items, suspect, turned, options)
-      yield
-      if (!step) continue
-      const [dense, utilisation] = troubleOf(step.plan)
-      const helps = dense < denseNow ? utilisation <= Math.max(1, utilisationNow) : dense === denseNow && utilisation <= utilisationNow - LEAST_GAIN
-      const [bestDense, bestUtilisation] = best ? troubleOf(best.plan) : [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY]
-      if (helps && (dense < bestDense || (dense === bestDense && utilisation < bestUtilisation))) best = step
+      if (!elsewhere) yield tryOut(standing, suspect, turned)
+      else for (const other of standing.others) yield tryElsewhere(standing, suspect, turned, other)
     }
   }
-  return best
 }
 
-/** The same as `suggestMoves`, pausing after each place that was looked for: a screen goes on with its own work between. */
-export function* suggestingMoves(field: LoadField, items: readonly PlacedItem[], options: JudgeOptions = {}): Generator<void, SuggestedMoves> {
+function helps(now: Judged, then: Judged): boolean {
+  const [[denseNow, utilisationNow], [dense, utilisation]] = [troubleOf(now), troubleOf(then)]
+  return dense < denseNow ? utilisation <= Math.max(1, utilisationNow) : dense === denseNow && utilisation <= utilisationNow - LEAST_GAIN
+}
+
+function isBetter(one: Judged, other: Judged | undefined): boolean {
+  const [[dense, utilisation], [otherDense, otherUtilisation]] = [troubleOf(one), other ? troubleOf(other) : [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY]]
+  return dense < otherDense || (dense === otherDense && utilisation < otherUtilisation)
+}
+
+function* bestStep(plan: Judged, standing: Standing): Generator<void, Step | null> {
+  // With more than the rated total up there, no move within the field can mend it.
+  const isTooMuch = plan.totalRatio > 1
+  const suspected = isTooMuch ? heaviest(standing.items) : suspects(standing.field, plan, standing.items)
+  for (const elsewhere of isTooMuch ? [true] : [false, true]) {
+    let best: Step | null = null
+    for (const step of steps(standing, suspected, elsewhere)) {
+      yield
+      if (step && helps(plan, step.plan) && isBetter(step.plan, best?.plan)) best = step
+    }
+    if (best) return best
+  }
+  return null
+}
+
+/**
+ * The same as `suggestMoves`, pausing after each place that was looked for: a screen goes on with its own work between.
+ */
+export function* suggestingMoves(field: LoadField, items: readonly PlacedItem[], options: JudgeOptions = {}, others: readonly OtherField[] = []): Generator<void, SuggestedMoves> {
   const first = judgeLoadPlan(field, [...items], options)
   if (first.kind !== 'judged') return first.kind === 'refused' ? first : { kind: 'nothing-allowed' }
   if (isMended(first)) return { kind: 'nothing-to-mend' }
-  if (first.totalRatio > 1) return { kind: 'too-much', overLb: first.totalLb - first.ratedTotalLb }
   const moves: SuggestedMove[] = []
-  let [plan, standing]: [Judged, readonly PlacedItem[]] = [first, items]
+  let plan: Judged = first
+  let standing: Standing = { field, items, options, others }
   while (moves.length < MOST_MOVES && !isMended(plan)) {
-    const step: Step | null = yield* bestStep(field, plan, standing, options)
+    const step: Step | null = yield* bestStep(plan, standing)
     if (!step) break
     moves.push(step.move)
     plan = step.plan
-    standing = step.items
+    standing = { ...standing, items: step.items, others: step.others }
   }
-  return moves.length > 0 ? { kind: 'moves', moves } : { kind: 'no-better-place' }
+  if (moves.length > 0) return { kind: 'moves', moves }
+  return first.totalRatio > 1 ? { kind: 'too-much', overLb: first.totalLb - first.ratedTotalLb } : { kind: 'no-better-place' }
 }
 
 /** Which things to carry where, and whether turned, one after the other, until the field is no longer over; each move is the best single one. */
-export function suggestMoves(field: LoadField, items: readonly PlacedItem[], options: JudgeOptions = {}): SuggestedMoves {
-  const search = suggestingMoves(field, items, options)
+export function suggestMoves(field: LoadField, items: readonly PlacedItem[], options: JudgeOptions = {}, others: readonly OtherField[] = []): SuggestedMoves {
+  const search = suggestingMoves(field, items, options, others)
   for (;;) {
     const step = search.next()
     if (step.done) return step.value

@@ -71,7 +71,7 @@ describe('what to move', () => {
   afterEach(() => { vi.useRealTimers() })
   const advice = async (items: typeof books[]) => {
     const { answer, placed } = standing(items)
-    const shown = mountAttic(LoadPlanAdvice, { plan: { field: answer.field, items: placed, options: { member: answer.member } }, items })
+    const shown = mountAttic(LoadPlanAdvice, { plan: { field: answer.field, items: placed, options: { member: answer.member }, others: [] }, items, fields: [{ number: 1, name: 'North', spanFt: 12 }, { number: 2, name: 'South', spanFt: 16 }] })
     await vi.runAllTimersAsync()
     await flushPromises()
     return shown
@@ -91,6 +91,17 @@ describe('what to move', () => {
     expect((shown.emitted('change')?.[0]?.[0] as { id: string }[]).map(move => move.id).sort()).toEqual(['books', 'paper'])
   })
 
+  it('is carried over to other joists where its own have no place for it', async () => {
+    const { answer, placed } = standing([item({ id: 'books', name: 'Books', xFt: 0, lengthFt: 12, widthFt: 4, quantity: 40 })])
+    const others = [{ number: 2, field: { ...answer.field, spanFt: 16, joistCount: 20, ratedPsf: 60 }, items: [], options: { member: answer.member } }]
+    const shown = mountAttic(LoadPlanAdvice, { plan: { field: answer.field, items: placed, options: { member: answer.member }, others }, items: [{ ...books, id: 'books' }], fields: [{ number: 2, name: 'South', spanFt: 16 }] })
+    await vi.runAllTimersAsync()
+    await flushPromises()
+    expect(plain(textOf(shown))).toMatch(/1 · Books over to South, /)
+    await shown.get('button').trigger('click')
+    expect(shown.emitted('change')).toMatchObject([[[{ id: 'books', fieldNumber: 2 }]]])
+  })
+
   it('says how much has to go where no move can help', async () => {
     const shown = await advice([item({ quantity: 80, xFt: 0, yFt: 0, lengthFt: 12, widthFt: 16 })])
     expect(plain(textOf(shown))).toContain('carry 160 lb more than their rated total')
@@ -98,7 +109,7 @@ describe('what to move', () => {
   })
 
   it('is silent where nothing is wrong', () => {
-    expect(mountAttic(LoadPlanAdvice, { plan: null, items: [] }).text()).toBe('')
+    expect(mountAttic(LoadPlanAdvice, { plan: null, items: [], fields: [] }).text()).toBe('')
   })
 })
 

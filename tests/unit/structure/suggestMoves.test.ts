@@ -46,6 +46,23 @@ describe('what to move where', () => {
     expect(move).toMatchObject({ turned: true, lengthFt: 3, widthFt: 5, fromWallFt: 0, itemState: 'within' })
   })
 
+  it('what no place of its own field takes is carried over to another, and only then', () => {
+    const long = { ...books, xFt: 0, lengthFt: 12, widthFt: 4, weightLb: 2000 }
+    const other = { number: 2, field: { ...field, spanFt: 16, joistCount: 20, ratedPsf: 60 }, items: [], options }
+    const answer = suggestMoves(field, [long], options, [other])
+    expect(answer).toMatchObject({ kind: 'moves', moves: [{ id: 'books', toField: 2 }] })
+    expect(suggestMoves(field, [long], options, [{ ...other, field: { ...field, spanFt: 5 } }])).toEqual({ kind: 'no-better-place' })
+    expect(suggestMoves(field, [books], options, [other])).toMatchObject({ moves: [{ toField: null }] })
+  })
+
+  it('more than the rated total is carried over to another field, which it may not bring over', () => {
+    const piles = Array.from({ length: 8 }, (_, n): PlacedItem => ({ id: `pile ${n}`, xFt: n % 2 === 0 ? 0 : 9, yFt: Math.floor(n / 2) * 4, lengthFt: 3, widthFt: 4, weightLb: 500 }))
+    const other = { number: 2, field, items: [], options }
+    const answer = suggestMoves(field, piles, options, [other])
+    expect(answer).toMatchObject({ kind: 'moves', moves: [{ toField: 2, state: expect.stringMatching(/within|near/) }] })
+    expect(suggestMoves(field, piles, options, [{ ...other, items: piles }])).toMatchObject({ kind: 'too-much' })
+  })
+
   it('never makes it worse, and every suggestion can be carried out', () => {
     const item = fc.record({ x: fc.nat(18), y: fc.nat(24), lengthFt: fc.constantFrom(1, 2, 3), widthFt: fc.constantFrom(1, 2, 3), weightLb: fc.integer({ min: 10, max: 500 }) })
       .map(({ x, y, ...rest }): PlacedItem => ({ id: '', ...rest, xFt: x / 2, yFt: y / 2 }))
