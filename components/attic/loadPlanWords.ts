@@ -16,11 +16,11 @@ export function wallWords(field: LoadPlanField, walls: LoadPlanWalls, item: Load
   return distanceFt < 0.05 ? `against the ${walls[wall]}` : `${length(distanceFt)} from the ${walls[wall]}`
 }
 
-/** 'near', or 'too dense for the middle', which goes before what the joists say. */
-export const stateWordOf = (item: Pick<LoadPlanItem, 'state' | 'dense'>): string => item.dense ? 'too dense for the middle' : loadWords[item.state]
+/** 'near', or 'too dense here', which goes before what the joists say. */
+export const stateWordOf = (item: Pick<LoadPlanItem, 'state' | 'dense'>): string => item.dense ? 'too dense here' : loadWords[item.state]
 export const toneOf = (item: Pick<LoadPlanItem, 'state' | 'dense'>): LoadPlanItem['state'] => item.dense ? 'over' : item.state
 
 /** Everything the drawing shows of one item, as its name for those who do not see it. */
 export function itemWords(field: LoadPlanField, walls: LoadPlanWalls, item: LoadPlanItem, format: Formatters): string {
-  return `${item.name}, ${format.weight(item.weightLb)}, ${stateWordOf(item)}: ${wallWords(field, walls, item, format)}, on ${joistWords(field, item)}`
+  return `${item.name}, ${format.weight(item.weightLb)}, ${loadWords[item.state]}${item.dense ? ', too dense for the middle' : ''}: ${wallWords(field, walls, item, format)}, on ${joistWords(field, item)}`
 }

@@ -75,7 +75,7 @@ describe.each(screens)('the load plan on a %s', (name, screen) => {
     expect(await scrolledPx(page)).toBe(before)
     await page.getByText(/Too dense there/).waitFor()
     await page.getByRole('list', { name: 'Joists' }).getByText(/over/).first().waitFor()
-    expect(await box('Books').getAttribute('aria-label')).toMatch(/over: .* from the (left|right) wall/)
+    expect(await box('Books').getAttribute('aria-label')).toMatch(/over, too dense for the middle: .* from the (left|right) wall/)
     await page.getByText(/As saved: within.*On trial: over/).waitFor()
     expect((await attic.read()).contents.state).toBe('within')
     expect(await axeFindings(page)).toEqual([])

@@ -95,7 +95,7 @@ describe('the load plan', () => {
   })
 
   it('says in words all that the drawing shows of an item', () => {
-    expect(itemWords(field, walls, { ...paper, state: 'near', dense: true }, format)).toBe('Paper, 165 lb, too dense for the middle: 5 ft from the north wall, on joists 8 to 10')
+    expect(itemWords(field, walls, { ...paper, state: 'near', dense: true }, format)).toBe('Paper, 165 lb, near, too dense for the middle: 5 ft from the north wall, on joists 8 to 10')
     expect(itemWords(field, walls, paper, format)).toBe('Paper, 165 lb, over: 5 ft from the north wall, on joists 8 to 10')
   })
 })
