@@ -8,10 +8,11 @@ import { things, type Thing } from '../../server/db/queries/things'
 import { nowInstant } from '../../server/utils/clock'
 import { newId } from '../../server/utils/newId'
 import { PropertyCreate, UnitCreate } from '../../shared/schemas/home'
+import type { AtticSurvey } from '../../shared/types/attic'
 import { daysBack } from './demoClock'
 import type { Cast } from './plantPeople'
 import { itemSteps, signatureStep } from './plantItems'
-import type { DemoAttic, DemoProperty, DemoUnit } from './scenario'
+import { firstLook, type DemoAttic, type DemoProperty, type DemoUnit } from './scenario'
 import { HOUSE_AGE_DAYS, type Step } from './steps'
 
 interface Plot { db: Db, cast: Cast, today: string }
@@ -61,9 +62,9 @@ export function atticSteps({ db, cast }: Plot, atticId: string, demo: DemoAttic,
   const steps: Step[] = demo.items.flatMap(item => itemSteps({ db, cast }, atticId, item))
   if (demo.survey) {
     const survey = demo.survey
-    const surveyed = (daysAgo: number): Step => ({ daysAgo, run: async on => void await surveyAttic(db, otis, await attic(), { ...survey, surveyedOn: on }) })
-    steps.push(surveyed(HOUSE_AGE_DAYS - 5))
-    if (demo.surveyAgainDaysAgo !== undefined) steps.push(surveyed(demo.surveyAgainDaysAgo))
+    const surveyed = (daysAgo: number, told: AtticSurvey): Step => ({ daysAgo, run: async on => void await surveyAttic(db, otis, await attic(), { ...told, surveyedOn: on }) })
+    steps.push(surveyed(HOUSE_AGE_DAYS - 5, demo.surveyAgainDaysAgo === undefined ? survey : firstLook(survey)))
+    if (demo.surveyAgainDaysAgo !== undefined) steps.push(surveyed(demo.surveyAgainDaysAgo, survey))
   }
   if (demo.confirmedDaysAgo !== undefined) steps.push({ daysAgo: demo.confirmedDaysAgo, run: async on => void await confirmInventory(db, otis, await attic(), on) })
   if (tenant && demo.survey) steps.push(signatureStep({ db, cast }, atticId, tenant, SIGNED_DAYS_AGO))

@@ -48,12 +48,18 @@ export interface DemoAttic { name: string, survey: AtticSurvey | null, items: De
 export interface DemoUnit { name: string, rooms: { name: string, isBedroom?: true, lengthFt: number, widthFt: number }[], attic?: DemoAttic, marks: DemoMark[], tenant?: string, tenantName?: string, engineer?: string, finish?: CeilingFinish }
 export interface DemoProperty { name: string, addressLines: string[], yearBuilt: number, units: DemoUnit[] }
 
-const joists = (name: string, measures: Partial<JoistField>): JoistField => ({ ...emptyJoistField(name), ...measures })
+const joists = (name: string, measures: Partial<JoistField>): JoistField => ({ ...emptyJoistField(name), bothEndsBear: true, ...measures })
+
+/** What was told of it on the first day, before anybody had looked closely. */
+export const firstLook = (survey: AtticSurvey): AtticSurvey => ({
+  ...survey, ...survey.deckAreaFt2 !== undefined && { deckAreaFt2: null }, conditions: null,
+  joistFields: survey.joistFields.map(field => ({ ...field, bothEndsBear: undefined })),
+})
 
 /** Rafters and joists with a way in that counts as storage. */
 export const openAttic = (fields: JoistField[], answers: Partial<AtticSurvey> = {}): AtticSurvey => ({
   ...emptySurvey(''), framing: 'rafters-and-joists', access: 'pull-down-ladder', openingWidthIn: 24, openingLengthIn: 54, clearHeightIn: 60, habitable: false,
-  ceilingFinish: 'gypsum-half-inch', insulation: { material: 'fiberglass', depthIn: 6 }, deck: 'partial', conditions: [], joistFields: fields, ...answers,
+  ceilingFinish: 'gypsum-half-inch', insulation: { material: 'fiberglass', depthIn: 6 }, deck: 'partial', deckAreaFt2: 96, conditions: [], joistFields: fields, ...answers,
 })
 
 export const J2X8 = joists('Main joists', { size: '2x8', species: 'Douglas fir-larch', grade: 'No.2', spacingIn: 16, spanFt: 12, joistCount: 13, topEdgeBraced: true })

@@ -59,6 +59,13 @@ describe('surveying an attic', () => {
     expect(body.rating).toMatchObject({ ratedPsf: 10, basis: 'unverified' })
   })
 
+  it('takes at most 10 psf where nobody is sure that the walls bear, and 0.9 of the bending where things stand for long', async () => {
+    const attic = await newAttic(home)
+    expect((await attic.survey({ joistFields: [joists({ bothEndsBear: null })] })).body.rating).toMatchObject({ ratedPsf: 10, basis: 'unverified' })
+    expect((await attic.survey({ standsOverTenYears: true, joistFields: [joists({ bothEndsBear: true })] })).body.rating).toMatchObject({ ratedPsf: 20, joistCheck: [{ factors: { cd: 0.9 } }] })
+    expect(await attic.rows.status()).toMatchObject({ ratedPsf: 20 })
+  })
+
   it.each(['wet', 'mouldy', 'rotten', 'insect-damaged', 'cut', 'cracked-through', 'sagging', 'notched', 'bored'] as const)('sets the attic on hold for %s wood', async (condition) => {
     const attic = await newAttic(home)
     expect((await attic.survey({ conditions: [condition] })).body.rating).toMatchObject({ ratedPsf: 0, hold: true, basis: 'hold' })
@@ -111,6 +118,9 @@ describe('an unsound survey', () => {
     ['a notch above nothing', { joistFields: [joists({ notches: [{ depthIn: 0, lengthIn: 1, place: 'end', edge: 'top' }] })] }, 'joistFields.0.notches.0.depthIn'],
     ['a strongback outside the walls', { joistFields: [joists({ strongbacks: [{ atFt: 12, size: '2x6', breadthIn: null, depthIn: null, sound: true, engineerAccepts: false }] })] }, 'joistFields.0.strongbacks.0.atFt'],
     ['a strongback accepted by no engineer', { joistFields: [joists({ strongbacks: [{ atFt: 6, size: '2x6', breadthIn: null, depthIn: null, sound: true, engineerAccepts: true as false }] })] }, 'joistFields.0.strongbacks.0.engineerAccepts'],
+    ['pine proven old that was put in later', { joistFields: [joists({ installedBeforeJune2013: false, preJune2013StampProven: true })] }, 'joistFields.0.preJune2013StampProven'],
+    ['an area of boards that lie all over', { deck: 'full', deckAreaFt2: 80 }, 'deckAreaFt2'],
+    ['a bearing wall that is a word', { joistFields: [joists({ bothEndsBear: 'perhaps' as unknown as boolean })] }, 'joistFields.0.bothEndsBear'],
     ['a condition we do not know', { conditions: ['haunted'] }, 'conditions.0'],
     ['a field nobody asked for', { ratedPsf: 500 }, 'form'],
   ])('is refused at its field: %s', async (_what, change, field) => {
