@@ -91,6 +91,7 @@ export const AtticSurveyInput = z.strictObject({
   conditions: z.array(z.enum(CONDITIONS)).max(CONDITIONS.length).nullable(),
   // Comes back with a survey that was read and sent again; the server alone decides it.
   earlierHold: z.unknown().optional().transform(() => undefined),
+  codeBasis: z.unknown().optional().transform(() => undefined),
   joistFields: z.array(JoistFieldInput).max(20, 'At most 20 groups of joists.'),
 }).superRefine((survey, context) => {
   if (survey.framing !== 'rafters-and-joists' && survey.joistFields.length > 0) {

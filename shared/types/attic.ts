@@ -132,6 +132,8 @@ export interface AtticSurvey {
   joistFields: JoistField[]
   /** Set by the server, never by a form: an earlier survey found damage. Papers decide whether the hold stands. */
   earlierHold?: { foundOn: string } | null
+  /** Set by the server, never by a form: the table of loads the property goes by; none: IRC Table R301.5. */
+  codeBasis?: CodeBasis | null
 }
 
 export const DOCUMENT_KINDS = ['engineer-letter', 'permit', 'truss-drawing', 'inspection-record'] as const

@@ -1,4 +1,4 @@
-import type { AtticSurvey, DocumentKind } from './attic'
+import type { AtticSurvey, CodeBasis, DocumentKind } from './attic'
 import type { RatingBasis } from './atticRating'
 import type { JudgedContents } from './contents'
 import type { StoredItem } from './item'
@@ -13,6 +13,9 @@ export interface SurveyRow {
   surveyedByName: string
   createdAt: string
 }
+
+/** A survey with all its answers, as it was rated on its day. */
+export interface KeptSurvey extends SurveyRow { answers: AtticSurvey }
 
 export interface DocumentRow {
   id: string
@@ -47,7 +50,7 @@ export interface AtticDetail {
   today: string
   attic: { id: string, name: string, notes: string, inventoryConfirmedOn: string | null, version: number, archivedAt: string | null }
   unit: { id: string, name: string }
-  property: { id: string, name: string, yearBuilt: number | null }
+  property: { id: string, name: string, yearBuilt: number | null, codeBasis: CodeBasis | null }
   survey: AtticSurvey | null
   surveys: SurveyRow[]
   documents: DocumentRow[]

@@ -1,4 +1,4 @@
-import type { AtticDocument, AtticSurvey, CeilingFinish } from './attic'
+import type { AtticDocument, AtticSurvey, CeilingFinish, CodeBasis } from './attic'
 import type { Severity, StoredFinding } from './finding'
 import type { NamedContentsItem } from './item'
 import type { Activity, MarkKind } from './mark'
@@ -9,6 +9,8 @@ export interface PropertyFacts {
   addressLines: string[]
   yearBuilt: number | null
   notes: string
+  /** On the property's own page: the table of loads its attics go by; null: IRC Table R301.5. */
+  codeBasis?: CodeBasis | null
   archivedAt: string | null
   version: number
 }

@@ -23,7 +23,8 @@ export function surveyAttic(db: Db, actor: RecordActor & { userId: string, timeZ
     if (latest && entered.surveyedOn < latest.surveyedOn) throw unsound({ surveyedOn: `The attic was surveyed on ${formatDay(latest.surveyedOn)}. An older survey cannot take its place.` })
     const documents = (await findDocuments(trx, attic.id)).map(asAtticDocument)
     const survey = { ...entered, earlierHold: latest ? damageOnRecord(latest.answers) : null }
-    const rating = rateAttic(survey, documents)
+    const { codeBasis } = await trx.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId').select('p.codeBasis').where('u.id', '=', attic.unitId).executeTakeFirstOrThrow()
+    const rating = rateAttic({ ...survey, codeBasis }, documents)
     const row = await trx.insertInto('atticSurvey').values({
       id: newId(), organisationId: attic.organisationId, unitId: attic.unitId, atticId: attic.id,
       surveyedOn: survey.surveyedOn, answers: JSON.stringify(survey), ratedPsf: rating.ratedPsf, onHold: rating.hold, basis: rating.basis,

@@ -10,6 +10,7 @@ import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
+import * as codeBasis from './0022CodeBasis'
 import * as inventory from './0024Inventory'
 import * as keepClearNotices from './0027KeepClearNotices'
 import * as hindsight from './0030Hindsight'
@@ -32,6 +33,7 @@ export const migrations: Record<string, Migration> = {
   '0009InvitationTerms': invitationTerms,
   '0012LookedBefore': lookedBefore,
   '0013FollowedChanges': followedChanges,
+  '0022CodeBasis': codeBasis,
   '0024Inventory': inventory,
   '0027KeepClearNotices': keepClearNotices,
   '0030Hindsight': hindsight,

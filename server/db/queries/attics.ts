@@ -5,18 +5,19 @@ import type { AtticDocument } from '../../../shared/types/attic'
 import type { AtticListRow, GuessRecord } from '../../../shared/types/atticDetail'
 import type { Page } from '../../../shared/types/home'
 import { visibleUnits, type Actor } from './actor'
+import { judgedAnswers } from './surveys'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 
 const latestSurvey = compiledOnce((db, { atticId }: { atticId: string }) =>
-  db.selectFrom('atticSurvey').selectAll().where('atticId', '=', atticId)
-    .orderBy('createdAt', 'desc').orderBy('id', 'desc').limit(1))
+  db.selectFrom('atticSurvey as s').select(['s.id', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', judgedAnswers().as('answers')]).where('s.atticId', '=', atticId)
+    .orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1))
 
 /** The survey that holds now: the last one entered. */
 export const findLatestSurvey = (db: Db, atticId: string) => latestSurvey.first(db, { atticId })
 
 const surveysOf = compiledOnce((db, { atticId }: { atticId: string }) =>
   db.selectFrom('atticSurvey as s').innerJoin('appUser as u', 'u.id', 's.surveyedBy')
-    .select(['s.id', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', 's.answers', 's.createdAt', 'u.name as surveyedByName'])
+    .select(['s.id', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', judgedAnswers().as('answers'), 's.createdAt', 'u.name as surveyedByName'])
     .where('s.atticId', '=', atticId).orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(50))
 
 export const findSurveys = (db: Db, atticId: string) => surveysOf.rows(db, { atticId })

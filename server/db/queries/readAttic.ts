@@ -11,7 +11,7 @@ interface AtticRow { id: string, unitId: string, name: string, notes: string, in
 
 const placeOf = compiledOnce((db, { unitId }: { unitId: string }) =>
   db.selectFrom('unit as u').innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('organisation as o', 'o.id', 'u.organisationId')
-    .select(['u.id as unitId', 'u.name as unitName', 'p.id as propertyId', 'p.name as propertyName', 'p.yearBuilt', 'o.timeZone'])
+    .select(['u.id as unitId', 'u.name as unitName', 'p.id as propertyId', 'p.name as propertyName', 'p.yearBuilt', 'p.codeBasis', 'o.timeZone'])
     .where('u.id', '=', unitId))
 
 /** Everything an attic's page shows, judged as it stands now. */
@@ -28,7 +28,7 @@ export async function readAttic(db: Db, attic: AtticRow): Promise<Omit<AtticDeta
     today: dayIn(place.timeZone),
     attic: { id, name, notes, inventoryConfirmedOn, archivedAt, version },
     unit: { id: place.unitId, name: place.unitName },
-    property: { id: place.propertyId, name: place.propertyName, yearBuilt: place.yearBuilt },
+    property: { id: place.propertyId, name: place.propertyName, yearBuilt: place.yearBuilt, codeBasis: place.codeBasis },
     survey,
     surveys: surveys.map(({ answers: _answers, basis, ...row }) => ({ ...row, basis: basis as RatingBasis })),
     documents: documents.map(row => ({

@@ -3,6 +3,7 @@ import { groupByKey } from '../../../shared/utils/groupByKey'
 import type { Db } from '../connect'
 import { dayIn, nowInstant } from '../../utils/clock'
 import { findJudgedMarks, findLastLoadChanges, findMarkSources, type JudgedMark, type MarkSources } from './judging'
+import { judgedAnswers } from './surveys'
 
 /** What the daily review reads, for many units at a time: a fixed number of statements however many there are. */
 
@@ -42,8 +43,8 @@ async function findAttics(db: Db, unitIds: readonly string[]) {
     .select(['a.id', 'a.organisationId', 'a.unitId', 'a.name', 'a.archivedAt', 'a.inventoryConfirmedOn', 'o.timeZone', 's.loadState', 's.utilisation', 's.storedLb', 's.ratedPsf'])
     .where('a.unitId', '=', sql<string>`any(${unitIds}::uuid[])`).orderBy('a.id').execute()
   const of = sql<string>`any(${attics.map(attic => attic.id)}::uuid[])`
-  const surveys = await db.selectFrom('atticSurvey').distinctOn('atticId').select(['atticId', 'answers', 'surveyedOn'])
-    .select(sql<string>`max(surveyed_on) over (partition by attic_id)`.as('newestOn')).where('atticId', '=', of).orderBy('atticId').orderBy('createdAt', 'desc').orderBy('id', 'desc').execute()
+  const surveys = await db.selectFrom('atticSurvey as s').distinctOn('s.atticId').select(['s.atticId', judgedAnswers().as('answers'), 's.surveyedOn'])
+    .select(sql<string>`max(surveyed_on) over (partition by attic_id)`.as('newestOn')).where('s.atticId', '=', of).orderBy('s.atticId').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').execute()
   const documents = groupByKey(await db.selectFrom('atticDocument').selectAll().where('atticId', '=', of).where('withdrawnAt', 'is', null).orderBy('createdAt').execute(), row => row.atticId)
   const items = groupByKey(await db.selectFrom('atticItem').selectAll().where('atticId', '=', of).where('removedOn', 'is', null).orderBy('createdAt').orderBy('id').execute(), row => row.atticId)
   const loadChanges = await findLastLoadChanges(db, attics.map(attic => attic.id))

@@ -5,6 +5,7 @@ import type { CeilingFinish } from '../../../shared/types/attic'
 import type { StoredFinding } from '../../../shared/types/finding'
 import type { AtticOfUnit, FieldMeasures } from '../../../shared/types/home'
 import { isoInstant, jsonList } from './jsonList'
+import { judgedAnswers } from './surveys'
 import { fallRiskOfSubject, riskRank } from './riskRank'
 
 /** Subqueries for parts of one unit; `unitId` is a value or a column of the statement around them. */
@@ -31,7 +32,7 @@ const byName = sql`a.name, a.id`
 const atticRowsOf = (db: Db, unitId: Expression<string>) => db.selectFrom('attic as a')
   .leftJoin('atticStatus as judged', 'judged.atticId', 'a.id')
   .leftJoinLateral(eb => eb.selectFrom('atticSurvey as s')
-    .select(['s.answers', 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', sql<FieldMeasures[]>`(
+    .select([judgedAnswers().as('answers'), 's.surveyedOn', 's.ratedPsf', 's.onHold', 's.basis', sql<FieldMeasures[]>`(
       select json_agg(json_build_object('spanFt', f->'spanFt', 'spacingIn', f->'spacingIn', 'joistCount', f->'joistCount') order by n)
       from jsonb_array_elements(s.answers->'joistFields') with ordinality as field(f, n))`.as('fields')])
     .whereRef('s.atticId', '=', 'a.id').orderBy('s.createdAt', 'desc').orderBy('s.id', 'desc').limit(1).as('latest'), join => join.onTrue())

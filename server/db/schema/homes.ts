@@ -1,4 +1,5 @@
-import type { Day, Defaulted, Instant } from '../schema'
+import type { CodeBasis } from '../../../shared/types/attic'
+import type { Day, Defaulted, Instant, Json } from '../schema'
 
 export interface HomeTables {
   property: PropertyTable
@@ -16,6 +17,7 @@ export interface PropertyTable {
   addressLines: Defaulted<string[]>
   yearBuilt: number | null
   notes: Defaulted<string>
+  codeBasis: Json<CodeBasis> | null
   archivedAt: Instant | null
   createdAt: Instant
   version: Defaulted<number>

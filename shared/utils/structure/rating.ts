@@ -89,7 +89,7 @@ export function damageOnRecord(survey: AtticSurvey): { foundOn: string } | null 
  * Load for stored goods, psf, and why: a hold first, then a paper on file, then framing, then the code's class held back
  * by what the joists can take. Trusses and unknown framing are never calculated. Reasons and cautions are codes with numbers.
  */
-export function rateAttic(survey: AtticSurvey, documents: AtticDocument[] = [], basis: CodeBasis = IRC_R301_5): AtticRating {
+export function rateAttic(survey: AtticSurvey, documents: AtticDocument[] = [], basis: CodeBasis = survey.codeBasis ?? IRC_R301_5): AtticRating {
   const joisted = survey.framing === 'rafters-and-joists'
   const code = joisted ? codeClass(survey, basis) : null
   const common = { classPsf: code?.classPsf ?? null, atticClass: code?.atticClass ?? null }

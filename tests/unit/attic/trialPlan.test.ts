@@ -15,7 +15,7 @@ function detailOf(items = [books, tools]): AtticDetail {
   const one = survey()
   return {
     today: '2026-11-20', attic: { id: 'attic', name: 'Loft', notes: '', inventoryConfirmedOn: null, version: 1, archivedAt: null },
-    unit: { id: 'u', name: 'Flat' }, property: { id: 'p', name: '1 Plumb Lane', yearBuilt: null },
+    unit: { id: 'u', name: 'Flat' }, property: { id: 'p', name: '1 Plumb Lane', yearBuilt: null, codeBasis: null },
     survey: one, surveys: [], documents: [], items, events: [], itemPhotos: [], guesses: { count: 0, medianRatio: null }, contents: judgeContents({ survey: one, documents: [], items }), abilities: ['edit attic'],
   }
 }
