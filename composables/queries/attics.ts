@@ -1,4 +1,4 @@
-import type { AtticDetail, AtticListRow } from '~/shared/types/atticDetail'
+import type { AtticDetail, AtticListRow, KeptSurvey } from '~/shared/types/atticDetail'
 import type { AtticSurvey } from '~/shared/types/attic'
 import type { AtticEditValue } from '~/shared/schemas/attic'
 import type { ListImported, ListPreview } from '~/shared/types/inventoryList'
@@ -14,6 +14,8 @@ export const useAttics = (search: Ref<string>, after: Ref<string | undefined>) =
   key: () => ['attics', 'list', search.value, after.value],
   path: () => `/api/attics?${new URLSearchParams({ ...search.value && { search: search.value }, ...after.value && { after: after.value } })}`,
 })
+
+export const useKeptSurveys = (atticId: string) => useServerQuery<{ rows: KeptSurvey[] }>({ key: ['attics', atticId, 'surveys'], path: `/api/attics/${atticId}/surveys`, essential: true })
 
 /** What changes when the load or the survey changes. */
 const STALE = ['attics', 'units', 'overview', 'findings', 'properties', 'record']

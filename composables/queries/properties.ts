@@ -1,6 +1,7 @@
 import type { MaybeRefOrGetter } from 'vue'
 import { pathWith } from '~/composables/queries/pathWith'
 import { useServerChange, useServerQuery } from '~/composables/useServerQuery'
+import type { CodeBasisEditValue } from '#shared/schemas/codeBasis'
 import type { PropertyCreateValue, PropertyEditValue, UnitCreateValue } from '#shared/schemas/home'
 import type { Page, PropertyCard, PropertyFacts, PropertyPage } from '#shared/types/home'
 
@@ -14,17 +15,18 @@ export const useProperty = (propertyId: MaybeRefOrGetter<string>, after: MaybeRe
   key: () => ['properties', toValue(propertyId), toValue(after) ?? ''], path: () => pathWith(`/api/properties/${toValue(propertyId)}`, { after: toValue(after) }), essential: true,
 })
 
-const stale = ['properties', 'units', 'attics', 'overview', 'record']
+const stale = ['properties', 'units', 'attics', 'overview', 'findings', 'record']
 
 export interface MadeHome { id: string, unitId: string | null, atticId: string | null }
 
 export function usePropertyChanges() {
-  const change = <V, A>(method: 'POST' | 'PATCH', pathOf: (value: V) => string, bodyOf: (value: V) => object) => useServerChange<V, A>({
+  const change = <V, A>(method: 'POST' | 'PATCH' | 'PUT', pathOf: (value: V) => string, bodyOf: (value: V) => object) => useServerChange<V, A>({
     send: (request, value) => request<unknown>(pathOf(value), { method, body: bodyOf(value) }) as Promise<A>, stale,
   })
   return {
     addProperty: change<PropertyCreateValue, MadeHome>('POST', () => '/api/properties', value => value),
     saveProperty: change<{ id: string, edit: PropertyEditValue }, PropertyFacts>('PATCH', ({ id }) => `/api/properties/${id}`, ({ edit }) => edit),
+    saveCodeBasis: change<{ id: string, edit: CodeBasisEditValue }, { version: number }>('PUT', ({ id }) => `/api/properties/${id}/code-basis`, ({ edit }) => edit),
     archiveProperty: change<{ id: string, version: number }, PropertyFacts>('POST', ({ id }) => `/api/properties/${id}/archive`, ({ version }) => ({ version })),
     restoreProperty: change<{ id: string, version: number }, PropertyFacts>('POST', ({ id }) => `/api/properties/${id}/restore`, ({ version }) => ({ version })),
     addUnit: change<{ propertyId: string, unit: UnitCreateValue }, { id: string, atticId: string | null }>('POST', ({ propertyId }) => `/api/properties/${propertyId}/units`, ({ unit }) => unit),

@@ -1,4 +1,4 @@
-import type { ClassReason, HoldReason, RatingReason } from '../../types/atticRating'
+import type { ClassReason, HoldReason, JoistCapacity, JoistCapacityAnswer, JoistMeasure, RatingReason } from '../../types/atticRating'
 import type { Condition, DocumentKind } from '../../types/attic'
 import { formatDay } from '../days'
 
@@ -70,6 +70,18 @@ export function ratingReasonSentence(reason: RatingReason): string {
     case 'bearing-walls-unsure': return `Nobody is sure that both ends of the joists lie on bearing walls, so the span may be longer than it looks: ${psf(reason.psf)} is taken (${reason.fieldNames.join(', ')}).`
     case 'joists-not-measured': return `The joists have not been measured, so ${psf(reason.psf)} is taken instead of ${psf(reason.classPsf)}. Measure the joists.`
     default: return isHold(reason) ? holdSentence(reason) : classSentence(reason)
+  }
+}
+
+const MEASURE_WORDS: Record<JoistMeasure, string> = { size: 'size', spacingIn: 'spacing', spanFt: 'clear span' }
+const COVERED_WORDS = { breadthIn: 'thickness', depthIn: 'depth', spanFt: 'span', slenderness: 'slenderness' } as const
+
+/** Why the joists of a group were not worked out. */
+export function joistAnswerSentence(answer: Exclude<JoistCapacityAnswer, JoistCapacity>): string {
+  switch (answer.kind) {
+    case 'not-joists': return 'Trusses, and framing nobody knows, are never calculated.'
+    case 'measures-missing': return `${answer.fieldName}: not worked out without ${answer.missing.map(measure => MEASURE_WORDS[measure]).join(', ')}. Measure the joists.`
+    case 'not-covered': return `${answer.fieldName}: the tables do not cover these joists (${COVERED_WORDS[answer.measure]} ${figure(answer.value)}, limit ${figure(answer.limit)}). An engineer decides.`
   }
 }
 

@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import type { AtticSurvey, JoistField } from '../../../shared/types/attic'
-import type { JoistCapacity } from '../../../shared/types/atticRating'
+import type { JoistCapacity, JoistCapacityAnswer } from '../../../shared/types/atticRating'
 import { AtticSurveyInput } from '../../../shared/schemas/atticSurvey'
 import { deadLines, inputLines, limitLines, otherDivisor, sagAt, stressLines } from '../../../shared/utils/messages/capacitySums'
+import { joistAnswerSentence } from '../../../shared/utils/messages/ratingReasons'
 import { compareSurveys } from '../../../shared/utils/messages/surveyChanges'
 import { joistCapacity } from '../../../shared/utils/structure/joistCapacity'
 import { rateAttic } from '../../../shared/utils/structure/rating'
@@ -128,5 +129,27 @@ describe('impossible joists', () => {
   it('are refused for two groups of one name, and for boards on a part that is no part', () => {
     expect((AtticSurveyInput.safeParse(survey({ joistFields: [field, { ...field, name: 'north' }] })).error?.issues ?? []).map(issue => issue.path.join('.'))).toEqual(['joistFields.1.name'])
     expect(wrong({}, { deck: 'full', deckAreaFt2: 40 })).toEqual(['deckAreaFt2'])
+  })
+})
+
+describe('joists that were not worked out', () => {
+  it('are told why in one sentence', () => {
+    const from = withField({ size: null, spanFt: null })
+    expect(joistAnswerSentence(joistCapacity(from.joistFields[0]!, from, { withStorage: true }) as Exclude<JoistCapacityAnswer, JoistCapacity>)).toBe('North: not worked out without size, clear span. Measure the joists.')
+    const deep = withField({ size: null, breadthIn: 3, depthIn: 20 })
+    expect(joistAnswerSentence(joistCapacity(deep.joistFields[0]!, deep, { withStorage: true }) as Exclude<JoistCapacityAnswer, JoistCapacity>)).toMatch(/tables do not cover these joists \(depth 20, limit 16\)\. An engineer decides\./)
+    expect(joistAnswerSentence({ kind: 'not-joists', fieldName: 'x', framing: 'trusses' })).toMatch(/never calculated/)
+  })
+})
+
+describe('another table of loads than the code’s', () => {
+  it('sets the class, and the joists still hold it back', () => {
+    const codeBasis = { name: 'Invented town', note: '', psf: { 'habitable-or-fixed-stairs': 60, 'limited-storage': 50, 'no-storage': 10 } }
+    const rating = rateAttic(withField({ size: '2x6', spanFt: 12 }, { codeBasis }))
+    expect(rating).toMatchObject({ classPsf: 50, basis: 'joists' })
+    expect(rating.ratedPsf).toBeLessThan(50)
+    expect(rating.ratedPsf).toBeGreaterThan(20)
+    expect(rateAttic(withField({}, { codeBasis: null })).classPsf).toBe(20)
+    expect(AtticSurveyInput.parse(withField({}, { codeBasis })).codeBasis).toBeUndefined()
   })
 })
