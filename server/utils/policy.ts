@@ -22,6 +22,7 @@ export const policy = {
   'see mark': { ...staff, tenant: 'own units', engineer: 'own units' },
   'edit mark': staff,
   'report observation': { ...staff, tenant: 'own units' },
+  'enter paper report': staff,
   'record reading': { ...staff, tenant: 'own units' },
   'add photo': { ...staff, tenant: 'own units' },
   'see finding': { ...staff, engineer: 'own units' },

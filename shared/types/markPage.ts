@@ -81,6 +81,9 @@ export interface ReportRow {
   dangerSigns: DangerSign[]
   startedAt: string | null
   correctedAt: string | null
+  /** Both set where it was filled in by hand and entered later by `reportedBy`. */
+  paperReporter: string | null
+  paperFilledInOn: string | null
 }
 
 /** Weight in the attic above from this day on. */

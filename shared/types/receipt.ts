@@ -1,5 +1,6 @@
 import type { DangerSign, MarkKind, ObservationAnswers, ReadingMethod } from './mark'
 import type { MarkState } from './markPage'
+import type { PaperOrigin } from './paperReport'
 import type { PhotoRef } from './photo'
 
 /** What the person who reported gets back at once, and may read again later. */
@@ -9,6 +10,8 @@ export interface Receipt {
   /** The server's clock: every response time starts here. */
   receivedAt: string
   reportedBy: string
+  /** Set where it was filled in by hand and entered later by `reportedBy`. */
+  paper: PaperOrigin | null
   timeZone: string
   unit: { id: string, name: string, propertyName: string }
   room: { id: string, name: string }

@@ -60,6 +60,7 @@ const PAGES: Record<string, Sample[]> = {
   'sign-up.vue': one('nobody', '/sign-up'),
   'units/[unitId]/edit.vue': one('maren', '/units/:unit/edit'),
   'units/[unitId]/index.vue': [{ who: 'maren', path: '/units/:unit' }, { who: 'ines', path: '/units/:cottage' }],
+  'units/[unitId]/paper-report.vue': one('maren', '/units/:unit/paper-report'),
   'units/[unitId]/record.vue': one('maren', '/units/:unit/record'),
   'upkeep.vue': [{ who: 'maren', path: '/upkeep' }, { who: 'bram', path: '/upkeep' }],
 }

@@ -13,6 +13,7 @@ import * as followedChanges from './0013FollowedChanges'
 import * as codeBasis from './0022CodeBasis'
 import * as inventory from './0024Inventory'
 import * as keepClearNotices from './0027KeepClearNotices'
+import * as paperReports from './0028PaperReports'
 import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
 import * as markRepairs from './0032MarkRepairs'
@@ -36,6 +37,7 @@ export const migrations: Record<string, Migration> = {
   '0022CodeBasis': codeBasis,
   '0024Inventory': inventory,
   '0027KeepClearNotices': keepClearNotices,
+  '0028PaperReports': paperReports,
   '0030Hindsight': hindsight,
   '0031UnloadTrials': unloadTrials,
   '0032MarkRepairs': markRepairs,

@@ -14,7 +14,7 @@ export const findObservationByKey = (trx: Trx, reportedBy: string, clientKey: st
 const findReportFacts = (db: Db | Trx, id: string) => db.selectFrom('observation as o')
   .innerJoin('mark as m', 'm.id', 'o.markId').innerJoin('room as r', 'r.id', 'o.roomId').innerJoin('unit as u', 'u.id', 'o.unitId')
   .innerJoin('property as p', 'p.id', 'u.propertyId').innerJoin('organisation as g', 'g.id', 'o.organisationId').innerJoin('appUser as a', 'a.id', 'o.reportedBy')
-  .select(['o.id', 'o.organisationId', 'o.number', 'o.receivedAt', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt', 'o.unitId', 'o.roomId', 'o.markId',
+  .select(['o.id', 'o.organisationId', 'o.number', 'o.receivedAt', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt', 'o.paperReporter', 'o.paperFilledInOn', 'o.unitId', 'o.roomId', 'o.markId',
     'a.name as reportedBy', 'u.name as unitName', 'p.name as propertyName', 'r.name as roomName',
     'm.number as markNumber', 'm.label', 'm.kind', 'm.state', 'm.firstSeenOn', 'm.nextReadingOn',
     'g.timeZone', 'g.contactPhone', 'g.dangerResponseHours', 'g.urgentResponseHours', 'g.routineResponseDays', 'g.entryNoticeHours'])
@@ -33,7 +33,8 @@ export async function findReceipt(db: Db | Trx, id: string): Promise<Receipt | u
   }
   const [reading, photos] = await Promise.all([findReportReading(db, found.markId, id), listReportPhotos(db, id)])
   return {
-    id: found.id, number: found.number, receivedAt: found.receivedAt, reportedBy: found.reportedBy, timeZone: found.timeZone,
+    id: found.id, number: found.number, receivedAt: found.receivedAt, reportedBy: found.reportedBy,
+    paper: found.paperReporter && found.paperFilledInOn ? { reporterName: found.paperReporter, filledInOn: found.paperFilledInOn } : null, timeZone: found.timeZone,
     unit: { id: found.unitId, name: found.unitName, propertyName: found.propertyName }, room: { id: found.roomId, name: found.roomName },
     mark: { id: found.markId, number: found.markNumber, label: found.label, kind: found.kind, state: found.state, firstSeenOn: found.firstSeenOn, nextReadingOn: found.nextReadingOn },
     joinedKnownMark: Boolean(found.joinedKnownMark), answers, dangerSigns: found.dangerSigns as DangerSign[],
@@ -53,7 +54,7 @@ const listReportPhotos = (db: Db | Trx, observationId: string) =>
 
 const reportsOfMark = compiledOnce((db, { markId }: { markId: string }) =>
   db.selectFrom('observation as o').innerJoin('appUser as a', 'a.id', 'o.reportedBy')
-    .select(['o.id', 'o.number', 'o.receivedAt', 'a.name as reportedBy', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt'])
+    .select(['o.id', 'o.number', 'o.receivedAt', 'a.name as reportedBy', 'o.answers', 'o.dangerSigns', 'o.startedAt', 'o.correctedAt', 'o.paperReporter', 'o.paperFilledInOn'])
     .where('o.markId', '=', markId).orderBy('o.receivedAt', 'desc').limit(100))
 
 /** What people said of a mark, newest first. */

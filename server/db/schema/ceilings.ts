@@ -89,6 +89,8 @@ export interface ObservationTable {
   receivedAt: Instant
   startedAt: Instant | null
   correctedAt: Instant | null
+  paperReporter: string | null
+  paperFilledInOn: Day | null
 }
 
 export interface ReadingTable {

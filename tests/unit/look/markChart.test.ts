@@ -4,7 +4,7 @@ import { activityTone } from '../../../components/ceiling/activityTone'
 import { ceilingPinWords, clampPin, movePinByKey } from '../../../components/ceiling/ceilingPinWords'
 import { loadChart, readingsChart } from '../../../components/ceiling/markChartOptions'
 import { errorBars, loadLine, readingPoints, timeOf, timeRange, trendBand, trendLine } from '../../../components/ceiling/markChartSeries'
-import { shapeDrawing } from '../../../components/ceiling/markShapePaths'
+import { shapeDrawing } from '../../../shared/utils/report/shapeDrawings'
 import { hexFromToken } from '../../../components/ceiling/useTokenColours'
 import { MARK_KINDS, MARK_SHAPES } from '../../../shared/types/mark'
 

@@ -21,6 +21,7 @@ const EXPECTED: Record<Ability, Row> = {
   'see mark': ['all', 'all', 'own units', '-', 'own units'],
   'edit mark': ['all', 'all', '-', '-', '-'],
   'report observation': ['all', 'all', 'own units', '-', '-'],
+  'enter paper report': ['all', 'all', '-', '-', '-'],
   'record reading': ['all', 'all', 'own units', '-', '-'],
   'add photo': ['all', 'all', 'own units', '-', '-'],
   'see finding': ['all', 'all', '-', '-', 'own units'],

@@ -1,4 +1,4 @@
-import type { MarkKind, MarkShape } from '~/shared/types/mark'
+import type { MarkKind, MarkShape } from '../../types/mark'
 
 /** Our own line drawings, on a sheet of 90 × 58. `light` parts are drawn thin, `dashed` ones show where the ceiling was. */
 export interface ShapeDrawing { main: string, light?: string, dashed?: string, wet?: boolean }

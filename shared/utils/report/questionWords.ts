@@ -1,5 +1,5 @@
-import type { MarkKind } from '~/shared/types/mark'
-import type { ReportQuestion } from '~/shared/types/reportDraft'
+import type { MarkKind } from '../../types/mark'
+import type { ReportQuestion } from '../../types/reportDraft'
 
 export interface QuestionWords { heading: string, lead?: string }
 
