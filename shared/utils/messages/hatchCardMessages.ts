@@ -95,31 +95,31 @@ const NEVER = [
 const NEVER_ANYTHING = ['Boxes of any kind, light ones too', 'Anything on the ceiling between joists']
 
 /** Said on the card in words of their own, or only of use to who reads the rating's reasons. */
-const SAID_ELSEWHERE: readonly string[] = ['estimate-only', 'no-stamp-weakest-grade', 'bearing-length-assumed', 'southern-pine-lower-values', 'finish-taken-as-plaster', 'dead-load-floor', 'dead-load-part-assumed', 'few-joists-no-sharing', 'size-between-table-sizes', 'top-edge-unbraced', 'notched-within-limits', 'bored-within-limits']
+const SAID_ELSEWHERE: readonly string[] = ['estimate-only', 'no-stamp-weakest-grade', 'bearing-length-assumed', 'southern-pine-lower-values', 'finish-taken-as-plaster', 'dead-load-floor', 'dead-load-part-assumed', 'few-joists-no-sharing', 'size-between-table-sizes', 'stands-over-ten-years', 'top-edge-unbraced', 'notched-within-limits', 'bored-within-limits']
 
-function cautionsOf(facts: HatchCardFacts): string[] {
+function cautionsOf(facts: HatchCardFacts, system: UnitSystem): string[] {
   const isLoaded = facts.itemCount > 0
   return [
     ...facts.isTrussed ? [TRUSS_CAUTION] : [],
     ...facts.state === 'hold' ? [HOLD_CAUTION] : [],
     ...facts.state === 'over' || (facts.state === 'hold' && isLoaded) ? [UNLOAD_FIRST] : [],
-    ...facts.cautions.filter(caution => !SAID_ELSEWHERE.includes(caution.code)).map(ratingCautionSentence),
+    ...facts.cautions.filter(caution => !SAID_ELSEWHERE.includes(caution.code)).map(caution => ratingCautionSentence(caution, system)),
     `${ATTIC_WORK} ${NO_ATTIC_FOR_TENANTS}`, ESTIMATE_CAVEAT,
   ]
 }
 
 /** Reasons the caution beside them says already are not said twice. */
-const whyOf = (facts: HatchCardFacts) => facts.reasons.filter(reason => reason.code !== 'trusses').map(ratingReasonSentence)
+const whyOf = (facts: HatchCardFacts, system: UnitSystem) => facts.reasons.filter(reason => reason.code !== 'trusses').map(reason => ratingReasonSentence(reason, system))
 
 export function hatchCardText(facts: HatchCardFacts, contact: PaperContact, system: UnitSystem, printedOn: string): HatchCardText {
   const stored = facts.itemCount > 0 ? `On that day it held about ${formatWeight(facts.storedLb, system)}.` : 'On that day nothing was stored.'
   return {
-    ...verdictOf(facts, system), isBarred: !facts.mayStore, why: whyOf(facts),
+    ...verdictOf(facts, system), isBarred: !facts.mayStore, why: whyOf(facts, system),
     fields: facts.mayStore ? facts.fields.slice(0, MOST_DRAWN).map(field => fieldText(field, system)) : [],
     moreFields: facts.mayStore && facts.fields.length > MOST_DRAWN ? `Not drawn: ${facts.fields.slice(MOST_DRAWN).map(field => field.name).join(', ')}. The same zones hold there.` : null,
     table: tableOf(facts, system), noTable: noTableOf(facts),
     never: facts.mayStore ? NEVER : NEVER_ANYTHING,
-    cautions: cautionsOf(facts),
+    cautions: cautionsOf(facts, system),
     dates: `${facts.surveyedOn ? `Surveyed ${formatDay(facts.surveyedOn)}` : 'Never surveyed'}. Card of ${formatDay(printedOn)}. ${stored} A newer card replaces this one.`,
     ask: contact.phone ? `Ask first: ${contact.organisationName}, ${contact.phone}` : `Ask first: ${contact.organisationName}`,
   }

@@ -1,5 +1,6 @@
 import type { JoistAssumption, RatingBasis, RatingCaution } from '../../types/atticRating'
-import { DOCUMENT_WORDS } from './ratingReasons'
+import { formatArea, type UnitSystem } from '../units'
+import { DOCUMENT_WORDS, RATING_QUANTITIES } from './ratingReasons'
 
 const figure = (value: number, digits = 1) => Number(value.toFixed(digits)).toString()
 
@@ -23,7 +24,8 @@ function assumptionSentence(caution: JoistAssumption): string {
 }
 
 /** One sentence for one caution. */
-export function ratingCautionSentence(caution: RatingCaution): string {
+export function ratingCautionSentence(caution: RatingCaution, system: UnitSystem = 'us'): string {
+  const { psf } = RATING_QUANTITIES[system]
   switch (caution.code) {
     case 'estimate-only': return 'This is an estimate from what was entered. It is not an engineering assessment. Local building codes and a licensed structural engineer decide.'
     case 'local-amendments': return `Loads follow ${caution.basisName}. Your town may have changed them; local code decides.`
@@ -33,10 +35,10 @@ export function ratingCautionSentence(caution: RatingCaution): string {
     case 'document-covers-part': return `A paper on file covers only part of this attic: ${caution.area}.`
     case 'document-not-for-framing': return `A paper on file (${DOCUMENT_WORDS[caution.kind]}) does not speak about this kind of framing, so it does not count.`
     case 'document-before-survey': return 'A paper on file is older than the last survey, so it cannot lift what was seen since.'
-    case 'joists-below-access-load': return `The joists take only ${figure(caution.allowedPsf)} psf, less than the ${figure(caution.accessPsf)} psf for a person up there. Do not step into this attic (${caution.fieldName}).`
+    case 'joists-below-access-load': return `The joists take only ${psf(caution.allowedPsf)}, less than the ${psf(caution.accessPsf)} for a person up there. Do not step into this attic (${caution.fieldName}).`
     case 'insulation-covers-joists': return 'Insulation covers the joists: you cannot see where to step, and nothing stands safely on it.'
-    case 'insulation-heavy-for-board': return `The insulation weighs ${figure(caution.insulationPsf)} psf, more than the ${figure(caution.limitPsf)} psf makers advise for this ceiling board. Nothing may rest on board between joists.`
-    case 'no-deck': return (caution.deckAreaFt2 === null ? '' : `Boards lie on ${figure(caution.deckAreaFt2, 0)} ft² only. `) + 'There is no full deck. Step on joists only, and rest nothing on the ceiling between them.'
+    case 'insulation-heavy-for-board': return `The insulation weighs ${psf(caution.insulationPsf)}, more than the ${psf(caution.limitPsf)} makers advise for this ceiling board. Nothing may rest on board between joists.`
+    case 'no-deck': return (caution.deckAreaFt2 === null ? '' : `Boards lie on ${system === 'us' ? `${figure(caution.deckAreaFt2, 0)} ft²` : formatArea(caution.deckAreaFt2, system)} only. `) + 'There is no full deck. Step on joists only, and rest nothing on the ceiling between them.'
     case 'notched-within-limits': return `Notches are within the limits of the code (${caution.fieldName}).`
     case 'bored-within-limits': return `Holes are within the limits of the code (${caution.fieldName}).`
     default: return assumptionSentence(caution)

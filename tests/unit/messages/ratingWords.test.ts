@@ -26,7 +26,7 @@ describe('reasons and cautions in words', () => {
     for (const survey of surveys) {
       const rating = rateAttic(survey)
       expect(rating.reasons.length).toBeGreaterThan(0)
-      for (const sentence of [...rating.reasons.map(ratingReasonSentence), ...rating.cautions.map(ratingCautionSentence)]) {
+      for (const sentence of [...rating.reasons.flatMap(reason => [ratingReasonSentence(reason), ratingReasonSentence(reason, 'metric')]), ...rating.cautions.flatMap(caution => [ratingCautionSentence(caution), ratingCautionSentence(caution, 'metric')])]) {
         expect(sentence).toMatch(/^[A-Z0-9].*\.$/)
         expect(sentence).not.toMatch(/undefined|NaN|null|\[object/)
       }
@@ -34,7 +34,7 @@ describe('reasons and cautions in words', () => {
   })
 
   it('always says with trusses that only drawings or an engineer can allow storage', () => {
-    const sentences = rateAttic({ ...emptySurvey('2026-11-01'), framing: 'trusses' }).reasons.map(ratingReasonSentence).join(' ')
+    const sentences = rateAttic({ ...emptySurvey('2026-11-01'), framing: 'trusses' }).reasons.map(reason => ratingReasonSentence(reason)).join(' ')
     expect(sentences).toMatch(/No storage unless the truss design drawings or an engineer give a figure/)
   })
 })

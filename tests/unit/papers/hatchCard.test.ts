@@ -59,6 +59,8 @@ describe('the hatch card of sound joists', () => {
     expect(text.says).toContain('0.96\u00A0kPa')
     expect(text.table?.rows).toEqual([{ place: 'up to 0.5\u00A0m', weights: ['90\u00A0kg'] }, { place: 'out to the middle', weights: ['18\u00A0kg'] }])
     expect(text.table?.notes[0]).toContain('45 cm square')
+    expect(text.why.join(' ')).toMatch(/the code asks 0\.96 kPa.*can take 2\.\d+ kPa/)
+    expect(JSON.stringify(text)).not.toMatch(/\d (psf|lb|ft|in)\b/)
   })
 
   it('gives the strictest figure where several fields differ, and names those it does not draw', () => {
