@@ -53,10 +53,13 @@ function directionSentence(trend: MeasuredTrend, kind: MarkKind, system: UnitSys
     : `${move} about ${rate} so far. The direction is not sure.`
 }
 
+const seasonSentence = ({ seasonRuledOutFrom }: MeasuredTrend) =>
+  seasonRuledOutFrom === null ? '' : ` A season cannot be ruled out before ${formatDay(seasonRuledOutFrom)}.`
+
 /** What the readings say, with rate, range, number and span; or that they do not say it yet, and when they will. */
 export function trendSentence(trend: MarkTrend, kind: MarkKind, system: UnitSystem = 'us'): string {
   if (trend.kind === 'too few readings') return tooFewSentence(trend)
-  return `${directionSentence(trend, kind, system)} ${rangeSentence(trend, kind, system)}`
+  return `${directionSentence(trend, kind, system)} ${rangeSentence(trend, kind, system)}${seasonSentence(trend)}`
 }
 
 export function detectableSentence(detectable: DetectableRate, kind: MarkKind, system: UnitSystem = 'us'): string {
