@@ -36,13 +36,18 @@ const listTrialItems = (db: Db, trialId: string): Promise<TrialItem[]> =>
   db.selectFrom('unloadTrialItem as t').innerJoin('atticItem as i', 'i.id', 't.itemId')
     .select(['i.id', 'i.name', sql<number>`i.quantity * i.typical_lb`.as('weightLb'), 'i.removedOn']).where('t.trialId', '=', trialId).orderBy('i.name').orderBy('i.id').execute()
 
+/** The watched marks; one that was joined to another since is followed there. */
+const findWatchedMarks = (db: Db, trialId: string) =>
+  db.selectFrom('unloadTrialMark as t').innerJoin('mark as k', 'k.id', 't.markId')
+    .innerJoin('mark as m', join => join.on('m.id', '=', eb => eb.fn.coalesce('k.joinedInto', 'k.id'))).innerJoin('room as r', 'r.id', 'm.roomId')
+    .select(['m.id', 'm.number', 'm.label', 'm.kind', 'r.name as roomName']).distinct().where('t.trialId', '=', trialId).orderBy('m.number').execute()
+
 /** The readings of a mark's newest segment up to the end of the trial: a repair ends what can be compared. */
 async function listTrialMarks(db: Db, trial: { id: string, unloadedOn: string | null, endedOn: string | null }): Promise<TrialMark[]> {
-  const marks = await db.selectFrom('unloadTrialMark as t').innerJoin('mark as m', 'm.id', 't.markId').innerJoin('room as r', 'r.id', 'm.roomId')
-    .select(['m.id', 'm.number', 'm.label', 'm.kind', 'r.name as roomName']).where('t.trialId', '=', trial.id).orderBy('m.number').execute()
-  const readings = await db.selectFrom('reading as r').innerJoin('unloadTrialMark as t', 't.markId', 'r.markId').innerJoin('mark as m', join => join.onRef('m.id', '=', 'r.markId').onRef('m.segment', '=', 'r.segment'))
+  const marks = await findWatchedMarks(db, trial.id)
+  const readings = await db.selectFrom('reading as r').innerJoin('mark as m', join => join.onRef('m.id', '=', 'r.markId').onRef('m.segment', '=', 'r.segment'))
     .select(['r.markId', 'r.takenOn', sql<number>`r.value`.as('value'), sql<number>`r.sigma`.as('sigma')])
-    .where('t.trialId', '=', trial.id).where('r.value', 'is not', null)
+    .where('r.markId', '=', sql<string>`any(${marks.map(mark => mark.id)}::uuid[])`).where('r.value', 'is not', null)
     .$if(trial.endedOn !== null, query => query.where('r.takenOn', '<=', trial.endedOn!)).orderBy('r.takenOn').execute()
   const byMark = groupByKey(readings, reading => reading.markId)
   return marks.map(mark => ({ ...mark, result: unloadTrialResult(byMark.get(mark.id) ?? [], trial.unloadedOn) }))

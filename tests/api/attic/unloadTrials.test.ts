@@ -104,6 +104,16 @@ describe('carrying it out', () => {
     expect(later.marks[0]!.result).toMatchObject({ kind: 'measured', readingsBefore: 4, readingsAfter: 3, slopeBefore: { value: expect.closeTo(0.03 * 365.25, 3) }, seasonFitted: false })
   })
 
+  it('follows a watched mark to the one it was joined to', async () => {
+    await furnish()
+    const trial = await planned()
+    const other = await addMark(open.db, home, { createdDaysAgo: 100 })
+    await open.db.updateTable('reading').set({ markId: other }).where('markId', '=', mark).execute()
+    await open.db.updateTable('mark').set({ state: 'closed', joinedInto: other }).where('id', '=', mark).execute()
+    const { body } = await home.as.owner.get<UnloadTrialView>(`/api/unload-trials/${trial.id}`)
+    expect(body.marks).toMatchObject([{ id: other, result: { readingsBefore: 4 } }])
+  })
+
   it('refuses a day to come, things of no trial, a second time, and a stale version, and then leaves everything as it was', async () => {
     await furnish()
     const trial = await planned()
