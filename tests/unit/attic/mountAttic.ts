@@ -8,6 +8,8 @@ import UiChoice from '../../../components/ui/UiChoice.vue'
 import UiDay from '../../../components/ui/UiDay.vue'
 import UiDisclosure from '../../../components/ui/UiDisclosure.vue'
 import UiEmpty from '../../../components/ui/UiEmpty.vue'
+import UiInput from '../../../components/ui/UiInput.vue'
+import UiLive from '../../../components/ui/UiLive.vue'
 import UiField from '../../../components/ui/UiField.vue'
 import UiMeasure from '../../../components/ui/UiMeasure.vue'
 import UiNotice from '../../../components/ui/UiNotice.vue'
@@ -18,7 +20,7 @@ import UiStateWord from '../../../components/ui/UiStateWord.vue'
 import UiTable from '../../../components/ui/UiTable.vue'
 import UiVerdict from '../../../components/ui/UiVerdict.vue'
 
-const components = { AtticVerdict, ItemScale, UiButton, UiCheckbox, UiChoice, UiDay, UiDisclosure, UiEmpty, UiField, UiMeasure, UiNotice, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
+const components = { AtticVerdict, ItemScale, UiButton, UiCheckbox, UiChoice, UiDay, UiDisclosure, UiEmpty, UiInput, UiLive, UiField, UiMeasure, UiNotice, UiNumber, UiSafety, UiSelect, UiStateWord, UiTable, UiVerdict } as Record<string, Component>
 
 /** Mounts a component of the attic with the pieces Nuxt would have found for it. */
 export function mountAttic(component: unknown, props: Record<string, unknown>) {
