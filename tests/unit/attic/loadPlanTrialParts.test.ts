@@ -77,7 +77,7 @@ describe('a trial and what is saved', () => {
 
   it('steps back and forth by the tools', async () => {
     const trial = trialOf()
-    const shown = mountAttic(LoadPlanTools, { trial, several: false, shaded: true, asTable: false, canShade: true })
+    const shown = mountAttic(LoadPlanTools, { trial, several: false, shaded: true, asTable: false, canShade: true, editable: true })
     expect(shown.findAll('button').map(button => button.text())).toEqual(['As a table', 'Choose several', 'Show where it may go'])
     trial.change([{ id: 'books', xFt: 5 }])
     await nextTick()
@@ -90,6 +90,13 @@ describe('a trial and what is saved', () => {
     await shown.setProps({ several: true })
     await shown.findAll('button')[2]!.trigger('click')
     expect(shown.emitted('all')).toHaveLength(1)
+  })
+})
+
+describe('those who may not move anything', () => {
+  it('still choose between drawing and table, and see where things may go', () => {
+    const shown = mountAttic(LoadPlanTools, { trial: trialOf(), several: false, shaded: true, asTable: false, canShade: true, editable: false })
+    expect(shown.findAll('button').map(button => button.text())).toEqual(['As a table', 'Show where it may go'])
   })
 })
 
