@@ -26,8 +26,8 @@ const plain = (text: string) => text.replaceAll('\u00A0', ' ')
 const books = item({ id: 'books', name: 'Books', xFt: 0, yFt: 8, quantity: 6 })
 const detail: AtticDetail = {
   today: '2026-11-20', attic: { id: 'attic', name: 'Loft', notes: '', inventoryConfirmedOn: null, version: 1, archivedAt: null },
-  unit: { id: 'u', name: 'Flat' }, property: { id: 'p', name: '1 Plumb Lane', yearBuilt: null },
-  survey: survey(), surveys: [], documents: [], items: [books], events: [], contents: judgeContents({ survey: survey(), documents: [], items: [books] }), abilities: ['edit attic'],
+  unit: { id: 'u', name: 'Flat' }, property: { id: 'p', name: '1 Plumb Lane', yearBuilt: null, codeBasis: null },
+  survey: survey(), surveys: [], documents: [], items: [books], events: [], itemPhotos: [], guesses: { count: 0, medianRatio: null }, contents: judgeContents({ survey: survey(), documents: [], items: [books] }), abilities: ['edit attic'],
 }
 function trialOf() {
   let trial!: ReturnType<typeof useTrialPlan>
