@@ -17,6 +17,8 @@ export function useReadingPhotos(unitId: string, { read = readablePhoto, send = 
   const pictures = new Map<string, Blob>()
   const shares = reactive<Record<string, number>>({})
   const previews = reactive<Record<string, string>>({})
+  /** What the camera's own clock said, of each photo the server has. */
+  const cameraTimes = reactive<Record<string, string | null>>({})
   const room = computed(() => MAX_PHOTOS_PER_REPORT - photos.value.length)
   const change = (localId: string, changes: Partial<DraftPhoto>) => {
     photos.value = photos.value.map(photo => photo.localId === localId ? { ...photo, ...changes } : photo)
@@ -25,7 +27,8 @@ export function useReadingPhotos(unitId: string, { read = readablePhoto, send = 
   async function upload({ localId, view }: DraftPhoto): Promise<boolean> {
     shares[localId] = 0
     try {
-      const { id } = await send(unitId, pictures.get(localId)!, view, (share) => { shares[localId] = share })
+      const { id, cameraTime } = await send(unitId, pictures.get(localId)!, view, (share) => { shares[localId] = share })
+      cameraTimes[localId] = cameraTime
       change(localId, { state: 'uploaded', photoId: id, problem: null })
       return true
     }
@@ -60,10 +63,11 @@ export function useReadingPhotos(unitId: string, { read = readablePhoto, send = 
   function remove(localId: string) {
     if (previews[localId]) URL.revokeObjectURL(previews[localId])
     Reflect.deleteProperty(previews, localId)
+    Reflect.deleteProperty(cameraTimes, localId)
     pictures.delete(localId)
     photos.value = photos.value.filter(photo => photo.localId !== localId)
   }
 
   onBeforeUnmount(() => Object.values(previews).forEach(address => URL.revokeObjectURL(address)))
-  return { photos, room, shares, previews, add, remove, uploadAll }
+  return { photos, room, shares, previews, cameraTimes, add, remove, uploadAll }
 }

@@ -47,3 +47,23 @@ export const MarkListQuery = z.strictObject({
 })
 
 export type MarkListValue = z.output<typeof MarkListQuery>
+
+export const MarkJoining = z.strictObject({
+  intoId: z.uuid('Which mark is it part of?'),
+  reason: shortText('Please say why, in a few words.', 500),
+  version,
+})
+export type MarkJoiningValue = z.output<typeof MarkJoining>
+
+const ids = z.array(id).max(500).default([]).transform(all => [...new Set(all)])
+
+export const MarkSplit = z.strictObject({
+  label: facts.label,
+  roomId: id,
+  pin: Pin,
+  readingIds: ids,
+  observationIds: ids,
+  reason: shortText('Please say why, in a few words.', 500),
+  version,
+}).refine(value => value.readingIds.length + value.observationIds.length > 0, { path: ['readingIds'], message: 'Choose what belongs to the other mark.' })
+export type MarkSplitValue = z.output<typeof MarkSplit>

@@ -93,6 +93,46 @@ export interface MarkPhoto extends PhotoRef { readingId: string | null, observat
 
 export interface MarkJob { id: string, number: number, title: string, state: string, dueOn: string, doneOn: string | null }
 
+/** One thing a person did with a mark, as the record has it. */
+export interface MarkDeed {
+  action: 'mark repaired' | 'mark reopened' | 'mark closed' | 'marks joined' | 'joining undone' | 'mark split'
+  recordedAt: string
+  actorName: string
+  happenedOn: string | null
+  reason: string | null
+}
+
+export interface MarkRepair { id: string, repairedOn: string, recordedAt: string, reason: string, recordedBy: string }
+
+export interface MarkJoining { markId: string, number: number, label: string, intoId: string, intoNumber: number, intoLabel: string, reason: string, joinedAt: string, joinedBy: string }
+
+/** A mark as its ceiling shows it. */
+export interface CeilingMark {
+  id: string
+  number: number
+  label: string
+  kind: MarkKind
+  state: MarkState
+  activity: Activity
+  roomId: string
+  roomName: string
+  pinX: number
+  pinY: number
+  lastValue: number | null
+  lastReadOn: string | null
+  nextReadingOn: string | null
+  version: number
+}
+
+/** Everything GET /api/units/[unitId]/ceilings answers. */
+export interface UnitCeilings {
+  unit: { id: string, name: string, propertyName: string }
+  rooms: { id: string, name: string, lengthFt: number | null, widthFt: number | null }[]
+  marks: CeilingMark[]
+  abilities: string[]
+  today: string
+}
+
 /** Everything GET /api/marks/[markId] answers. */
 export interface MarkPage {
   mark: MarkFacts
@@ -100,7 +140,7 @@ export interface MarkPage {
   unit: { id: string, name: string }
   property: { id: string, name: string, yearBuilt: number | null }
   attic: { id: string, name: string } | null
-  rooms: { id: string, name: string }[]
+  rooms: { id: string, name: string, lengthFt: number | null, widthFt: number | null }[]
   /** Oldest first, every segment. */
   readings: ReadingRow[]
   /** Of the newest segment. */
@@ -111,6 +151,12 @@ export interface MarkPage {
   reports: ReportRow[]
   photos: MarkPhoto[]
   jobs: MarkJob[]
+  repairs: MarkRepair[]
+  deeds: MarkDeed[]
+  joinedInto: MarkJoining | null
+  joinedFrom: MarkJoining[]
+  /** Every mark of the home, this one among them, but those that count as part of another. */
+  ceilingMarks: CeilingMark[]
   abilities: string[]
   today: string
   timeZone: string

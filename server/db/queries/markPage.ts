@@ -12,8 +12,10 @@ import { notFound } from '../../utils/problems'
 import { abilitiesOf } from '../../utils/policy'
 import { findLatestSurvey } from './attics'
 import { findMarkFacts, findMarkSurroundings, listJobsOfMark, listLoadSteps, listRoomsOf } from './marks'
+import { listCeilingMarks, listJoinings, listMarkDeeds } from './markJoinings'
 import { listPhotosOfMark } from './photos'
 import { listReadings } from './readings'
+import { listRepairs } from './repairs'
 import { listReportsOfMark } from './observations'
 
 type Surroundings = NonNullable<Awaited<ReturnType<typeof findMarkSurroundings>>>
@@ -22,16 +24,17 @@ type Surroundings = NonNullable<Awaited<ReturnType<typeof findMarkSurroundings>>
 export async function findMarkPage(db: Db, actor: Actor, markId: string): Promise<MarkPage> {
   const [mark, around] = await Promise.all([findMarkFacts(db, markId), findMarkSurroundings(db, markId)])
   if (!mark || !around) throw notFound()
-  const [readings, reports, photos, jobs, rooms, loadSteps, survey] = await Promise.all([
+  const [readings, reports, photos, jobs, rooms, loadSteps, survey, repairs, deeds, joinings, ceilingMarks] = await Promise.all([
     listReadings(db, markId), listReportsOfMark(db, markId), listPhotosOfMark(db, markId), listJobsOfMark(db, markId), listRoomsOf(db, mark.unitId),
     mark.atticId ? listLoadSteps(db, mark.atticId) : [], mark.atticId ? findLatestSurvey(db, mark.atticId) : undefined,
+    listRepairs(db, markId), listMarkDeeds(db, markId), listJoinings(db, markId), listCeilingMarks(db, mark.unitId),
   ])
   const first = reports.at(-1)?.answers
   const wallType = first?.wallType ?? null
   const points = measuredIn(readings, mark.segment)
   const trend = trendOf(mark, around, points, wallType, survey?.answers.framing ?? null)
   return {
-    mark, readings, trend, loadSteps, reports, photos, jobs, rooms,
+    mark, readings, trend, loadSteps, reports, photos, jobs, rooms, repairs, deeds, ...joinings, ceilingMarks,
     room: { id: around.roomId, name: around.roomName, lengthFt: around.lengthFt, widthFt: around.widthFt },
     unit: { id: around.unitId, name: around.unitName },
     property: { id: around.propertyId, name: around.propertyName, yearBuilt: around.yearBuilt },

@@ -85,7 +85,7 @@ const markSurroundings = compiledOnce((db, { id }: { id: string }) =>
 export const findMarkSurroundings = (db: Db, id: string) => markSurroundings.first(db, { id })
 
 const roomsInUse = compiledOnce((db, { unitId }: { unitId: string }) =>
-  db.selectFrom('room').select(['id', 'name']).where('unitId', '=', unitId).where('archivedAt', 'is', null).orderBy('sort').orderBy('id'))
+  db.selectFrom('room').select(['id', 'name', 'lengthFt', 'widthFt']).where('unitId', '=', unitId).where('archivedAt', 'is', null).orderBy('sort').orderBy('id'))
 
 export const listRoomsOf = (db: Db, unitId: string) => roomsInUse.rows(db, { unitId })
 

@@ -19,6 +19,7 @@ const reading = (takenOn: string, value: number | null, segment = 1): ReadingRow
   firstValue: null, secondValue: null, lengthMm: null, spanMm: null, tip: null, tipPastMm: null, photo: null, stationsMm: null, sinceSet: null, wroteFirst: null, askedAgainstUsual: null, phoneAt: null, cameraOn: null, fromMark: null,
   stainState: null, reportId: null, couldNotMeasureReason: null, note: '',
 })
+const readBy = (method: ReadingRow['method']) => ({ ...reading('2026-01-01', 1.5), method })
 
 describe('a mark in words', () => {
   it('says that it cannot tell yet, when, and that a reading is late', () => {
@@ -61,13 +62,13 @@ describe('a mark in words', () => {
 
 describe('the form of a reading', () => {
   it('offers last time\'s way first where it suits', () => {
-    expect(firstValues('crack', '2026-01-01', 'calipers').method).toBe('calipers')
-    expect(firstValues('crack', '2026-01-01', 'could-not-measure').method).toBe('coin-or-card')
-    expect(firstValues('nail-pops', '2026-01-01', undefined).method).toBe('count')
+    expect(firstValues('crack', '2026-01-01', [readBy('calipers')]).method).toBe('calipers')
+    expect(firstValues('crack', '2026-01-01', [reading('2026-01-01', null)]).method).toBe('coin-or-card')
+    expect(firstValues('nail-pops', '2026-01-01', []).method).toBe('count')
   })
 
   it('sends nothing left over from another way', () => {
-    const values = { ...firstValues('crack', '2026-01-01', 'ruler'), value: 2, atLeast: 0.76, atMost: 1.35, reason: 'dark' }
+    const values = { ...firstValues('crack', '2026-01-01', [readBy('ruler')]), value: 2, atLeast: 0.76, atMost: 1.35, reason: 'dark' }
     expect(withoutLeftovers(values)).toMatchObject({ value: 2, atLeast: null, atMost: null, reason: null })
     expect(withoutLeftovers({ ...values, method: 'coin-or-card' })).toMatchObject({ value: null, atLeast: 0.76, atMost: 1.35 })
     expect(withoutLeftovers({ ...values, method: 'could-not-measure' })).toMatchObject({ value: null, atLeast: null, reason: 'dark' })
