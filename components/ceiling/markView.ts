@@ -10,19 +10,13 @@ import { formatDay } from '#shared/utils/days'
 import type { UnitSystem } from '#shared/utils/units'
 
 /** The readings that have a number, repairs as breaks, and the load above, as the chart and its table take them. */
-export function chartDataOf({ readings, mark, trend, loadSteps }: Pick<MarkPage, 'readings' | 'mark' | 'trend' | 'loadSteps'>): MarkChartData {
+export function chartDataOf({ readings, trend, loadSteps, repairs }: Pick<MarkPage, 'readings' | 'trend' | 'loadSteps' | 'repairs'>): MarkChartData {
   return {
     readings: readings.flatMap(({ takenOn, value, sigma, segment }) => value !== null && sigma !== null ? [{ takenOn, value, sigma, segment }] : []),
     trend: trend.kind === 'measured' ? trend : null,
-    repairs: repairsOf(readings, mark.segment),
+    repairs: repairs.map(({ repairedOn }) => ({ on: repairedOn, label: 'Repair' })),
     loadSteps: loadSteps.map(step => ({ on: step.on, weightLb: step.totalLb })),
   }
-}
-
-/** A repair stands at the first reading of the segment it began; the newest may have no reading yet. */
-function repairsOf(readings: MarkPage['readings'], newest: number): { on: string, label: string }[] {
-  return Array.from({ length: newest - 1 }, (_, i) => readings.find(reading => reading.segment === i + 2)?.takenOn)
-    .flatMap(on => on === undefined ? [] : [{ on, label: 'Repair' }])
 }
 
 export interface MarkVerdictWords { word: string, tone: MarkTone, says: string, number?: string, why: string, doNow?: string }
@@ -32,6 +26,7 @@ export function markVerdict({ mark, trend, today }: Pick<MarkPage, 'mark' | 'tre
   const due = mark.nextReadingOn
   const doNow = mark.state === 'closed' || !due ? undefined : due < today ? `A reading was due on ${formatDay(due)}. Take it, or say that it cannot be taken.` : `Next reading ${formatDay(due)}.`
   const why = trendSentence(trend, mark.kind, system)
+  if (mark.joinedInto) return { word: 'Joined', tone: 'unknown', says: ': it counts as part of another mark.', why: 'Its readings, photos and reports stand there.' }
   if (mark.state === 'closed') return { word: 'Closed', tone: 'unknown', says: ': this mark is no longer followed.', why }
   if (mark.state === 'repaired') return { word: 'Repaired', tone: 'unknown', says: ': readings start anew. What was there before stays on record.', why, doNow }
   const head = { word: ACTIVITY_WORDS[mark.activity], tone: activityTone(mark.activity), why, doNow }

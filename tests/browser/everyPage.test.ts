@@ -58,6 +58,7 @@ const PAGES: Record<string, Sample[]> = {
   'settings/reviews.vue': one('maren', '/settings/reviews'),
   'sign-in.vue': one('nobody', '/sign-in'),
   'sign-up.vue': one('nobody', '/sign-up'),
+  'units/[unitId]/ceilings.vue': both('/units/:unit/ceilings'),
   'units/[unitId]/edit.vue': one('maren', '/units/:unit/edit'),
   'units/[unitId]/index.vue': [{ who: 'maren', path: '/units/:unit' }, { who: 'ines', path: '/units/:cottage' }],
   'units/[unitId]/paper-report.vue': one('maren', '/units/:unit/paper-report'),

@@ -11,7 +11,7 @@ export const ACTIVITY_WORDS: Record<Activity, string> = {
   'too-few-readings': 'Too few readings', 'dormant': 'Dormant', 'watch': 'Watch', 'active': 'Active',
 }
 
-const MOVES: Record<MarkKind, { up: string, down: string }> = {
+export const MOVES: Record<MarkKind, { up: string, down: string }> = {
   'crack': { up: 'Widening', down: 'Closing' },
   'nail-pops': { up: 'More pops', down: 'Fewer pops' },
   'sag': { up: 'Dropping', down: 'Rising' },
@@ -38,7 +38,7 @@ function tooFewSentence(trend: TooFewReadings): string {
   return `${have}${missing}${until}. Until then nobody can tell whether it moves.`
 }
 
-function rangeSentence(trend: MeasuredTrend, kind: MarkKind, system: UnitSystem): string {
+export function rangeSentence(trend: MeasuredTrend, kind: MarkKind, system: UnitSystem): string {
   const [low, high] = trend.interval
   return `Between ${rateWords(kind, low, system)} and ${rateWords(kind, high, system)}, from ${countWords(trend.readingCount, 'reading')} over ${spanWords(trend.spanDays)}.`
 }

@@ -33,8 +33,8 @@ export function refusedReadingSentence(kind: MarkKind, why: ReadingRefusal | Siz
     case 'photo-point-outside': return 'One of the points is outside the photo.'
     case 'since-set-not-here': return 'A setting goes with calipers on pins or a tell-tale.'
     case 'since-set-below-zero': return 'With these numbers the width would be below 0 or beyond belief. Please look at them again.'
-    case 'check-ruler-not-here': return 'The check ruler goes with the printed gauge card.'
-    case 'card-misprinted': return 'The check ruler should measure about 100 mm. This card was printed at a wrong size: print it again at 100 %.'
+    case 'check-ruler-not-here': return 'The check line goes with the printed gauge card.'
+    case 'card-misprinted': return 'The check line has to be 100 mm long, to one in a hundred. This card was printed at a wrong size: do not use it, print it again at 100 %.'
     case 'range-upside-down': return 'The thicker one must be thicker than the thinner one.'
   }
 }

@@ -53,9 +53,9 @@ describe('a mark in words', () => {
   })
 
   it('draws measured readings only, and a break where a repair began', () => {
-    const data = chartDataOf({ mark: mark({ segment: 2 }), readings: [reading('2026-01-01', 1), reading('2026-01-08', null), reading('2026-02-01', 0.2, 2)], trend: markTrend([]), loadSteps: [{ on: '2026-01-05', totalLb: 80 }] })
+    const data = chartDataOf({ repairs: [{ id: 'r', repairedOn: '2026-01-20', recordedAt: '2026-01-20T00:00:00Z', reason: 'Filled', recordedBy: 'Invented' }], readings: [reading('2026-01-01', 1), reading('2026-01-08', null), reading('2026-02-01', 0.2, 2)], trend: markTrend([]), loadSteps: [{ on: '2026-01-05', totalLb: 80 }] })
     expect(data.readings).toHaveLength(2)
-    expect(data.repairs).toEqual([{ on: '2026-02-01', label: 'Repair' }])
+    expect(data.repairs).toEqual([{ on: '2026-01-20', label: 'Repair' }])
     expect(data.loadSteps).toEqual([{ on: '2026-01-05', weightLb: 80 }])
   })
 })
