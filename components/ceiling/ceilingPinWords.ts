@@ -28,3 +28,19 @@ export function movePinByKey(pin: CeilingPin, key: string): CeilingPin | null {
   const step = steps[key]
   return step ? clampPin({ xShare: pin.xShare + step[0] * stepShare, yShare: pin.yShare + step[1] * stepShare }) : null
 }
+
+/** Closer than this, a finger cannot tell two pins apart on a phone. */
+const apartShare = 0.1
+
+/** Pins that stand on each other are drawn beside each other; words and records keep the true place. */
+export function spreadPins<T extends { pin: CeilingPin }>(marks: readonly T[]): T[] {
+  const placed: T[] = []
+  for (const mark of marks) {
+    let pin = mark.pin
+    for (let tries = 0; tries < 9 && placed.some(other => Math.hypot(other.pin.xShare - pin.xShare, other.pin.yShare - pin.yShare) < apartShare); tries++) {
+      pin = { ...pin, xShare: pin.xShare + 0.13 > 0.97 ? 0.06 : pin.xShare + 0.13 }
+    }
+    placed.push({ ...mark, pin })
+  }
+  return placed
+}

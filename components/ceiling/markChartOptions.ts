@@ -23,6 +23,18 @@ function frame(id: string, heightPx: number, colours: ChartColours, range: { min
   }
 }
 
+const noteLabel = (text: string, color: string, colours: ChartColours) =>
+  ({ text, borderWidth: 0, style: { background: colours.paper, color, fontSize: '13px', fontFamily: font } })
+
+/** Words near an end of the axis stay inside the drawing. */
+function anchorAt(x: number, { min, max }: { min: number, max: number }): 'start' | 'middle' | 'end' {
+  const share = (x - min) / (max - min)
+  return share < 0.25 ? 'start' : share > 0.75 ? 'end' : 'middle'
+}
+
+const jumps = ({ readings, suddenOn }: MarkChartData) =>
+  readings.filter(({ takenOn }) => takenOn === suddenOn).map(({ takenOn, value }) => ({ x: timeOf(takenOn), y: value }))
+
 /** Readings with their error, the trend with its band, repairs as breaks. */
 export function readingsChart(data: MarkChartData, colours: ChartColours, strong: boolean): { options: ApexOptions, series: ChartSeries } {
   const trendColour = strong ? colours.madder : colours.graphite
@@ -42,10 +54,16 @@ export function readingsChart(data: MarkChartData, colours: ChartColours, strong
     markers: { size: each(name => (name === 'Reading' ? 5 : 0)), shape: 'square', colors: [colours.paper], strokeColors: colours.ink, strokeWidth: 1.5, hover: { sizeOffset: 0 } },
     xaxis: { ...base.xaxis, labels: { ...base.xaxis?.labels, show: (data.loadSteps ?? []).length === 0 } },
     yaxis: { min: 0, forceNiceScale: true, tickAmount: 4, labels: { minWidth: axisPx, maxWidth: axisPx, style: { fontSize: '13px' }, formatter: value => formatNumber(value, 1) } },
-    annotations: { xaxis: (data.repairs ?? []).map(repair => ({
-      x: timeOf(repair.on), strokeDashArray: 4, borderColor: colours.ochre,
-      label: { text: `${repair.label}, ${formatDay(repair.on)}`, orientation: 'horizontal', borderWidth: 0, style: { background: colours.paper, color: colours.ochre, fontSize: '13px', fontFamily: font } },
-    })) },
+    annotations: {
+      xaxis: (data.repairs ?? []).map(repair => ({
+        x: timeOf(repair.on), strokeDashArray: 4, borderColor: colours.ochre,
+        label: { ...noteLabel(`${repair.label}, ${formatDay(repair.on)}`, colours.ochre, colours), orientation: 'horizontal', textAnchor: anchorAt(timeOf(repair.on), timeRange(data)) },
+      })),
+      points: jumps(data).map(({ x, y }) => ({
+        x, y, marker: { size: 7, fillColor: colours.madder, strokeColor: colours.madder, shape: 'square' },
+        label: { ...noteLabel('jumped', colours.madder, colours), textAnchor: anchorAt(x, timeRange(data)), offsetX: -10 },
+      })),
+    },
   }
   return { options, series: series as ChartSeries }
 }

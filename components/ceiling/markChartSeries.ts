@@ -6,6 +6,8 @@ export interface MarkChartData {
   /** The measured trend of the newest segment, as markTrend gives it; null while there is none. */
   trend?: { slopePerYear: number, interval: readonly [number, number], levelAtStart: number, startOn: string, endOn: string } | null
   repairs?: readonly { on: string, label: string }[]
+  /** The day of the newest reading, where it jumped. */
+  suddenOn?: string | null
   /** Weight above from that day on. */
   loadSteps?: readonly { on: string, weightLb: number }[]
 }

@@ -2,7 +2,8 @@ import type { MarkChartData } from './markChartSeries'
 import { activityTone } from './activityTone'
 import type { MarkTone } from '../house/sectionTypes'
 import type { MarkPage } from '#shared/types/markPage'
-import { ACTIVITY_WORDS, rateWords, trendSentence } from '#shared/utils/messages/activityMessages'
+import { ACTIVITY_WORDS, rateWords } from '#shared/utils/messages/activityMessages'
+import { movementSentence } from '#shared/utils/messages/movementSentence'
 import { widthClass } from '#shared/utils/movement/widthClass'
 import { DIRECTION_WORDS, MARK_KIND_WORDS, MARK_PLACE_WORDS, MARK_SHAPE_WORDS, STAIN_STATE_WORDS, widthClassSentence } from '#shared/utils/messages/markMessages'
 import { readingWords } from '#shared/utils/messages/readingMessages'
@@ -15,6 +16,7 @@ export function chartDataOf({ readings, trend, loadSteps, repairs }: Pick<MarkPa
     readings: readings.flatMap(({ takenOn, value, sigma, segment }) => value !== null && sigma !== null ? [{ takenOn, value, sigma, segment }] : []),
     trend: trend.kind === 'measured' ? trend : null,
     repairs: repairs.map(({ repairedOn }) => ({ on: repairedOn, label: 'Repair' })),
+    suddenOn: trend.sudden?.takenOn ?? null,
     loadSteps: loadSteps.map(step => ({ on: step.on, weightLb: step.totalLb })),
   }
 }
@@ -22,13 +24,14 @@ export function chartDataOf({ readings, trend, loadSteps, repairs }: Pick<MarkPa
 export interface MarkVerdictWords { word: string, tone: MarkTone, says: string, number?: string, why: string, doNow?: string }
 
 /** One word, one number, one sentence why, one thing to do. */
-export function markVerdict({ mark, trend, today }: Pick<MarkPage, 'mark' | 'trend' | 'today'>, system: UnitSystem): MarkVerdictWords {
+export function markVerdict({ mark, trend, today, loadLinks }: Pick<MarkPage, 'mark' | 'trend' | 'today' | 'loadLinks'>, system: UnitSystem): MarkVerdictWords {
   const due = mark.nextReadingOn
   const doNow = mark.state === 'closed' || !due ? undefined : due < today ? `A reading was due on ${formatDay(due)}. Take it, or say that it cannot be taken.` : `Next reading ${formatDay(due)}.`
-  const why = trendSentence(trend, mark.kind, system)
+  const why = movementSentence(trend, loadLinks, mark.kind, system)
   if (mark.joinedInto) return { word: 'Joined', tone: 'unknown', says: ': it counts as part of another mark.', why: 'Its readings, photos and reports stand there.' }
   if (mark.state === 'closed') return { word: 'Closed', tone: 'unknown', says: ': this mark is no longer followed.', why }
   if (mark.state === 'repaired') return { word: 'Repaired', tone: 'unknown', says: ': readings start anew. What was there before stays on record.', why, doNow }
+  if (trend.sudden && mark.activity !== 'active') return { word: 'Sudden', tone: 'active', says: ': the newest reading jumped to', number: `${readingWords(mark.kind, trend.sudden.value, system)}.`, why, doNow }
   const head = { word: ACTIVITY_WORDS[mark.activity], tone: activityTone(mark.activity), why, doNow }
   if (trend.kind !== 'measured') return { ...head, says: ': we cannot tell yet whether it moves.' }
   if (trend.activity === 'dormant') return { ...head, says: ': it has kept still for a year or more.' }

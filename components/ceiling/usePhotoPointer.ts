@@ -27,6 +27,7 @@ export function usePhotoPointer({ view, picture, frame, place, points, onTap, on
   let moved = false
 
   function down(event: PointerEvent) {
+    if (picture().width === 0) return
     const at = place(event)
     fingers.set(event.pointerId, at)
     ;(event.currentTarget as Element).setPointerCapture(event.pointerId)
@@ -67,10 +68,13 @@ export function usePhotoPointer({ view, picture, frame, place, points, onTap, on
   function up(event: PointerEvent) {
     const at = fingers.get(event.pointerId)
     fingers.delete(event.pointerId)
-    if (at && !moved && fingers.size === 0 && event.type === 'pointerup' && held.value === null) onTap(toPicture(view.value, at))
     const chosen = held.value
     if (fingers.size === 0) held.value = null
-    return moved ? null : chosen
+    if (!at || moved || fingers.size > 0 || event.type !== 'pointerup') return null
+    // The other edge of a fine crack lies closer than a finger is wide: half a pair is always completed by a tap.
+    if (chosen !== null && points.value.length % 2 === 0) return chosen
+    onTap(toPicture(view.value, at))
+    return null
   }
 
   return { held, down, move, up }

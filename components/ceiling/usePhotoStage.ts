@@ -13,11 +13,15 @@ export function usePhotoStage() {
   const chosen = ref<number | null>(null)
   const said = ref('')
 
+  /** Until the picture has come there is nothing to point at. */
+  const ready = computed(() => picture.value.width > 0)
+
   const place = (event: PointerEvent) => {
     const { left, top } = stage.value!.getBoundingClientRect()
     return { x: event.clientX - left, y: event.clientY - top }
   }
   function add(point: PixelPoint) {
+    if (!ready.value) return
     points.value = [...points.value, clampPoint(point, picture.value)]
     chosen.value = points.value.length - 1
     said.value = `${pointName(chosen.value)} set.`
@@ -36,8 +40,8 @@ export function usePhotoStage() {
 
   const middle = () => ({ x: frame.value.width / 2, y: frame.value.height / 2 })
   const chosenAt = computed(() => chosen.value === null ? null : toFrame(view.value, points.value[chosen.value]!))
-  const zoomBy = (times: number) => view.value = zoomAbout(view.value, times, chosenAt.value ?? middle(), picture.value, frame.value)
-  const whole = () => view.value = wholePhoto(picture.value, frame.value)
+  const zoomBy = (times: number) => ready.value && (view.value = zoomAbout(view.value, times, chosenAt.value ?? middle(), picture.value, frame.value))
+  const whole = () => ready.value && (view.value = wholePhoto(picture.value, frame.value))
 
   /** Whether the key meant something here. */
   function press(key: string, far = false): boolean {
@@ -57,7 +61,7 @@ export function usePhotoStage() {
   function fit() {
     if (!stage.value) return
     frame.value = { width: stage.value.clientWidth, height: stage.value.clientHeight }
-    if (picture.value.width > 0) whole()
+    whole()
   }
   function loaded(event: Event) {
     const { naturalWidth, naturalHeight } = event.target as HTMLImageElement
@@ -70,5 +74,5 @@ export function usePhotoStage() {
   })
   onBeforeUnmount(() => window.removeEventListener('resize', fit))
 
-  return { stage, picture, frame, view, points, chosen, chosenAt, said, pointer, lift, zoomBy, whole, press, keydown, loaded, takeBack }
+  return { stage, ready, picture, frame, view, points, chosen, chosenAt, said, pointer, lift, zoomBy, whole, press, keydown, loaded, takeBack }
 }

@@ -4,6 +4,7 @@ import type { LoadLink } from '../movement/loadLink'
 import { TWELVE_MONTHS_DAYS } from '../movement/series'
 import type { MarkTrend, MeasuredTrend } from '../movement/trend'
 import { formatWeight, type UnitSystem } from '../units'
+import { readingWords } from './readingMessages'
 import { countWords, MOVES, rateWords, trendSentence } from './activityMessages'
 
 /** As in seasonFit: fewer readings cannot tell a season from growth. */
@@ -33,8 +34,16 @@ function seasonPart(trend: MeasuredTrend): string | null {
   return fullYearOn > trend.endOn ? `a season cannot be ruled out before ${formatDay(fullYearOn)}${more}` : `a season cannot be ruled out without${more ? more.slice(4) : ' readings spread over the year'}`
 }
 
+/** The newest reading jumped: that goes before any trend but one that is sure already. */
+function suddenPart({ sudden }: MarkTrend, kind: MarkKind, system: UnitSystem): string | null {
+  return sudden && `Jumped from about ${readingWords(kind, sudden.baseline, system)} to ${readingWords(kind, sudden.value, system)}, read on ${formatDay(sudden.takenOn)}`
+}
+
 /** What moves, since when that is sure, what it followed, and what cannot be told yet: one sentence. */
 export function movementSentence(trend: MarkTrend, links: readonly LoadLink[], kind: MarkKind, system: UnitSystem = 'us'): string {
-  if (trend.kind === 'too few readings') return trendSentence(trend, kind, system)
-  return `${[movementPart(trend, kind, system), loadPart(links, system), seasonPart(trend)].filter(Boolean).join('; ')}.`
+  const sudden = suddenPart(trend, kind, system)
+  if (trend.kind === 'too few readings') return [sudden && `${sudden}.`, trendSentence(trend, kind, system)].filter(Boolean).join(' ')
+  const parts = [movementPart(trend, kind, system), loadPart(links, system), seasonPart(trend)].filter(Boolean).join('; ')
+  if (sudden && trend.activity === 'active') return `${parts}. ${sudden}.`
+  return sudden ? `${sudden}. Before that and with it: ${parts.charAt(0).toLowerCase()}${parts.slice(1)}.` : `${parts}.`
 }

@@ -1,5 +1,6 @@
 import type { MarkKind, ReadingMethod } from '../../types/mark'
 import type { PhotoMeasure, SinceSet } from '../../types/readingDetail'
+import { CHECK_LENGTHS, gaugeCheck } from '../papers/gaugeCard'
 import { measureReading, MOST_VALUE, type GivenReading, type MeasuredReading } from './measureReading'
 import { LEAST_STATIONS, lengthPx, photoWidth } from './photoScale'
 import { personSigma } from './readingSigma'
@@ -10,7 +11,7 @@ export interface FullReading extends GivenReading {
   second: number | null
   sinceSet: SinceSet | null
   photo: PhotoMeasure | null
-  /** What the 100 mm check ruler of the printed card really measures. */
+  /** What the 100 mm check line of the printed card really measures. */
   checkRulerMm: number | null
 }
 
@@ -20,10 +21,6 @@ export type ReadingSize
   = | (Extract<MeasuredReading, { kind: 'measured' }> & { first: number | null, second: number | null, stationsMm: number[] | null })
     | Extract<MeasuredReading, { kind: 'refused' }>
     | { kind: 'refused', field: 'second' | 'photo' | 'sinceSet' | 'checkRulerMm', why: SizeRefusal }
-
-export const CHECK_RULER_MM = 100
-/** Ours: a card printed this far off was scaled by the printer's own wish, and a ruler was misread beyond it. */
-export const CHECK_RULER_RANGE_MM = [90, 110] as const
 
 const refused = (field: 'second' | 'photo' | 'sinceSet' | 'checkRulerMm', why: SizeRefusal) => ({ kind: 'refused', field, why } as const)
 
@@ -48,14 +45,13 @@ function unfitParts({ method, sinceSet, checkRulerMm }: FullReading) {
   if (sinceSet && method !== 'calipers' && method !== 'tell-tale') return refused('sinceSet', 'since-set-not-here')
   if (checkRulerMm === null) return null
   if (method !== 'gauge-card') return refused('checkRulerMm', 'check-ruler-not-here')
-  const [least, most] = CHECK_RULER_RANGE_MM
-  return checkRulerMm >= least && checkRulerMm <= most ? null : refused('checkRulerMm', 'card-misprinted')
+  return gaugeCheck(checkRulerMm, 'mm').kind === 'true' ? null : refused('checkRulerMm', 'card-misprinted')
 }
 
 /** Pins and tell-tales show the change since they were set; a card that came out too large has thicker lines than it says. */
 function oneValue({ sinceSet, checkRulerMm }: FullReading, value: number | null): number | null {
   if (sinceSet) return sinceSet.widthWhenSetMm + sinceSet.nowMm - sinceSet.setMm
-  return value !== null && checkRulerMm !== null ? value * checkRulerMm / CHECK_RULER_MM : value
+  return value !== null && checkRulerMm !== null ? value * checkRulerMm / CHECK_LENGTHS.mm : value
 }
 
 const WITH_PHOTO: readonly MarkKind[] = ['crack', 'stain']

@@ -23,21 +23,21 @@ const readBy = (method: ReadingRow['method']) => ({ ...reading('2026-01-01', 1.5
 
 describe('a mark in words', () => {
   it('says that it cannot tell yet, when, and that a reading is late', () => {
-    const words = markVerdict({ mark: mark(), trend: markTrend([{ takenOn: '2026-01-01', value: 1, sigma: 0.4 }]), today: '2026-02-02' }, 'us')
+    const words = markVerdict({ mark: mark(), trend: markTrend([{ takenOn: '2026-01-01', value: 1, sigma: 0.4 }]), today: '2026-02-02', loadLinks: [] }, 'us')
     expect(words).toMatchObject({ word: 'Too few readings', tone: 'unknown', says: expect.stringContaining('cannot tell yet'), doNow: expect.stringContaining('was due on 1\u00A0Feb\u00A02026') })
   })
 
   it('gives the rate of one that moves, and no rate of one that keeps still', () => {
     const series = (perMonth: number) => markTrend(Array.from({ length: 14 }, (_, i) => ({ takenOn: addDays('2025-01-01', 30 * i), value: 1 + perMonth * i, sigma: 0.1 })))
-    expect(markVerdict({ mark: mark({ activity: 'active' }), trend: series(1), today: '2026-01-02' }, 'metric')).toMatchObject({ word: 'Active', number: expect.stringMatching(/^12.2\smm a year\.$/) })
-    expect(markVerdict({ mark: mark({ activity: 'dormant' }), trend: series(0), today: '2026-01-02' }, 'us').number).toBeUndefined()
+    expect(markVerdict({ mark: mark({ activity: 'active' }), trend: series(1), today: '2026-01-02', loadLinks: [] }, 'metric')).toMatchObject({ word: 'Active', number: expect.stringMatching(/^12.2\smm a year\.$/) })
+    expect(markVerdict({ mark: mark({ activity: 'dormant' }), trend: series(0), today: '2026-01-02', loadLinks: [] }, 'us').number).toBeUndefined()
   })
 
   it('knows repaired and closed', () => {
     const trend = markTrend([])
-    expect(markVerdict({ mark: mark({ state: 'repaired' }), trend, today: '2026-01-02' }, 'us').word).toBe('Repaired')
-    expect(markVerdict({ mark: mark({ state: 'closed' }), trend, today: '2030-01-02' }, 'us')).toMatchObject({ word: 'Closed' })
-    expect(markVerdict({ mark: mark({ state: 'closed' }), trend, today: '2030-01-02' }, 'us').doNow).toBeUndefined()
+    expect(markVerdict({ mark: mark({ state: 'repaired' }), trend, today: '2026-01-02', loadLinks: [] }, 'us').word).toBe('Repaired')
+    expect(markVerdict({ mark: mark({ state: 'closed' }), trend, today: '2030-01-02', loadLinks: [] }, 'us')).toMatchObject({ word: 'Closed' })
+    expect(markVerdict({ mark: mark({ state: 'closed' }), trend, today: '2030-01-02', loadLinks: [] }, 'us').doNow).toBeUndefined()
   })
 
   it('never shows the width class without its caveat, nor for what is no crack', () => {

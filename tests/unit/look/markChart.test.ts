@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { activityTone } from '../../../components/ceiling/activityTone'
-import { ceilingPinWords, clampPin, movePinByKey } from '../../../components/ceiling/ceilingPinWords'
+import { ceilingPinWords, clampPin, movePinByKey, spreadPins } from '../../../components/ceiling/ceilingPinWords'
 import { loadChart, readingsChart } from '../../../components/ceiling/markChartOptions'
 import { errorBars, loadLine, readingPoints, timeOf, timeRange, trendBand, trendLine } from '../../../components/ceiling/markChartSeries'
 import { shapeDrawing } from '../../../shared/utils/report/shapeDrawings'
@@ -15,6 +15,17 @@ const readings = [
 ]
 const trend = { slopePerYear: 1, interval: [0.5, 2] as [number, number], levelAtStart: 1, startOn: '2026-01-01', endOn: '2027-01-01' }
 const colours = { paper: '#faf6ee', rule: '#d3c8b4', ink: '#1e282d', graphite: '#4d5b63', slate: '#2b5783', ochre: '#7f5200', madder: '#97291f' }
+
+describe('pins that stand on each other', () => {
+  it('are drawn apart, and the first stays where it is', () => {
+    const pins = spreadPins(Array.from({ length: 5 }, (_, i) => ({ id: i, pin: { xShare: 0.9, yShare: 0.2 } })))
+    expect(pins[0]!.pin).toEqual({ xShare: 0.9, yShare: 0.2 })
+    for (const [i, { pin }] of pins.entries()) {
+      expect(pin.xShare > 0 && pin.xShare < 1).toBe(true)
+      for (const other of pins.slice(i + 1)) expect(Math.hypot(pin.xShare - other.pin.xShare, pin.yShare - other.pin.yShare)).toBeGreaterThan(0.09)
+    }
+  })
+})
 
 describe('the chart of a mark', () => {
   it('draws the readings in the order they were taken', () => {
@@ -76,6 +87,12 @@ describe('the chart of a mark', () => {
     expect([top.options.xaxis?.min, top.options.xaxis?.max]).toEqual([under.options.xaxis?.min, under.options.xaxis?.max])
     expect(JSON.stringify(top.options.annotations).replaceAll('\u00A0', ' ')).toContain('Filled, 1 Jun 2026')
     expect(top.series.map(series => (series as { name: string }).name)).toEqual(['Range of the trend', 'Trend', 'Uncertainty', 'Reading'])
+  })
+
+  it('marks the reading that jumped', () => {
+    const { options } = readingsChart({ readings, suddenOn: '2026-12-31' }, colours, false)
+    expect(options.annotations?.points).toMatchObject([{ x: timeOf('2026-12-31'), y: 2, label: { text: 'jumped', textAnchor: 'end' } }])
+    expect(readingsChart({ readings }, colours, false).options.annotations?.points).toEqual([])
   })
 
   it('draws no trend while there is none', () => {
