@@ -6,6 +6,8 @@ export interface Size { width: number, height: number }
 
 /** Ours: closer than this a picture shows its squares and nothing more. */
 const MOST_ZOOM = 12
+/** A frame or a picture without any size must not divide by nothing. */
+const LEAST_ZOOM = 1e-4
 
 export const wholePhoto = (picture: Size, frame: Size): PhotoView => insideOf({ zoom: fitZoom(picture, frame), xPx: 0, yPx: 0 }, picture, frame)
 
@@ -13,7 +15,7 @@ const fitZoom = (picture: Size, frame: Size) => Math.min(frame.width / picture.w
 
 /** Never out of sight: the picture fills the frame, or stands in its middle where it is smaller. */
 export function insideOf({ zoom, xPx, yPx }: PhotoView, picture: Size, frame: Size): PhotoView {
-  const held = Math.min(MOST_ZOOM, Math.max(fitZoom(picture, frame), zoom))
+  const held = Math.max(LEAST_ZOOM, Math.min(MOST_ZOOM, Math.max(fitZoom(picture, frame), zoom)))
   const along = (at: number, whole: number, seen: number) => seen >= whole ? (whole - seen) / 2 : Math.min(whole - seen, Math.max(0, at))
   return { zoom: held, xPx: along(xPx, picture.width, frame.width / held), yPx: along(yPx, picture.height, frame.height / held) }
 }

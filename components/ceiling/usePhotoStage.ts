@@ -3,6 +3,8 @@ import type { PixelPoint } from '~/shared/types/readingDetail'
 import { clampPoint, nudge, pointName, toFrame, toPicture, wholePhoto, zoomAbout, type PhotoView, type Size } from './photoView'
 import { usePhotoPointer } from './usePhotoPointer'
 
+const isPoint = ({ xPx, yPx }: PixelPoint) => Number.isFinite(xPx) && Number.isFinite(yPx)
+
 /** A picture in a frame with points on it: by finger, mouse, buttons or keys. */
 export function usePhotoStage() {
   const stage = ref<HTMLElement>()
@@ -21,12 +23,13 @@ export function usePhotoStage() {
     return { x: event.clientX - left, y: event.clientY - top }
   }
   function add(point: PixelPoint) {
-    if (!ready.value) return
+    if (!ready.value || !isPoint(point)) return
     points.value = [...points.value, clampPoint(point, picture.value)]
     chosen.value = points.value.length - 1
     said.value = `${pointName(chosen.value)} set.`
   }
   function moveTo(index: number, point: PixelPoint) {
+    if (!isPoint(point)) return
     chosen.value = index
     points.value = points.value.map((old, i) => i === index ? clampPoint(point, picture.value) : old)
   }
@@ -59,12 +62,14 @@ export function usePhotoStage() {
   }
 
   function fit() {
-    if (!stage.value) return
+    // A frame without room (hidden, or just going away) has nothing to fit into.
+    if (!stage.value?.clientWidth || !stage.value.clientHeight) return
     frame.value = { width: stage.value.clientWidth, height: stage.value.clientHeight }
     whole()
   }
   function loaded(event: Event) {
     const { naturalWidth, naturalHeight } = event.target as HTMLImageElement
+    if (naturalWidth === 0 || naturalHeight === 0) return
     picture.value = { width: naturalWidth, height: naturalHeight }
     fit()
   }
