@@ -1,5 +1,3 @@
-import { CHECK_RULER_MM } from '../movement/readingSize'
-
 /** Our own gauge card: lines of known width that run out to the card's edge, and two lines of known length that show how it was printed. */
 
 /** Fine lines on one edge, coarse ones on the other. A printer's dot is about 0.04 mm at 600 dots an inch (arithmetic), so nothing is finer than 0.2 mm. */
@@ -7,7 +5,7 @@ export const FINE_LINES_MM = [0.2, 0.3, 0.4, 0.5, 0.6, 0.8, 1, 1.2, 1.5, 1.8] as
 export const COARSE_LINES_MM = [2, 2.5, 3, 3.5, 4, 5, 6, 8, 10] as const
 
 /** Lengths of the two check lines. */
-export const CHECK_LENGTHS = { mm: CHECK_RULER_MM, in: 4 } as const
+export const CHECK_LENGTHS = { mm: 100, in: 4 } as const
 export type CheckUnit = keyof typeof CHECK_LENGTHS
 
 /** Ours: within one part in a hundred a 10 mm line is out by less than half of what the eye tells apart on the card. */
