@@ -52,5 +52,5 @@ export const BASIS_WORDS: Record<RatingBasis, string> = {
   framing: 'from the kind of framing',
   class: 'from the class of attic in the code',
   joists: 'from what the joists take',
-  unverified: 'unverified, joists not measured',
+  unverified: 'unverified, joists not fully known',
 }
