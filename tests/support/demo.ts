@@ -17,7 +17,7 @@ const root = resolve(import.meta.dirname, '../..')
 export interface DemoServer extends TestServer {
   as: (who: 'maren' | 'otis' | 'tomas' | 'wanda' | 'bram' | 'ines') => Promise<Client>
   /** Ids of the demo that pages are addressed by. */
-  ids: Record<'property' | 'unit' | 'cottage' | 'cottageAttic' | 'attic' | 'item' | 'mark' | 'finding' | 'job' | 'observation' | 'notice', string>
+  ids: Record<'property' | 'unit' | 'cottage' | 'cottageAttic' | 'attic' | 'item' | 'mark' | 'finding' | 'job' | 'observation' | 'notice' | 'trial', string>
 }
 
 const ADDRESSES = { maren: 'maren@quillbrook.example', otis: 'otis@quillbrook.example', tomas: 'tomas@tenants.example', wanda: 'wanda@tenants.example', bram: 'bram@plaster.example', ines: 'ines@structures.example' } as const
@@ -66,7 +66,7 @@ async function findIds(url: string): Promise<DemoServer['ids']> {
     const notice = await db.selectFrom('keepClearNotice').select('id').where('unitId', '=', unit.id).executeTakeFirstOrThrow()
     return {
       notice: notice.id, cottage: cottage.id, cottageAttic: cottageAttic.id, property: unit.propertyId, unit: unit.id, attic: await one('attic'), item: await one('atticItem'),
-      mark: mark.id, finding: await one('finding'), job: await one('job'), observation: await one('observation'),
+      mark: mark.id, trial: (await db.selectFrom('unloadTrial').select('id').orderBy('id').limit(1).executeTakeFirstOrThrow()).id, finding: await one('finding'), job: await one('job'), observation: await one('observation'),
     }
   }
   finally {

@@ -12,34 +12,40 @@ import { abilitiesOf } from '../../utils/policy'
 import { findResponsePolicy } from './organisations'
 import { likeAnywhere, pageOf, readCursor } from '../../utils/cursor'
 import { visibleUnits, type Actor } from './actor'
+import { fallRiskOfSubject, riskRank } from './riskRank'
 
 const LIMIT = 50
 
 /** 0 is gravest. */
 const rank = sql<number>`array_position(array['urgent', 'attention', 'notice'], f.severity)`
+const risk = riskRank('f.rule')
+/** What could fall on whom, the heaviest first when counted upwards. */
+const lightness = sql<number>`-${fallRiskOfSubject('f.subject_id')}`
 const subjectLabel = sql<string>`case f.subject_kind when 'mark' then m.label when 'attic' then a.name when 'job' then j.title else u.name end`
 
 const fromFindings = (db: Db) =>
   db.selectFrom('finding as f').innerJoin('unit as u', 'u.id', 'f.unitId').innerJoin('property as p', 'p.id', 'u.propertyId')
     .leftJoin('mark as m', 'm.id', 'f.subjectId').leftJoin('attic as a', 'a.id', 'f.subjectId').leftJoin('job as j', 'j.id', 'f.subjectId')
     .leftJoin('appUser as w', 'w.id', 'f.acknowledgedBy')
-    .selectAll('f').select(['u.name as unitName', 'p.name as propertyName', 'm.id as markId', 'a.id as atticId', 'm.atticId as markAtticId', 'w.name as acknowledgedByName', subjectLabel.as('subjectLabel'), rank.as('rank')])
+    .selectAll('f').select(['u.name as unitName', 'p.name as propertyName', 'm.id as markId', 'a.id as atticId', 'm.atticId as markAtticId', 'w.name as acknowledgedByName', subjectLabel.as('subjectLabel'), rank.as('rank'), risk.as('risk'), lightness.as('lightness')])
 
 type Listed = Awaited<ReturnType<ReturnType<typeof fromFindings>['execute']>>[number]
 
-/** Gravest first, then the latest changed; keyset-paged. */
-export async function listFindings(db: Db, actor: Actor, { list, severity, unit, search, after }: z.output<typeof FindingsQuery>): Promise<Page<FindingRow>> {
-  const from = readCursor(after, ['number', 'text', 'id'])
+/** Gravest first, then by what could fall on whom, then what waits longest; keyset-paged. */
+export async function listFindings(db: Db, actor: Actor, { list, severity, rule, property, unit, search, after }: z.output<typeof FindingsQuery>): Promise<Page<FindingRow>> {
+  const from = readCursor(after, ['number', 'number', 'number', 'text', 'id'])
   const units = visibleUnits(actor)
   const rows = await inList(fromFindings(db), list)
     .where('f.organisationId', '=', actor.organisationId)
     .$if(units !== 'all', query => query.where('f.unitId', '=', sql<string>`any(${units}::uuid[])`))
     .$if(severity !== undefined, query => query.where('f.severity', '=', severity!))
+    .$if(rule !== undefined, query => query.where('f.rule', '=', rule!))
+    .$if(property !== undefined, query => query.where('u.propertyId', '=', property!))
     .$if(unit !== undefined, query => query.where('f.unitId', '=', unit!))
     .$if(Boolean(search), query => query.where(sql<boolean>`(p.name || ' ' || u.name || ' ' || coalesce(m.label, a.name, j.title, '')) ilike ${likeAnywhere(search!)}`))
-    .$if(from !== undefined, query => query.where(sql<boolean>`(${rank} > ${from![0]} or (${rank} = ${from![0]} and (f.changed_at, f.id) < (${from![1]}::timestamptz, ${from![2]}::uuid)))`))
-    .orderBy(rank).orderBy('f.changedAt', 'desc').orderBy('f.id', 'desc').limit(LIMIT + 1).execute()
-  const page = pageOf(rows, LIMIT, row => [row.rank, row.changedAt, row.id])
+    .$if(from !== undefined, query => query.where(sql<boolean>`(${rank}, ${risk}, ${lightness}, f.opened_at, f.id) > (${from![0]}, ${from![1]}, ${from![2]}::float8, ${from![3]}::timestamptz, ${from![4]}::uuid)`))
+    .orderBy(rank).orderBy(risk).orderBy(lightness).orderBy('f.openedAt').orderBy('f.id').limit(LIMIT + 1).execute()
+  const page = pageOf(rows, LIMIT, row => [row.rank, row.risk, row.lightness, row.openedAt, row.id])
   return { ...page, rows: page.rows.map(asFindingRow) }
 }
 

@@ -57,6 +57,28 @@ describe('GET /api/findings', () => {
     expect(new Set([...first.rows, ...second.rows].map(row => row.id)).size).toBe(60)
   })
 
+  it('of equal gravity and rule comes first what hangs heavier and higher over a bed, then what waits longest', async () => {
+    const other = await open.openHome()
+    const rooms = [['plaster-on-lath', 96, true], ['gypsum-half-inch', 96, false], ['plaster-on-lath', 120, true]] as const
+    const labels: string[] = []
+    for (const [n, [ceilingFinish, ceilingHeightIn, isBedroom]] of rooms.entries()) {
+      const mark = await addMark(open.db, other, { createdDaysAgo: 5 })
+      const roomId = newId()
+      await open.db.insertInto('room').values({ id: roomId, organisationId: other.organisationId, unitId: other.unitId, name: `Room ${n}`, sort: n, ceilingFinish, ceilingHeightIn, isBedroom, createdAt: new Date().toISOString() }).execute()
+      await open.db.updateTable('mark').set({ roomId, label: `Over ${n}` }).where('id', '=', mark).execute()
+      for (const [rule, day] of [['new-mark', 9], ['reading-overdue', 3]] as const) await open.db.insertInto('finding').values({
+        id: newId(), organisationId: other.organisationId, unitId: other.unitId, rule, subjectKind: 'mark', subjectId: mark, severity: 'notice', adviceCode: 'take-reading',
+        evidence: JSON.stringify({ dueOn: today(), daysLate: 1 }), openedAt: new Date(2026, 1, day - n).toISOString(), changedAt: new Date(2026, 1, 9).toISOString(),
+      }).execute()
+      labels.push(`Over ${n}`)
+    }
+    const shown = (await other.as.owner.get<Page>('/api/findings')).body.rows.map(row => [row.finding.rule, row.subjectLabel])
+    expect(shown).toEqual([...['new-mark', 'reading-overdue'].flatMap(rule => [labels[2], labels[0], labels[1]].map(label => [rule, label]))])
+    expect((await other.as.owner.get<Page>('/api/findings?rule=new-mark')).body.rows).toHaveLength(3)
+    expect((await other.as.owner.get<Page>(`/api/findings?property=${newId()}`)).body.rows).toEqual([])
+    expect((await other.as.owner.get('/api/findings?rule=nonsense')).status).toBe(422)
+  })
+
   it('refuses people signed out, roles without it, and unsound questions', async () => {
     expect((await home.as.nobody.get('/api/findings')).status).toBe(401)
     expect((await home.as.tenant.get('/api/findings')).status).toBe(403)
