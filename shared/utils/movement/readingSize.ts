@@ -1,6 +1,5 @@
 import type { MarkKind, ReadingMethod } from '../../types/mark'
 import type { PhotoMeasure, SinceSet } from '../../types/readingDetail'
-import { CHECK_LENGTHS, gaugeCheck } from '../papers/gaugeCard'
 import { measureReading, MOST_VALUE, type GivenReading, type MeasuredReading } from './measureReading'
 import { LEAST_STATIONS, lengthPx, photoWidth } from './photoScale'
 import { personSigma } from './readingSigma'
@@ -21,6 +20,11 @@ export type ReadingSize
   = | (Extract<MeasuredReading, { kind: 'measured' }> & { first: number | null, second: number | null, stationsMm: number[] | null })
     | Extract<MeasuredReading, { kind: 'refused' }>
     | { kind: 'refused', field: 'second' | 'photo' | 'sinceSet' | 'checkRulerMm', why: SizeRefusal }
+
+/** The check line of our printed card; papers/gaugeCard.ts draws it. */
+export const CHECK_RULER_MM = 100
+/** Ours, as printed on the card's sheet: beyond one part in a hundred it was printed at a wrong size and is not used. */
+export const CHECK_RULER_RANGE_MM = [99, 101] as const
 
 const refused = (field: 'second' | 'photo' | 'sinceSet' | 'checkRulerMm', why: SizeRefusal) => ({ kind: 'refused', field, why } as const)
 
@@ -45,13 +49,13 @@ function unfitParts({ method, sinceSet, checkRulerMm }: FullReading) {
   if (sinceSet && method !== 'calipers' && method !== 'tell-tale') return refused('sinceSet', 'since-set-not-here')
   if (checkRulerMm === null) return null
   if (method !== 'gauge-card') return refused('checkRulerMm', 'check-ruler-not-here')
-  return gaugeCheck(checkRulerMm, 'mm').kind === 'true' ? null : refused('checkRulerMm', 'card-misprinted')
+  return checkRulerMm >= CHECK_RULER_RANGE_MM[0] && checkRulerMm <= CHECK_RULER_RANGE_MM[1] ? null : refused('checkRulerMm', 'card-misprinted')
 }
 
 /** Pins and tell-tales show the change since they were set; a card that came out too large has thicker lines than it says. */
 function oneValue({ sinceSet, checkRulerMm }: FullReading, value: number | null): number | null {
   if (sinceSet) return sinceSet.widthWhenSetMm + sinceSet.nowMm - sinceSet.setMm
-  return value !== null && checkRulerMm !== null ? value * checkRulerMm / CHECK_LENGTHS.mm : value
+  return value !== null && checkRulerMm !== null ? value * checkRulerMm / CHECK_RULER_MM : value
 }
 
 const WITH_PHOTO: readonly MarkKind[] = ['crack', 'stain']
