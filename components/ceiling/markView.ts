@@ -27,7 +27,7 @@ export interface MarkVerdictWords { word: string, tone: MarkTone, says: string, 
 export function markVerdict({ mark, trend, today, loadLinks }: Pick<MarkPage, 'mark' | 'trend' | 'today' | 'loadLinks'>, system: UnitSystem): MarkVerdictWords {
   const due = mark.nextReadingOn
   const doNow = mark.state === 'closed' || !due ? undefined : due < today ? `A reading was due on ${formatDay(due)}. Take it, or say that it cannot be taken.` : `Next reading ${formatDay(due)}.`
-  const why = movementSentence(trend, loadLinks, mark.kind, system)
+  const why = movementSentence(trend, loadLinks, mark.kind, system, today)
   if (mark.joinedInto) return { word: 'Joined', tone: 'unknown', says: ': it counts as part of another mark.', why: 'Its readings, photos and reports stand there.' }
   if (mark.state === 'closed') return { word: 'Closed', tone: 'unknown', says: ': this mark is no longer followed.', why }
   if (mark.state === 'repaired') return { word: 'Repaired', tone: 'unknown', says: ': readings start anew. What was there before stays on record.', why, doNow }

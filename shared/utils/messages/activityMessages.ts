@@ -31,10 +31,10 @@ export function rateWords(kind: MarkKind, perYear: number, system: UnitSystem): 
   return kind === 'nail-pops' ? `${formatNumber(perYear, 1)}${NO_BREAK_SPACE}pops a year` : formatRate(perYear, system)
 }
 
-function tooFewSentence(trend: TooFewReadings): string {
+function tooFewSentence(trend: TooFewReadings, today: string | null): string {
   const have = `${countWords(trend.readingCount, 'reading')} so far.`
   const missing = trend.missing > 0 ? ` ${countWords(trend.missing, 'more reading', 'more readings')} needed` : ' More time needed'
-  const until = trend.enoughOn === null ? '' : `, the last not before ${formatDay(trend.enoughOn)}`
+  const until = trend.enoughOn === null || (today !== null && trend.enoughOn <= today) ? '' : `, the last not before ${formatDay(trend.enoughOn)}`
   return `${have}${missing}${until}. Until then nobody can tell whether it moves.`
 }
 
@@ -57,8 +57,8 @@ const seasonSentence = ({ seasonRuledOutFrom }: MeasuredTrend) =>
   seasonRuledOutFrom === null ? '' : ` A season cannot be ruled out before ${formatDay(seasonRuledOutFrom)}.`
 
 /** What the readings say, with rate, range, number and span; or that they do not say it yet, and when they will. */
-export function trendSentence(trend: MarkTrend, kind: MarkKind, system: UnitSystem = 'us'): string {
-  if (trend.kind === 'too few readings') return tooFewSentence(trend)
+export function trendSentence(trend: MarkTrend, kind: MarkKind, system: UnitSystem = 'us', today: string | null = null): string {
+  if (trend.kind === 'too few readings') return tooFewSentence(trend, today)
   return `${directionSentence(trend, kind, system)} ${rangeSentence(trend, kind, system)}${seasonSentence(trend)}`
 }
 
@@ -67,8 +67,9 @@ export function detectableSentence(detectable: DetectableRate, kind: MarkKind, s
   return `These readings would show a steady change of ${rateWords(kind, detectable.perYear, system)} or more. ${why}`
 }
 
-export function nextBestSentence(nextBestOn: string): string {
-  return `A reading on ${formatDay(nextBestOn)} would tell most.`
+/** A best day that has gone by is today. */
+export function nextBestSentence(nextBestOn: string, today: string): string {
+  return nextBestOn <= today ? 'A reading now would tell most.' : `A reading on ${formatDay(nextBestOn)} would tell most.`
 }
 
 const LINK_WORDS: Record<LoadLink['verdict'], string> = {

@@ -40,9 +40,9 @@ function suddenPart({ sudden }: MarkTrend, kind: MarkKind, system: UnitSystem): 
 }
 
 /** What moves, since when that is sure, what it followed, and what cannot be told yet: one sentence. */
-export function movementSentence(trend: MarkTrend, links: readonly LoadLink[], kind: MarkKind, system: UnitSystem = 'us'): string {
+export function movementSentence(trend: MarkTrend, links: readonly LoadLink[], kind: MarkKind, system: UnitSystem = 'us', today: string | null = null): string {
   const sudden = suddenPart(trend, kind, system)
-  if (trend.kind === 'too few readings') return [sudden && `${sudden}.`, trendSentence(trend, kind, system)].filter(Boolean).join(' ')
+  if (trend.kind === 'too few readings') return [sudden && `${sudden}.`, trendSentence(trend, kind, system, today)].filter(Boolean).join(' ')
   const parts = [movementPart(trend, kind, system), loadPart(links, system), seasonPart(trend)].filter(Boolean).join('; ')
   if (sudden && trend.activity === 'active') return `${parts}. ${sudden}.`
   return sudden ? `${sudden}. Before that and with it: ${parts.charAt(0).toLowerCase()}${parts.slice(1)}.` : `${parts}.`

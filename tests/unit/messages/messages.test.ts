@@ -132,6 +132,7 @@ describe('Sentences of a trend', () => {
     expect(plain(trendSentence(markTrend(monthly(2, () => 1)), 'crack')))
       .toBe('2 readings so far. 4 more readings needed, the last not before 1 Apr 2026. Until then nobody can tell whether it moves.')
     expect(trendSentence(markTrend([]), 'crack')).toContain('more readings needed.')
+    expect(trendSentence(markTrend(monthly(2, () => 1)), 'crack', 'us', '2199-01-01')).toMatch(/more readings needed\. Until then/)
   })
 
   it('say that time is missing when readings are not', () => {
@@ -159,7 +160,8 @@ describe('Sentences of a trend', () => {
   it('tell what could be seen and when to read next', () => {
     expect(plain(detectableSentence({ perYear: 2.4, limitedBy: 'season' }, 'crack', 'metric'))).toBe('These readings would show a steady change of 2.4 mm a year or more. A full year of readings will sharpen this.')
     expect(detectableSentence({ perYear: 2.4, limitedBy: 'readings' }, 'crack')).toContain('Sharper or more readings')
-    expect(plain(nextBestSentence('2026-05-04'))).toBe('A reading on 4 May 2026 would tell most.')
+    expect(plain(nextBestSentence('2026-05-04', '2026-05-03'))).toBe('A reading on 4 May 2026 would tell most.')
+    expect(nextBestSentence('2026-05-04', '2026-05-04')).toBe('A reading now would tell most.')
   })
 
   it('a link to a load blames nobody', () => {
