@@ -10,6 +10,8 @@ import * as judging from './0008Judging'
 import * as invitationTerms from './0009InvitationTerms'
 import * as lookedBefore from './0012LookedBefore'
 import * as followedChanges from './0013FollowedChanges'
+import * as signUps from './0014SignUps'
+import * as strongbackOpinion from './0020StrongbackOpinion'
 import * as codeBasis from './0022CodeBasis'
 import * as inventory from './0024Inventory'
 import * as keepClearNotices from './0027KeepClearNotices'
@@ -18,8 +20,6 @@ import * as hindsight from './0030Hindsight'
 import * as unloadTrials from './0031UnloadTrials'
 import * as markRepairs from './0032MarkRepairs'
 import * as joinedMarks from './0033JoinedMarks'
-import * as signUps from './0014SignUps'
-import * as strongbackOpinion from './0020StrongbackOpinion'
 
 /** A fixed list, so that the server bundle and the scripts share it. Never edit one that has run; add the next. */
 export const migrations: Record<string, Migration> = {
@@ -34,6 +34,8 @@ export const migrations: Record<string, Migration> = {
   '0009InvitationTerms': invitationTerms,
   '0012LookedBefore': lookedBefore,
   '0013FollowedChanges': followedChanges,
+  '0014SignUps': signUps,
+  '0020StrongbackOpinion': strongbackOpinion,
   '0022CodeBasis': codeBasis,
   '0024Inventory': inventory,
   '0027KeepClearNotices': keepClearNotices,
@@ -42,6 +44,4 @@ export const migrations: Record<string, Migration> = {
   '0031UnloadTrials': unloadTrials,
   '0032MarkRepairs': markRepairs,
   '0033JoinedMarks': joinedMarks,
-  '0014SignUps': signUps,
-  '0020StrongbackOpinion': strongbackOpinion,
 }
