@@ -50,7 +50,7 @@ describe.each(screens)('the owner on a %s', (name, screen) => {
     await page.getByText('From 0.3 to 3, please.').first().waitFor()
     await page.getByLabel('Smallest sudden jump').fill('1')
     await page.getByRole('button', { name: 'See what would have changed' }).click()
-    await page.getByText(/alarms instead of/).waitFor()
+    await page.getByText(/Alarms: \d+ instead of \d+/).waitFor()
     await page.getByRole('button', { name: 'Keep these limits' }).click()
     await page.getByText('Kept. Every mark is judged by these limits from now on.').waitFor()
 

@@ -22,7 +22,8 @@ export function nextStep(adviceCode: AdviceCode, { subjectKind, subjectId, unitI
     case 'take-reading': return onMark('Take the reading', '/reading', home)
     case 'watch-and-check-above': return onMark('See the mark', '', { label: 'See why', to: `/findings/${findingId}` })
     case 'leave-room-and-call': return onMark('Act now: see what was reported', '', { label: 'Act now: see what was reported', to: `/findings/${findingId}` })
-    case 'unload-then-engineer': case 'look-then-engineer': case 'find-the-leak': return { label: 'Plan the job', to: `/jobs/new?unit=${unitId}&finding=${findingId}` }
+    case 'unload-then-engineer': case 'look-then-engineer': return { label: 'Call an engineer: plan the visit', to: `/jobs/new?unit=${unitId}&finding=${findingId}` }
+    case 'find-the-leak': return { label: 'Plan the job', to: `/jobs/new?unit=${unitId}&finding=${findingId}` }
     case 'finish-job': return subjectKind === 'job' ? { label: 'Open the job', to: `/jobs/${subjectId}` } : { label: 'See the jobs', to: '/upkeep' }
     case 'find-contact': return { label: 'See the home’s people', to: `/units/${unitId}` }
   }
